@@ -1,0 +1,89 @@
+import type { DeviceModel, Key } from '@coaxwain/models'
+import { doubtOf, fitted, formState, functionState, mayLend } from '@coaxwain/shelf'
+import type { Snapshot, Uid, Unit } from '@coaxwain/shelf'
+
+/**
+ * Units that a search cannot tell apart by what they can do: one model with the same things done to it.
+ * Their faults and histories differ, and so does the doubt that each brings.
+ */
+export interface Variant {
+  readonly id: string
+  readonly model: Uid
+  readonly device: DeviceModel
+  readonly units: readonly Unit[]
+  readonly powered: boolean
+}
+
+/** Controls that a missing remote leaves standing where they are. */
+function stuckControls(device: DeviceModel, unit: Unit): Readonly<Record<Key, string>> {
+  if (unit.remotePresent || device.remote !== 'needed') return {}
+  const stuck = device.controls.filter((c) => c.access === 'remote' || c.access === 'menu')
+  return Object.fromEntries(stuck.map((c) => [c.key, unit.stands[c.key] ?? '']))
+}
+
+/** A control out of reach keeps the one position in which it stands; none when that is not known. */
+function withStuck(device: DeviceModel, stuck: Readonly<Record<Key, string>>): DeviceModel {
+  if (Object.keys(stuck).length === 0) return device
+  return {
+    ...device,
+    controls: device.controls.map((c) =>
+      c.key in stuck && (c.kind === 'positions' || c.kind === 'auto')
+        ? { ...c, positions: c.positions.filter((p) => p.key === stuck[c.key]) }
+        : c,
+    ) as DeviceModel['controls'],
+  }
+}
+
+const needsPower = (device: DeviceModel): boolean =>
+  device.mains !== undefined ||
+  device.pack !== undefined ||
+  device.functions.some((f) => f.power !== 'none')
+
+/** The variant of one unit alone, for a source or a display. Throws when the unit is a lead. */
+export function variantOf(snapshot: Snapshot, unit: Unit): Variant {
+  const model = snapshot.models[unit.model]
+  if (model?.type !== 'device') throw new Error(`unit ${unit.uid} is not a device`)
+  const device = withStuck(fitted(model, unit.modifications), stuckControls(model, unit))
+  return {
+    id: `unit:${unit.uid}`,
+    model: unit.model,
+    device,
+    units: [unit],
+    powered: needsPower(device),
+  }
+}
+
+/** All units that may be lent, put together by what they can do. */
+export function compileVariants(snapshot: Snapshot, leftOut: ReadonlySet<Uid>): Variant[] {
+  const groups = new Map<string, Unit[]>()
+  for (const unit of snapshot.units) {
+    const model = snapshot.models[unit.model]
+    if (model?.type !== 'device' || leftOut.has(unit.uid) || !mayLend(unit)) continue
+    const key = JSON.stringify([unit.model, unit.modifications, stuckControls(model, unit)])
+    const group = groups.get(key)
+    if (group) group.push(unit)
+    else groups.set(key, [unit])
+  }
+  return [...groups].map(([id, units]) => ({ ...variantOf(snapshot, units[0] as Unit), id, units }))
+}
+
+/** What one way through a unit leans on: forms on ports, and functions. */
+export interface Leans {
+  readonly contacts: readonly { readonly jack: Key; readonly port: Key }[]
+  readonly functions: readonly Key[]
+}
+
+/** Doubt that one unit brings when it is used so; null when something in it is dead. */
+export function unitDoubt(unit: Unit, leans: Leans, toBeChecked: number): number | null {
+  const states = [
+    ...leans.contacts.map(({ jack, port }) => formState(unit, jack, port)),
+    ...leans.functions.map((key) => functionState(unit, key)),
+  ]
+  let sum = toBeChecked
+  for (const state of states) {
+    const doubt = doubtOf(unit, state)
+    if (doubt === null) return null
+    sum += doubt
+  }
+  return sum
+}

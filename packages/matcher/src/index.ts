@@ -1,0 +1,1 @@
+export { createSearch, findHookups, type HookupSearch } from './create-search'

@@ -1,0 +1,196 @@
+import { LIMITS } from '@coaxwain/shelf'
+import type { SwitchVolt } from '@coaxwain/signal'
+import type { Face, FacePort } from '../compile/face'
+import type { Drawer } from './drawer'
+import { Router, usageOf, type Routing, type WantedWire } from './route'
+import {
+  lumaOnly,
+  soundWires,
+  wholePicture,
+  type PictureMeeting,
+  type SoundMeeting,
+} from './wanted'
+
+/** Everything that is plugged between two faces, and what comes across. */
+export interface Join {
+  readonly out: Face
+  readonly into: Face
+  readonly wires: readonly WantedWire[]
+  readonly routing: Routing
+  readonly pieces: number
+  /** Pieces of scarce sorts that it takes, by sort. */
+  readonly scarce: ReadonlyMap<number, number>
+  readonly picture: PictureMeeting | null
+  readonly sound: SoundMeeting | null
+  readonly volts: readonly SwitchVolt[]
+  /** Direct current comes up the cable, and nobody knows whether the input stands it. */
+  readonly dcUnknown: boolean
+}
+
+export interface Wanted {
+  readonly picture: boolean
+  readonly sound: boolean
+}
+
+/** Twice the pieces of one link, for pictures and sounds that need several leads. */
+const MOST_PIECES = 2 * LIMITS.piecesInLink
+
+/** Ways that need so many pieces more than the shortest are not sought in a well-filled drawer. */
+const SPARE_PIECES = 2
+
+/** Works out once per pair of faces what can be plugged between them. */
+export class JoinTable {
+  private readonly known = new Map<string, readonly Join[]>()
+  private readonly single = new Map<string, number>()
+  /** True once a longer way round a scarce piece was not sought. */
+  capped = false
+
+  /** `scarce`: sorts of pieces of which there may be too few; ways without them are kept apart. */
+  constructor(
+    readonly drawer: Drawer,
+    private readonly scarce: ReadonlySet<number>,
+  ) {}
+
+  get hasScarce(): boolean {
+    return this.scarce.size > 0
+  }
+
+  /** Every way worth knowing, the fewest pieces first; none when the two cannot be linked. */
+  between(out: Face, into: Face, wanted: Wanted): readonly Join[] {
+    const key = `${out.id}>${into.id}:${wanted.picture ? 'p' : ''}${wanted.sound ? 's' : ''}`
+    const known = this.known.get(key)
+    if (known) return known
+    const made = this.work(out, into, wanted)
+    this.known.set(key, made)
+    return made
+  }
+
+  private work(out: Face, into: Face, wanted: Wanted): readonly Join[] {
+    const sound = wanted.sound ? soundWires(out, into) : null
+    if (wanted.sound && !sound) return []
+    if (!wanted.picture) return sound ? this.lay(out, into, sound.wires, null, sound.meeting) : []
+    const meetings: readonly (readonly [PictureMeeting, WantedWire[] | null])[] = [
+      ['whole', wholePicture(out, into)],
+      ['luma-only', lumaOnly(out, into)],
+    ]
+    return meetings.flatMap(([meeting, wires]) =>
+      wires
+        ? this.lay(out, into, [...wires, ...(sound?.wires ?? [])], meeting, sound?.meeting ?? null)
+        : [],
+    )
+  }
+
+  private lay(
+    out: Face,
+    into: Face,
+    wires: readonly WantedWire[],
+    picture: PictureMeeting | null,
+    sound: SoundMeeting | null,
+  ): Join[] {
+    const least = Math.max(...wires.map((w) => this.leastFor(out, into, w)))
+    if (least === Infinity) return []
+    const kept: Join[] = []
+    for (let pieces = least; pieces <= MOST_PIECES; pieces++) {
+      if (kept[0] && pieces > kept[0].pieces + SPARE_PIECES && this.drawer.total > MOST_PIECES) {
+        this.capped ||= this.scarce.size > 0
+        break
+      }
+      new Router(this.drawer, out, into, wires, pieces, (routing) => {
+        const join = this.judge(out, into, wires, routing, picture, sound)
+        if (join && !kept.some((k) => noWorse(k, join))) kept.push(join)
+        return settled(kept, out)
+      }).run()
+      if (settled(kept, out)) break
+    }
+    return kept
+  }
+
+  /** The fewest pieces by which one wire alone can come about. */
+  private leastFor(out: Face, into: Face, wire: WantedWire): number {
+    const from = out.ports[wire.fromPort] as FacePort
+    const to = into.ports[wire.toPort] as FacePort
+    const key = JSON.stringify([from, to, wire.circuit, wire.fromContact, wire.toContact])
+    const known = this.single.get(key)
+    if (known !== undefined) return known
+    let least = Infinity
+    for (let pieces = 0; pieces <= LIMITS.piecesInLink && least === Infinity; pieces++) {
+      new Router(this.drawer, out, into, [wire], pieces, () => {
+        least = pieces
+        return true
+      }).run()
+    }
+    this.single.set(key, least)
+    return least
+  }
+
+  private judge(
+    out: Face,
+    into: Face,
+    wires: readonly WantedWire[],
+    routing: Routing,
+    picture: PictureMeeting | null,
+    sound: SoundMeeting | null,
+  ): Join | null {
+    const dc = this.directCurrent(out, into, wires, routing)
+    if (dc === 'harm') return null
+    const usage = usageOf(routing)
+    return {
+      out,
+      into,
+      wires,
+      routing,
+      pieces: routing.instances.length,
+      scarce: new Map([...usage].filter(([piece]) => this.scarce.has(piece))),
+      picture,
+      sound,
+      volts: this.volts(out, routing),
+      dcUnknown: dc === 'unknown',
+    }
+  }
+
+  private volts(out: Face, routing: Routing): readonly SwitchVolt[] {
+    const first = (routing.hops[0] ?? []).map((hop) => this.pieceAt(routing, hop.instance))
+    const supplied = first.flatMap((p) => p?.piece.suppliesVolts ?? [])
+    const passed = first.every((p) => p?.passesVolts) ? out.volts : []
+    return [...new Set([...passed, ...supplied])].sort()
+  }
+
+  private pieceAt(routing: Routing, instance: number) {
+    const turned = routing.instances[instance]
+    return turned ? this.drawer.pieces[turned.piece] : undefined
+  }
+
+  private directCurrent(
+    out: Face,
+    into: Face,
+    wires: readonly WantedWire[],
+    routing: Routing,
+  ): 'fine' | 'unknown' | 'harm' {
+    let worst: 'fine' | 'unknown' = 'fine'
+    for (const [i, wire] of wires.entries()) {
+      const from = out.ports[wire.fromPort] as FacePort
+      const to = into.ports[wire.toPort] as FacePort
+      const blocked = (routing.hops[i] ?? []).some(
+        (hop) => this.pieceAt(routing, hop.instance)?.piece.blocksDc,
+      )
+      const arrives = from.suppliesDc && !blocked
+      if (to.needsDc && !arrives) return 'harm'
+      if (!arrives || to.needsDc) continue
+      if (to.standsDc === 'no') return 'harm'
+      if (to.standsDc === 'unknown') worst = 'unknown'
+    }
+    return worst
+  }
+}
+
+const noWorse = (a: Join, b: Join): boolean =>
+  a.pieces <= b.pieces &&
+  b.volts.every((v) => a.volts.includes(v)) &&
+  (!a.dcUnknown || b.dcUnknown) &&
+  [...a.scarce].every(([piece, n]) => n <= (b.scarce.get(piece) ?? 0))
+
+/** Nothing better can come: no scarce piece used, all voltages across, no doubt. */
+const settled = (kept: readonly Join[], out: Face): boolean =>
+  kept.some(
+    (j) => j.scarce.size === 0 && !j.dcUnknown && out.volts.every((v) => j.volts.includes(v)),
+  )

@@ -1,0 +1,58 @@
+import type { Link, PieceUse, PortRef, Uid } from '@coaxwain/shelf'
+import type { Placed } from '../compile/face'
+import type { Drawer } from '../join/drawer'
+import type { Join } from '../join/join'
+
+interface End {
+  readonly unit: Uid
+  readonly placed: Placed
+}
+
+/** Numbers the pieces of a hookup: two of one sort are two copies, cores of one lead share its number. */
+export class LinkMaker {
+  private readonly copies = new Map<Uid, number>()
+  readonly links: Link[] = []
+
+  constructor(private readonly drawer: Drawer) {}
+
+  /** Adds the links of one join, and says which they are. */
+  add(join: Join, from: End, to: End): number[] {
+    const copies = join.routing.instances.map(({ piece }) => {
+      const { model } = this.drawer.pieces[piece]!
+      const copy = (this.copies.get(model) ?? 0) + 1
+      this.copies.set(model, copy)
+      return { model, copy }
+    })
+    const made: number[] = []
+    join.wires.forEach((wire, i) => {
+      const pieces = (join.routing.hops[i] ?? []).map((hop): PieceUse => ({
+        ...copies[hop.instance]!,
+        wayRound: join.routing.instances[hop.instance]!.wayRound,
+        inPlug: hop.inPlug,
+        outPlug: hop.outPlug,
+      }))
+      const circuit = { from: wire.circuit, to: wire.taken }
+      const link = {
+        from: { unit: from.unit, port: from.placed.ports[wire.fromPort] as string },
+        to: { unit: to.unit, port: to.placed.ports[wire.toPort] as string },
+        pieces,
+      }
+      const same = made.find((at) => sameWay(this.links[at] as Link, link))
+      if (same === undefined) {
+        made.push(this.links.length)
+        this.links.push({ ...link, circuits: [circuit] })
+      } else {
+        const before = this.links[same] as Link
+        this.links[same] = { ...before, circuits: [...before.circuits, circuit] }
+      }
+    })
+    return made
+  }
+}
+
+const samePort = (a: PortRef, b: PortRef): boolean => a.unit === b.unit && a.port === b.port
+
+const sameWay = (a: Omit<Link, 'circuits'>, b: Omit<Link, 'circuits'>): boolean =>
+  samePort(a.from, b.from) &&
+  samePort(a.to, b.to) &&
+  JSON.stringify(a.pieces) === JSON.stringify(b.pieces)

@@ -1,0 +1,209 @@
+import { jackOf, together, type Condition, type DeviceModel } from '@coaxwain/models'
+import type { Protection, Sound } from '@coaxwain/signal'
+import { accept, type Taken } from '../compile/accept'
+import { leave, type Leaving } from '../compile/leave'
+import type { Sig, SigTable } from '../compile/sig'
+import type { SoundEnd, Way } from '../compile/way'
+import type { Join, JoinTable } from '../join/join'
+import { leastApart } from './assign'
+import { pathOf, type Label, type SoundRoute, type SoundState, type Step } from './label'
+import { met, toMono, type SoundRoutes } from './sound-route'
+
+/** One way of getting from a label into a unit: what is plugged, what is taken, what sound came along. */
+export interface Entry {
+  readonly step: Step
+  /** Sound left where it waits. */
+  readonly left: SoundState
+  readonly boxes: number
+  readonly pieces: number
+  readonly doubt: number
+}
+
+const isEnd = (place: Way['soundFrom']): place is SoundEnd => place !== null && place !== 'picture'
+
+/** Protection that a function does not stand: a recorder's level control, a box without the handshake. */
+export function stopsAt(device: DeviceModel, way: Way, protection: Protection): boolean {
+  const { fn } = way
+  if (protection === 'agc-pulses') return fn.inputAgc === true
+  if (protection !== 'hdcp' || way.in === null) return false
+  const form = jackOf(device, way.in).form
+  return (form === 'hdmi' || form === 'dvi') && fn.hdcp === false
+}
+
+/** Nobody has said whether the handshake is completed: the answer may stand, with doubt. */
+export const handshakeUnknown = (way: Way, protection: Protection): boolean =>
+  protection === 'hdcp' &&
+  way.in !== null &&
+  ['hdmi', 'dvi'].includes(jackOf(way.variant.device, way.in).form) &&
+  way.fn.hdcp === undefined
+
+/** Sound shares its socket with the picture, so that one plug takes both or none. */
+function shareSocket(way: Way, side: 'into' | 'from'): boolean {
+  const face = way[side]?.face
+  return face !== undefined && face.sound.some((s) => face.picture.some((p) => p.port === s.port))
+}
+
+export class Expander {
+  private readonly takenBy = new Map<string, readonly Taken[]>()
+  private readonly leavingBy = new Map<string, readonly Leaving[]>()
+
+  constructor(
+    private readonly joins: JoinTable,
+    private readonly sounds: SoundRoutes,
+    private readonly sigs: SigTable,
+    private readonly scarceUnits: ReadonlySet<string>,
+  ) {}
+
+  /** Every way of entering a unit from a label. */
+  entries(label: Label, way: Way): Entry[] {
+    if (!label.way.from || !way.into || stopsAt(way.variant.device, way, label.sig.protection))
+      return []
+    const unknown = handshakeUnknown(way, label.sig.protection) ? 1 : 0
+    return this.meetings(label, way).flatMap(({ join, route, sound, left }) =>
+      this.taken(way, label.sig, join).map((taken): Entry => {
+        const heard = way.soundFrom === 'picture' && !taken.heard ? 'none' : sound
+        return {
+          step: { join, taken, soundRoute: route, soundIn: heard },
+          left,
+          boxes: route?.boxes ?? 0,
+          pieces: join.pieces + (route?.pieces ?? 0),
+          doubt: unknown + (join.dcUnknown ? 1 : 0) + (route?.doubt ?? 0),
+        }
+      }),
+    )
+  }
+
+  private meetings(
+    label: Label,
+    way: Way,
+  ): { join: Join; route: SoundRoute | null; sound: Sound; left: SoundState }[] {
+    const out = label.way.from!.face
+    const into = way.into!.face
+    const waits = label.sound.kind === 'waits' ? label.sound : null
+    if (!isEnd(way.soundFrom)) {
+      if (way.soundFrom === 'picture' && label.sig.sound === 'none') return []
+      const left = waits && this.mayStay(label) ? waits : NONE
+      return this.joins
+        .between(out, into, { picture: true, sound: false })
+        .map((join) => ({ join, route: null, sound: label.sig.sound, left }))
+    }
+    if (!waits) return []
+    const together =
+      waits.at === label
+        ? this.joins.between(out, into, { picture: true, sound: true }).map((join) => ({
+            join,
+            route: null,
+            sound: met(waits.sound, join.sound ?? 'mono'),
+            left: NONE,
+          }))
+        : []
+    return [...together, ...this.apart(label, way, waits)]
+  }
+
+  /** Picture and sound by links of their own. */
+  private apart(label: Label, way: Way, waits: Extract<SoundState, { kind: 'waits' }>) {
+    const out = label.way.from!.face
+    const into = way.into!.face
+    const from = waits.at.way
+    if (shareSocket(way, 'into') || (waits.at === label && shareSocket(from, 'from'))) return []
+    const routes = this.sounds.between(from.from!.face, waits.sound, into)
+    // Between the same two units a straight route is a link of both, found already.
+    const own = waits.at === label ? routes.filter((r) => r.via !== null) : routes
+    if (own.length === 0) return []
+    const pictures = this.joins.between(out, into, { picture: true, sound: false })
+    return pictures.flatMap((join) =>
+      own.map((route) => ({ join, route, sound: route.sound, left: NONE })),
+    )
+  }
+
+  /** Sound may be left behind only where the picture's plug does not take its socket. */
+  private mayStay(label: Label): boolean {
+    return (
+      label.sound.kind === 'waits' && (label.sound.at !== label || !shareSocket(label.way, 'from'))
+    )
+  }
+
+  private taken(way: Way, sig: Sig, join: Join): readonly Taken[] {
+    const lumaOnly = join.picture === 'luma-only'
+    const key = `${way.variant.id} ${way.fn.key} ${way.in ?? ''} ${sig.id} ${lumaOnly ? 'y' : ''} ${join.volts.join()}`
+    const known = this.takenBy.get(key)
+    if (known) return known
+    const made = accept(
+      way.variant.device,
+      way.fn,
+      way.in ?? '',
+      { sig, lumaOnly, volts: join.volts },
+      (from, carrier) => this.sigs.intern({ ...from, carrier }),
+    )
+    this.takenBy.set(key, made)
+    return made
+  }
+
+  /** The labels that leave a unit by a way, after an entry. */
+  leave(label: Label, way: Way, entry: Entry, add: (made: Label) => void): void {
+    if (!way.out) return
+    const { taken, join, soundIn } = entry.step
+    const inside = way.soundMono ? toMono(soundIn) : soundIn
+    const lumaOnly = join.picture === 'luma-only'
+    const unitDoubt = this.unitDoubt(label, way)
+    if (unitDoubt === null) return
+    const riding: Sound = way.soundTo === 'picture' ? inside : 'none'
+    for (const leaving of this.leaving(way, taken, lumaOnly, riding)) {
+      const stand = settle(way, taken.stand, leaving.stand)
+      if (!stand) continue
+      const made: Omit<Label, 'sound'> & { sound: SoundState } = {
+        way,
+        sig: leaving.sig,
+        stand,
+        sound: entry.left,
+        depth: label.depth + 1,
+        prev: label,
+        step: entry.step,
+        boxes: label.boxes + entry.boxes + (way.variant.powered ? 1 : 0),
+        pieces: label.pieces + entry.pieces + (way.variant.powered ? 0 : 1),
+        doubt: label.doubt + entry.doubt + unitDoubt,
+      }
+      if (isEnd(way.soundTo)) {
+        if (inside === 'none') continue
+        made.sound = { kind: 'waits', sound: inside, at: made }
+      } else if (way.soundTo === 'picture' && leaving.sig.sound === 'none') {
+        continue
+      }
+      add(made)
+    }
+  }
+
+  /** Doubt that one more unit adds; exact where a chain may want more of a sort than there are. */
+  private unitDoubt(label: Label, way: Way): number | null {
+    if (!this.scarceUnits.has(way.variant.id)) return way.offers[0]?.doubt ?? 0
+    const before = pathOf(label)
+      .slice(1)
+      .map((l) => l.way)
+      .filter((w) => w.variant === way.variant)
+    const after = leastApart([...before, way])
+    return after && after.doubt - (leastApart(before)?.doubt ?? 0)
+  }
+
+  private leaving(way: Way, taken: Taken, lumaOnly: boolean, sound: Sound): readonly Leaving[] {
+    const give = way.out!
+    const key = `${way.id} ${taken.sig.id} ${taken.colour ? 'c' : ''} ${lumaOnly ? 'y' : ''} ${sound}`
+    const known = this.leavingBy.get(key)
+    if (known) return known
+    const made = leave(
+      way.variant.device,
+      way.fn,
+      give,
+      { sig: taken.sig, colour: taken.colour, lumaOnly, sound },
+      this.sigs,
+    )
+    this.leavingBy.set(key, made)
+    return made
+  }
+}
+
+const NONE: SoundState = { kind: 'none' }
+
+/** The positions of a unit once its way, what it takes and what it gives are put together. */
+export function settle(way: Way, ...more: readonly Condition[]): Condition | null {
+  return more.reduce<Condition | null>((all, next) => all && together(all, next), way.stand)
+}

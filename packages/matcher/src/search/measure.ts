@@ -1,0 +1,33 @@
+import type { DisplayFacts } from '@coaxwain/models'
+import {
+  FORM_MHZ,
+  poorer,
+  SOUND_RANK,
+  TIER,
+  type PictureForm,
+  type Quality,
+  type Sound,
+} from '@coaxwain/signal'
+
+/**
+ * The picture axis: the tier of the poorest form on the way times 100, plus ten times the luma bandwidth.
+ * Named degradations take off 30 each, which keeps them inside their tier (an ordering, common practice, no source).
+ */
+export const pictureScore = (quality: Quality, lumaMhz: number, degradations: number): number =>
+  TIER[quality] * 100 + Math.round(lumaMhz * 10) - 30 * degradations
+
+/** The best score that a signal can still have: nothing lost is regained. */
+export const bestScore = (quality: Quality, lumaMhz: number): number =>
+  pictureScore(quality, lumaMhz, 0)
+
+export const qualityAt = (poorest: Quality, form: PictureForm): Quality => poorer(poorest, form)
+
+export const formMhz = (form: PictureForm): number => (form === 'rf' ? Infinity : FORM_MHZ[form])
+
+/** What a display's own loudspeakers make of a sound. */
+export function fromLoudspeakers(sound: Sound, display: DisplayFacts): Sound {
+  if (display.loudspeakers === 'none') return 'none'
+  return display.loudspeakers === 'mono' && sound === 'stereo' ? 'mono' : sound
+}
+
+export const soundScore = (sound: Sound): number => SOUND_RANK[sound]

@@ -1,0 +1,196 @@
+import type { Obstacle, Question, Snapshot, Uid, Unit } from '@coaxwain/shelf'
+import { TIER, type Quality } from '@coaxwain/signal'
+import { FaceTable } from '../compile/face'
+import { SigTable } from '../compile/sig'
+import { compileVariants, variantOf, type Variant } from '../compile/variant'
+import { WayMaker, type Way } from '../compile/way'
+import { compileDrawer, type Drawer } from '../join/drawer'
+import { JoinTable } from '../join/join'
+import { obstaclesBetween } from '../reasons/obstacles'
+import { assign } from './assign'
+import { Finisher } from './finish'
+import type { Finished } from './label'
+import { Search } from './search'
+import { bestOf, startLabels } from './start'
+
+/** How often the search may be run again because units or pieces ran short. */
+const MOST_ROUNDS = 6
+
+export interface Solved {
+  readonly found: Finished
+  readonly units: ReadonlyMap<Way, Unit>
+}
+
+export interface Solving {
+  readonly source: Variant
+  readonly display: Variant
+  readonly drawer: Drawer
+  readonly best: { readonly source: Quality; readonly display: Quality; readonly sound: boolean }
+}
+
+/** A search that can be run in slices, and again with exact counts where the shelf ran short. */
+export class Solver {
+  readonly frame: Solving
+  private readonly starts: readonly Way[]
+  private readonly ends: readonly Way[]
+  /** With the harmful ones, which are reasons. */
+  private readonly allEnds: readonly Way[]
+  private readonly boxes: readonly Way[]
+  private readonly soundBoxes: readonly Way[]
+  private readonly speakers: readonly Way[]
+  private readonly scarceUnits = new Set<string>()
+  private readonly scarcePieces = new Set<number>()
+  private readonly sigs = new SigTable()
+  private search: Search
+  private joins: JoinTable
+  private round = 1
+  private spent = 0
+  private cut = false
+  solved: readonly Solved[] | null = null
+
+  constructor(
+    snapshot: Snapshot,
+    private readonly question: Question,
+    private readonly budget: number,
+  ) {
+    const unit = (uid: Uid): Unit => {
+      const found = snapshot.units.find((u) => u.uid === uid)
+      if (!found) throw new Error(`no unit ${uid}`)
+      return found
+    }
+    const leftOut = new Set([...question.avoid, question.source.unit, question.display.unit])
+    const source = variantOf(snapshot, unit(question.source.unit))
+    const display = variantOf(snapshot, unit(question.display.unit))
+    const maker = new WayMaker(new FaceTable())
+    const variants = compileVariants(snapshot, leftOut)
+    const ways = variants.map((v) => ({
+      pictures: maker.waysOf(v).filter(harmless),
+      sounds: maker.soundWaysOf(v).filter(harmless),
+    }))
+    this.starts = maker
+      .waysOf(source)
+      .filter((w) => w.fn.key === question.source.playing && harmless(w))
+    this.allEnds = maker
+      .waysOf(display)
+      .filter(
+        (w) =>
+          w.fn.kind === 'shows' &&
+          w.in !== null &&
+          (question.display.input ?? w.fn.key) === w.fn.key,
+      )
+    this.ends = this.allEnds.filter(harmless)
+    this.boxes = ways.flatMap((w) =>
+      w.pictures.filter(
+        (x) => x.into !== null && x.from !== null && x.in !== null && x.out !== null,
+      ),
+    )
+    const sounds = ways.flatMap((w) => w.sounds)
+    this.soundBoxes = sounds.filter((w) => w.soundTo !== null)
+    this.speakers = sounds.filter((w) => w.soundTo === null)
+    const drawer = compileDrawer(snapshot, leftOut, question.assumedLeads)
+    const played = bestOf(this.starts, question.material)
+    this.frame = {
+      source,
+      display,
+      drawer,
+      best: {
+        source: played.quality,
+        display: bestShown(this.ends),
+        sound:
+          played.sound &&
+          (display.device.display?.loudspeakers !== 'none' || this.speakers.length > 0),
+      },
+    }
+    this.joins = new JoinTable(drawer, this.scarcePieces)
+    this.search = this.begin()
+  }
+
+  private begin(): Search {
+    return new Search(
+      {
+        starts: startLabels(this.starts, this.question.material, this.sigs),
+        boxes: this.boxes,
+        ends: this.ends,
+        soundBoxes: this.soundBoxes,
+        speakers: this.speakers,
+        joins: this.joins,
+        sigs: this.sigs,
+        finisher: new Finisher(this.question.demands, this.speakers),
+        scarceUnits: new Set(this.scarceUnits),
+      },
+      this.budget - this.spent,
+    )
+  }
+
+  get done(): boolean {
+    return this.solved !== null
+  }
+
+  get work(): number {
+    return this.spent + this.search.work
+  }
+
+  get complete(): boolean {
+    return !this.cut && !this.search.cut && !this.joins.capped
+  }
+
+  step(expansions: number): void {
+    if (this.solved) return
+    this.search.step(expansions)
+    if (this.search.done) this.settle()
+  }
+
+  /** Takes what is found, or starts again where something was used more often than it is there. */
+  private settle(): void {
+    const stock = (piece: number): number => this.frame.drawer.pieces[piece]?.stock ?? 0
+    const solved: Solved[] = []
+    let short = false
+    for (const found of this.search.best()) {
+      const result = assign(found, stock, this.scarceUnits)
+      if ('units' in result) {
+        solved.push({ found, units: result.units })
+        continue
+      }
+      short = true
+      for (const id of result.short.variants) this.scarceUnits.add(id)
+      for (const piece of result.short.pieces) this.scarcePieces.add(piece)
+    }
+    if (!short || this.round >= MOST_ROUNDS || this.search.cut) {
+      this.cut ||= short || this.search.cut
+      this.solved = solved
+      return
+    }
+    this.round++
+    this.spent += this.search.work
+    this.joins = new JoinTable(this.frame.drawer, new Set(this.scarcePieces))
+    this.search = this.begin()
+  }
+
+  /** Why the shelf does not do it, or what looks right and would harm. */
+  obstacles(): Obstacle[] {
+    const starts = startLabels(this.starts, this.question.material, this.sigs)
+    return obstaclesBetween(starts, this.allEnds, {
+      joins: this.joins,
+      sigs: this.sigs,
+      solved: (this.solved?.length ?? 0) > 0,
+    })
+  }
+
+  /** The best so far, as far as units and pieces go round. */
+  soFar(): readonly Solved[] {
+    if (this.solved) return this.solved
+    const stock = (piece: number): number => this.frame.drawer.pieces[piece]?.stock ?? 0
+    return this.search.best().flatMap((found) => {
+      const result = assign(found, stock, this.scarceUnits)
+      return 'units' in result ? [{ found, units: result.units }] : []
+    })
+  }
+}
+
+const harmless = (way: Way): boolean => way.harm === null
+
+const bestShown = (ends: readonly Way[]): Quality =>
+  ends.reduce<Quality>((best, way) => {
+    const form = way.into?.face.form ?? 'none'
+    return TIER[form] > TIER[best] ? form : best
+  }, 'none')

@@ -1,0 +1,4 @@
+export * from './levels'
+export * from './money'
+export * from './ranges'
+export * from './units'

@@ -1,0 +1,6 @@
+export * from './fitted'
+export * from './hookup'
+export * from './limits'
+export * from './states'
+export * from './unit'
+export * from './steps'

@@ -1,0 +1,10 @@
+/** The space that the search, the checker and the enumerator share. */
+export const LIMITS = {
+  boxesInLeg: 6,
+  piecesInLink: 4,
+  leadsInLink: 2,
+  soundOnlyBoxes: 1,
+  /** Label expansions, never time. */
+  budget: 200_000,
+  hookupsShown: 12,
+} as const

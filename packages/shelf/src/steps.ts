@@ -1,0 +1,272 @@
+import {
+  controlOf,
+  portOf,
+  type DeviceModel,
+  type PieceModel,
+  type PlugColour,
+} from '@coaxwain/models'
+import { isSoundCircuit, type Circuit } from '@coaxwain/signal'
+import { fitted } from './fitted'
+import type { Hookup, Link, Setting } from './hookup'
+import type { Snapshot, Uid, Unit } from './unit'
+
+/** A code with the details that its sentence needs. */
+export interface Say {
+  readonly code: string
+  readonly details: Readonly<Record<string, string | number>>
+}
+
+/** One run of a cable: from a port or piece to the next piece or port. */
+export interface Segment {
+  readonly link: number
+  /** 0 from the first port to the first piece and through it, and so on. */
+  readonly index: number
+}
+
+/** One act, in the order in which it is done. Joins are drawn round, settings square. */
+export interface HookupStep {
+  readonly number: number
+  readonly kind: 'check' | 'fetch' | 'join' | 'set'
+  readonly say: Say
+  readonly lines: readonly Say[]
+  readonly segments: readonly Segment[]
+  /** Indices into the settings of the hookup. */
+  readonly settings: readonly number[]
+}
+
+type Draft = Omit<HookupStep, 'number'>
+
+/** What a hookup asks a person to do: check, fetch, plug, set. Pure; the same for screen, sheet and phone. */
+export function stepsOf(hookup: Hookup, snapshot: Snapshot): HookupStep[] {
+  const look = new Lookup(snapshot)
+  const drafts = [
+    ...checks(hookup),
+    fetch(hookup, look),
+    ...joins(hookup, look),
+    ...settings(hookup, look),
+  ]
+  return drafts.map((draft, i) => ({ ...draft, number: i + 1 }))
+}
+
+class Lookup {
+  constructor(private readonly snapshot: Snapshot) {}
+
+  unit(uid: Uid): Unit {
+    const unit = this.snapshot.units.find((u) => u.uid === uid)
+    if (!unit) throw new Error(`no unit ${uid}`)
+    return unit
+  }
+
+  device(uid: Uid): DeviceModel {
+    const unit = this.unit(uid)
+    const model = this.snapshot.models[unit.model]
+    if (model?.type !== 'device') throw new Error(`unit ${uid} is not a device`)
+    return fitted(model, unit.modifications)
+  }
+
+  piece(model: Uid): PieceModel {
+    const piece = this.snapshot.models[model]
+    if (piece?.type !== 'piece') throw new Error(`no piece ${model}`)
+    return piece
+  }
+
+  name(uid: Uid): string {
+    return this.device(uid).name
+  }
+
+  portLabel(ref: { unit: Uid; port: string }): string {
+    return portOf(this.device(ref.unit), ref.port).label
+  }
+}
+
+const plain = (code: string, details: Say['details'] = {}): Say => ({ code, details })
+
+/** Facts that nobody knows and that must be known before anything is touched. */
+function checks(hookup: Hookup): Draft[] {
+  return hookup.cautions
+    .filter((c) => c.code.startsWith('check-'))
+    .map((c) => ({
+      kind: 'check',
+      say: plain(`step.${c.code}`, c.details),
+      lines: [],
+      segments: [],
+      settings: [],
+    }))
+}
+
+function fetch(hookup: Hookup, look: Lookup): Draft {
+  const uids = [...new Set(hookup.legs.flatMap((l) => l.stops.map((s) => s.unit)))]
+  const units = uids.map((uid): Say => {
+    const place = look.unit(uid).place
+    const name = look.name(uid)
+    return place === null
+      ? plain('step.fetch.unit', { name })
+      : plain('step.fetch.unit-at', { name, place })
+  })
+  const copies = new Map<Uid, Set<number>>()
+  for (const piece of hookup.links.flatMap((l) => l.pieces)) {
+    copies.set(piece.model, (copies.get(piece.model) ?? new Set()).add(piece.copy))
+  }
+  const pieces = [...copies].map(([model, set]): Say => {
+    const name = look.piece(model).name
+    return set.size === 1
+      ? plain('step.fetch.piece', { name })
+      : plain('step.fetch.pieces', { name, count: set.size })
+  })
+  return {
+    kind: 'fetch',
+    say: plain('step.fetch'),
+    lines: [...units, ...pieces],
+    segments: [],
+    settings: [],
+  }
+}
+
+/** Links that are plugged in one go: the same way between the same two units, all picture or all sound. */
+function groupLinks(hookup: Hookup): number[][] {
+  const groups = new Map<string, number[]>()
+  hookup.links.forEach((link, i) => {
+    const sound = link.circuits.every((c) => isSoundCircuit(c.from))
+    const way = link.pieces.map((p) => [p.model, p.copy])
+    const key = JSON.stringify([link.from.unit, link.to.unit, sound, way, multiway(link)])
+    groups.set(key, [...(groups.get(key) ?? []), i])
+  })
+  return [...groups.values()]
+}
+
+/** A link of several circuits is one plug, whatever they are. */
+const multiway = (link: Link): boolean => link.circuits.length > 1
+
+function joins(hookup: Hookup, look: Lookup): Draft[] {
+  return groupLinks(hookup).flatMap((group) => {
+    const first = hookup.links[group[0]!]!
+    const segments = Math.max(1, first.pieces.length)
+    return Array.from({ length: segments }, (_, index): Draft => ({
+      kind: 'join',
+      say: joinSentence(hookup, group, index, look),
+      lines: joinLines(first, index, segments, look),
+      segments: group.map((link) => ({ link, index })),
+      settings: [],
+    }))
+  })
+}
+
+const USUAL_COLOUR: Partial<Record<Circuit, PlugColour>> = {
+  cvbs: 'yellow',
+  'audio-l': 'white',
+  'audio-mono': 'white',
+  'audio-r': 'red',
+  y: 'green',
+  pb: 'blue',
+  pr: 'red',
+  r: 'red',
+  g: 'green',
+  b: 'blue',
+}
+
+/** The colour of the plug that carries a link, where its piece has coloured plugs or its circuit a usual one. */
+export function plugColour(link: Link, piece: PieceModel | null): PlugColour | null {
+  const [use] = link.pieces
+  const own =
+    use && piece ? (use.wayRound === 'forward' ? piece.a : piece.b)[use.inPlug]?.colour : undefined
+  const [circuit] = link.circuits
+  return (
+    own ?? (circuit && link.circuits.length === 1 ? (USUAL_COLOUR[circuit.from] ?? null) : null)
+  )
+}
+
+function joinSentence(hookup: Hookup, group: readonly number[], index: number, look: Lookup): Say {
+  const links = group.map((i) => hookup.links[i]!)
+  const first = links[0]!
+  const ends = {
+    from: look.name(first.from.unit),
+    to: look.name(first.to.unit),
+    fromPort: joined(links.map((l) => look.portLabel(l.from))),
+    toPort: joined(links.map((l) => look.portLabel(l.to))),
+  }
+  if (first.pieces.length === 0) return plain('step.join.captive', ends)
+  const piece = look.piece(first.pieces[index]!.model)
+  const name = piece.name
+  if (first.pieces.length > 1) {
+    const next = first.pieces[index + 1]
+    if (index === 0) {
+      return plain('step.join.to-piece', { ...ends, name, next: look.piece(next!.model).name })
+    }
+    return next
+      ? plain('step.join.between', { name, next: look.piece(next.model).name })
+      : plain('step.join.from-piece', { ...ends, name })
+  }
+  const colours = links.map((l) => plugColour(l, piece))
+  const coloured = piece.a.length > 1 && colours.every((c) => c !== null)
+  if (!coloured) return plain('step.join.lead', { ...ends, name })
+  return links.length === 1
+    ? plain(`step.join.${colours[0]}`, ends)
+    : plain('step.join.colours', { ...ends, colours: colours.join(' ') })
+}
+
+const joined = (labels: readonly string[]): string => [...new Set(labels)].join(', ')
+
+/** What is easily got wrong at this plug. */
+function joinLines(link: Link, index: number, segments: number, look: Lookup): Say[] {
+  const lines: Say[] = []
+  const device = look.device(link.from.unit)
+  const [circuit] = link.circuits
+  if (index === 0 && circuit?.from === 'cvbs') {
+    const green = device.ports.find((p) =>
+      p.circuits.some((c) => c.circuit === 'y' && c.dir === 'out'),
+    )
+    if (green && green.key !== link.from.port)
+      lines.push(plain('step.not-the-green', { port: green.label }))
+  }
+  if (index === 0 && portOf(device, link.from.port).connector === 'f-socket')
+    lines.push(plain('step.screw-home'))
+  const target = portOf(look.device(link.to.unit), link.to.port)
+  if (index === segments - 1 && target.connector === 'screws')
+    lines.push(plain('step.aerial-lugs-off'))
+  return lines
+}
+
+/** One step a unit: the boxes on the way first, then the display, menus last because they need a picture. */
+function settings(hookup: Hookup, look: Lookup): Draft[] {
+  const order = hookup.legs[0]?.stops.map((s) => s.unit) ?? []
+  const inMenu = (s: Setting): boolean => s.access === 'menu' || s.access === 'remote'
+  const groups = new Map<string, number[]>()
+  hookup.settings.forEach((setting, i) => {
+    const key = `${inMenu(setting) ? 1 : 0} ${String(order.indexOf(setting.unit)).padStart(3, '0')} ${setting.unit}`
+    groups.set(key, [...(groups.get(key) ?? []), i])
+  })
+  return [...groups.entries()]
+    .sort(([a], [b]) => (a < b ? -1 : 1))
+    .map(([, indices]) => {
+      const unit = hookup.settings[indices[0]!]!.unit
+      return {
+        kind: 'set',
+        say: plain('step.set', { name: look.name(unit) }),
+        lines: indices.map((i) => settingSentence(hookup.settings[i]!, look)),
+        segments: [],
+        settings: indices,
+      }
+    })
+}
+
+/** A setting in words: control and position as the device itself calls them. */
+export function settingSentence(setting: Setting, look: { device(uid: Uid): DeviceModel }): Say {
+  const control = controlOf(look.device(setting.unit), setting.control)
+  const label =
+    control.kind === 'positions' || control.kind === 'auto'
+      ? (control.positions.find((p) => p.key === setting.position)?.label ?? setting.position)
+      : setting.position
+  const details = { control: control.label, position: label }
+  switch (control.kind) {
+    case 'channel':
+      return plain('setting.channel', details)
+    case 'tuned-to':
+      return plain(`setting.tune.${control.way}`, details)
+    case 'trim':
+      return plain(`setting.trim.${setting.position}`, details)
+    case 'auto':
+      return plain('setting.auto', details)
+    case 'positions':
+      return plain('setting.position', details)
+  }
+}

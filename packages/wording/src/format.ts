@@ -1,0 +1,30 @@
+import type { Locale } from './locale'
+import { localWord } from './words'
+
+export type Details = Readonly<Record<string, string | number>>
+
+/**
+ * Fills a message. `{name}` is a detail; `{n|# socket|# sockets}` chooses by number, `#` being the number;
+ * `[aerial]` is a word of the language. Nothing is ever evaluated, and details are never looked into again.
+ */
+export function format(template: string, details: Details, locale: Locale): string {
+  const worded = template.replace(/\[([A-Za-z]+)\]/g, (_, word: string) => localWord(word, locale))
+  return worded.replace(
+    /\{(\w+)(?:\|([^|{}]*)\|([^|{}]*))?\}/g,
+    (whole, name: string, one, many) => {
+      const value = details[name]
+      if (value === undefined) return whole
+      if (one === undefined) return shown(value, locale)
+      const form = String(value === 1 ? one : many)
+      return form.replaceAll('#', shown(value, locale))
+    },
+  )
+}
+
+/** Numbers by the language's rules, with a true minus sign; text as it is. */
+const shown = (value: string | number, locale: Locale): string =>
+  typeof value === 'number'
+    ? new Intl.NumberFormat(locale, { maximumFractionDigits: 2 })
+        .format(value)
+        .replace('-', '\u2212')
+    : value

@@ -1,0 +1,32 @@
+import { format, type Details } from './format'
+import type { Locale } from './locale'
+import { GENERAL } from './messages/general'
+import { HOOKUP, OBSTACLES } from './messages/hookup'
+import { MODELS } from './messages/models'
+import { PROBLEMS } from './messages/problems'
+import { SCREENS } from './messages/screens'
+import { SHELF } from './messages/shelf'
+
+export type { Details } from './format'
+export { chooseLocale, isLocale, LOCALES, type Locale } from './locale'
+
+/** Every message by its code. Each file under `messages/` holds one area; codes are unique over all. */
+export const MESSAGES = {
+  ...GENERAL,
+  ...HOOKUP,
+  ...OBSTACLES,
+  ...MODELS,
+  ...SHELF,
+  ...SCREENS,
+  ...PROBLEMS,
+} as const
+
+export type MessageCode = keyof typeof MESSAGES
+
+export const hasSentence = (code: string): code is MessageCode => Object.hasOwn(MESSAGES, code)
+
+/** The sentence for a code; a code without one gets the general sentence, never a bare code. */
+export const sentence = (code: string, details: Details, locale: Locale): string =>
+  hasSentence(code)
+    ? format(MESSAGES[code], details, locale)
+    : format(MESSAGES['general.unknown'], { code }, locale)

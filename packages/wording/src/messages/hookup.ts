@@ -1,0 +1,151 @@
+/** Steps, settings, cautions and reasons of a hookup. Port and control names are the device's own. */
+export const HOOKUP = {
+  'step.fetch': 'Fetch, with everything off.',
+  'step.fetch.unit': '{name}',
+  'step.fetch.unit-at': '{name}: {place}',
+  'step.fetch.piece': '{name}: [leads] drawer',
+  'step.fetch.pieces': '{count} of {name}: [leads] drawer',
+  'step.check-chassis':
+    'Before touching anything: find out whether the chassis of the {name} is joined to the [mains]. If you cannot tell, leave it and ask somebody trained.',
+  'step.check-dc':
+    'Before plugging in: find out whether the input stands the voltage that comes up this [lead].',
+  'step.join.captive': 'Its own plug: {from} {fromPort} into {to} {toPort}.',
+  'step.join.lead': '{name}: {from} {fromPort} to {to} {toPort}.',
+  'step.join.to-piece': '{name}: {from} {fromPort} to the {next}.',
+  'step.join.between': '{name} to the {next}.',
+  'step.join.from-piece': '{name} to {to} {toPort}.',
+  'step.join.yellow': 'Yellow: {from} {fromPort} to {to} {toPort}.',
+  'step.join.white': 'White: {from} {fromPort} to {to} {toPort}.',
+  'step.join.red': 'Red: {from} {fromPort} to {to} {toPort}.',
+  'step.join.green': 'Green: {from} {fromPort} to {to} {toPort}.',
+  'step.join.blue': 'Blue: {from} {fromPort} to {to} {toPort}.',
+  'step.join.black': 'Black: {from} {fromPort} to {to} {toPort}.',
+  'step.join.orange': 'Orange: {from} {fromPort} to {to} {toPort}.',
+  'step.join.grey': '[Grey]: {from} {fromPort} to {to} {toPort}.',
+  'step.join.colours': '[Colour] to [colour] at both ends: {from} {fromPort} to {to} {toPort}.',
+  'step.not-the-green': 'Not the green {port}: that gives a [grey] picture.',
+  'step.screw-home': 'Screw it home with your fingers.',
+  'step.aerial-lugs-off':
+    "Take the [aerial]'s lugs off first and leave them off. Either lug goes under either screw.",
+  'step.set': 'Set the {name}.',
+  'setting.position': '{control} to {position}',
+  'setting.auto': '{control} goes to {position} by itself',
+  'setting.channel': '{control} to channel {position}',
+  'setting.tune.numbers': '{control}: key in {position}',
+  'setting.tune.presets': '{control}: store channel {position} on a preset',
+  'setting.tune.knob': '{control}: turn to channel {position}',
+  'setting.tune.turret': '{control} to {position}',
+  'setting.tune.search': '{control}: let it search until it finds channel {position}',
+  'setting.trim.up': 'Turn {control} up until the picture is full',
+  'setting.trim.down': 'Turn {control} down until white no longer buzzes',
+  'setting.trim.by-eye': '{control} by eye: until the colour holds and the sound is clean',
+
+  'why.opens-way': 'it opens the way',
+  'why.picks-input': 'chooses what comes in',
+  'why.picks-plan': 'the plan in which its channels count',
+  'why.picks-channel': 'the channel that it puts out',
+  'why.tunes-to': 'the same carrier',
+  'why.fits-standard': 'fits the set',
+  'why.fits-scan': 'a rate that the set follows',
+  'why.fits-shape': 'wide discs keep their shape',
+  'why.ends-line': 'one 75 ohm load at the end of the line',
+  'why.trims': 'by eye and ear',
+  'why.powers': 'must be on',
+  'why.moves-itself': 'nothing to turn',
+
+  'caution.never-to-aerial':
+    'Never join {port} of the {name} to an [aerial] or a cable company\u2019s line.',
+  'caution.never-to-aerial.more': 'It would put channel {channel} on the air.',
+  'caution.chassis-live': 'The chassis of the {name} is joined to the [mains].',
+  'caution.chassis-live.more':
+    'Use its [aerial] terminals only; a 75/300 transformer does not isolate. Work inside is for people trained to do it.',
+  'caution.chassis-may-be-live': 'The chassis of the {name} may be joined to the [mains].',
+  'caution.chassis-may-be-live.more':
+    'Use its [aerial] terminals only; a 75/300 transformer does not isolate.',
+  'caution.added-socket': 'Do not use or touch {port} of the {name}.',
+  'caution.added-socket.more':
+    'It was added later and may put the [mains] on every [lead] that is plugged in. Have it taken out and the [aerial] isolator checked by somebody trained.',
+  'caution.check-chassis': 'Nobody has noted whether the {name} is isolated.',
+  'caution.check-chassis.more': 'Check that first; if in doubt, do not connect.',
+  'caution.check-dc': 'There is a voltage on this cable.',
+  'caution.check-dc.more': 'Check that the input stands it before you plug in.',
+  'caution.mains-differs': 'The {name} is made for {volts} V; the set runs on {here} V.',
+  'caution.mains-differs.more':
+    'Compare the rating plates, voltage and frequency, before anything is plugged in.',
+  'caution.pack-centre-positive': '{name} pack: {volts} V DC, {milliamps} mA, [centre] positive.',
+  'caution.pack-centre-positive.more': 'Compare its label first.',
+  'caution.pack-centre-negative': '{name} pack: {volts} V DC, {milliamps} mA, [centre] negative.',
+  'caution.pack-centre-negative.more': 'Compare its label first.',
+  'caution.pack-ac': '{name} pack: {volts} V AC, {milliamps} mA.',
+  'caution.pack-ac.more': 'Compare its label first.',
+  'caution.pack-dc': '{name} pack: {volts} V DC, {milliamps} mA; polarity not noted.',
+  'caution.pack-dc.more': 'Read the polarity from the unit before you plug it in.',
+  'caution.recorder-input': 'Protected discs and tapes will not play properly through the {name}.',
+  'caution.recorder-input.more':
+    'Its input level control is upset by their pulses: the picture goes dark and bright. A plain modulator has no such control.',
+  'caution.handshake-unknown':
+    'Nobody has noted whether the {name} completes the content-protection handshake.',
+  'caution.handshake-unknown.more': 'Without it protected material stays black.',
+  'caution.luma-only': 'Only the brightness part arrives: a steady [grey] picture.',
+  'caution.luma-only.more': 'Nothing is broken; the [colour] has no wire.',
+  'caution.colour-not-decoded':
+    'The picture is [grey]: the set does not decode this [colour] standard.',
+  'caution.colour-not-decoded.more': 'The picture is steady and nothing is broken.',
+  'caution.reduced-height': 'The picture is not as tall as the screen.',
+  'caution.reduced-height.more': 'The set follows 60 fields a second with less height.',
+  'caution.squeezed': 'Wide pictures look tall and thin.',
+  'caution.squeezed.more': 'Tell the player that the screen is 4:3, if it can be told.',
+  'caution.sound-half': 'One sound channel of two is lost.',
+  'caution.sound-half.more':
+    'Whatever is on the other side is not heard. A mixing Y adapter would bring both.',
+  'caution.silent': 'There is no sound on this way.',
+  'caution.silent.more': 'The picture comes alone.',
+  'caution.sound-folded': 'Left and right are added into one sound channel.',
+  'caution.sound-folded.more': 'Nothing is lost but the width.',
+  'caution.scan-too-fast': '{control} of the {name} must stay as said.',
+  'caution.scan-too-fast.more':
+    'Its other position doubles the line rate: torn lines, and old sets do not like it.',
+  'caution.channel-on-air': 'Something is on the air on channel {channel}.',
+  'caution.channel-on-air.more':
+    'There is no free channel on the {name}: expect patterns in the picture.',
+  'caution.channel-may-be-used':
+    'If anything is received on channel {channel}, use {other} at both ends.',
+  'caution.channel-may-be-used.more': 'Two signals on one channel spoil each other.',
+  'caution.air-or-cable': '{control} of the {name} on {position}.',
+  'caution.air-or-cable.more': 'Channels of the same number lie elsewhere in the other plan.',
+  'caution.moves-itself': 'The {name} switches by itself.',
+  'caution.moves-itself.more': 'Leave the source off while you want what is behind it.',
+  'caution.direction-switch': '{control} of the {name} decides which way the signal goes.',
+  'caution.direction-switch.more': 'On the wrong side there is no picture.',
+  'caution.choose-by-hand': 'Choose the input of the {name} by hand.',
+  'caution.choose-by-hand.more': 'Nothing on this [lead] wakes it.',
+  'caution.less-detail': 'High definition becomes an ordinary television picture.',
+  'caution.less-detail.more': 'Small text will be hard to read.',
+} as const
+
+/** Why the shelf does not do it: each names the two facts that clash. */
+export const OBSTACLES = {
+  'obstacle.japanese-21-pin':
+    'Do not plug the 21-pin plug of the {source} into the {display}: it goes in, and its pins are wired in the Japanese way. Sound and supply would land on picture pins.',
+  'obstacle.added-socket':
+    'Do not use {port} of the {display}. It was added later to a set whose chassis is or may be joined to the [mains]: everything plugged in there, and whoever touches it, may be live.',
+  'obstacle.line-rate':
+    'The {source} draws {sourceKhz} thousand lines a second; the {display} follows {displayKhz} thousand. No [lead] changes that, and some sets are harmed by it: a scan converter is needed.',
+  'obstacle.field-rate':
+    'The {source} gives {sourceHz} pictures a second; the {display} follows {displayHz}. The picture would roll: a standards converter is needed.',
+  'obstacle.protection':
+    'What is played is protected, and the {display} does not complete what the {source} asks for.',
+  'obstacle.digital-only':
+    'The {source} sends an analogue channel; the tuner of the {display} receives digital stations only.',
+  'obstacle.band':
+    'The {source} puts out channel {channel} at {mhz} MHz; the tuner of the {display} does not reach it.',
+  'obstacle.vision-polarity':
+    'The {source} sends system {system}; the tuner of the {display} works the other way round and would show a negative picture.',
+  'obstacle.standard':
+    'The input of the {display} does not take the standard that the {source} gives.',
+  'obstacle.not-taken': 'The input of the {display} does not take what the {source} gives.',
+  'obstacle.no-lead':
+    'Both have a fitting output and input, but no [lead] at hand joins the {source} to the {display}.',
+  'obstacle.no-common-form':
+    'The {source} and the {display} have no form of picture in common, and nothing at hand turns one into the other.',
+} as const

@@ -1,0 +1,305 @@
+import type { Answer, Hookup, Link } from '@coaxwain/shelf'
+import { isSoundCircuit, type Circuit, type Quality } from '@coaxwain/signal'
+import { sentence } from '@coaxwain/wording'
+import type {
+  CaseAnswer,
+  CaseHop,
+  CasePath,
+  CasePort,
+  CaseQuestion,
+  CaseSetting,
+  CaseUnit,
+  CaseWarning,
+  HookupAnswer,
+} from './form'
+import { DISPLAY, SOURCE, type Translated } from './translate'
+
+/** The product's answer in the words of the case form. */
+export function toCaseAnswer(
+  question: CaseQuestion,
+  translated: Translated,
+  answer: Answer,
+): HookupAnswer {
+  const [best] = answer.hookups
+  const possible =
+    best && isWhole(best)
+      ? 'yes'
+      : answer.purchases.length > 0
+        ? 'with-purchase'
+        : best
+          ? 'yes'
+          : 'no'
+  // Once something works in full, what is seen in grey only is no answer to the question.
+  const worth = best && isWhole(best) ? answer.hookups.filter(isWhole) : answer.hookups
+  const answers =
+    possible === 'no' ? [] : worth.slice(0, 3).map((h, i) => oneAnswer(question, translated, h, i))
+  return {
+    id: question.id,
+    possible,
+    answers,
+    ...(answers.length > 1
+      ? { verdict: 'it comes first by what works fully, is tested, and looks best' }
+      : {}),
+    reasons: answer.obstacles.map((o) => ({
+      code: WARNING_OF[`obstacle.${o.code}`] ?? o.code,
+      words: say(`obstacle.${o.code}`, o.details),
+      facts: [say(`obstacle.${o.code}`, o.details)],
+    })),
+    warnings: answer.obstacles
+      .filter((o) => o.harmful || possible === 'no')
+      .map((o) => warning(`obstacle.${o.code}`, o.details)),
+    claims: [],
+  }
+}
+
+/** Colour where both have it, and sound where both have it. */
+const isWhole = (h: Hookup): boolean =>
+  !h.picture.degradations.includes('monochrome') &&
+  h.picture.quality !== 'luma-only' &&
+  !h.cautions.some((c) => c.code === 'silent')
+
+const say = (code: string, details: Readonly<Record<string, string | number>>): string =>
+  sentence(code, details, 'en-GB')
+
+/** Cautions and reasons of the product by the codes of the form, where one fits. */
+const WARNING_OF: Readonly<Record<string, string>> = {
+  'caution.chassis-live': 'W-LIVE-CHASSIS',
+  'caution.chassis-may-be-live': 'W-LIVE-CHASSIS',
+  'caution.added-socket': 'W-LIVE-CHASSIS',
+  'caution.check-chassis': 'W-LIVE-CHASSIS',
+  'caution.check-dc': 'W-DC-ON-COAX',
+  'caution.mains-differs': 'W-MAINS',
+  'caution.recorder-input': 'W-AGC',
+  'caution.handshake-unknown': 'W-HDCP',
+  'caution.luma-only': 'W-Y-ONLY',
+  'caution.colour-not-decoded': 'W-COLOUR-LOST',
+  'caution.squeezed': 'W-ASPECT',
+  'caution.sound-half': 'W-SOUND-HALF',
+  'caution.sound-folded': 'W-SOUND-MONO',
+  'caution.scan-too-fast': 'W-PROGRESSIVE',
+  'caution.channel-on-air': 'W-COCHANNEL',
+  'caution.channel-may-be-used': 'W-COCHANNEL',
+  'caution.air-or-cable': 'W-CATV',
+  'caution.moves-itself': 'W-AUTO-SWITCH',
+  'caution.direction-switch': 'W-DIRECTION',
+  'caution.choose-by-hand': 'W-SWITCHING-VOLTAGE',
+  'caution.less-detail': 'W-DROPPED-RES',
+  'obstacle.added-socket': 'W-LIVE-CHASSIS',
+  'obstacle.japanese-21-pin': 'W-PINOUT',
+  'obstacle.line-rate': 'W-SCAN',
+  'obstacle.field-rate': 'W-NO-LOCK',
+  'obstacle.digital-only': 'W-DIGITAL-TUNER',
+  'obstacle.band': 'W-BAND',
+  'obstacle.protection': 'W-HDCP',
+  'obstacle.light-gun': 'W-LIGHT-GUN',
+}
+
+/** Told on every screen, but no warning in the sense of the form. */
+const UNSAID = [
+  'never-to-aerial',
+  'pack-centre-positive',
+  'pack-centre-negative',
+  'pack-ac',
+  'pack-dc',
+  'silent',
+]
+
+function warning(code: string, details: Readonly<Record<string, string | number>>): CaseWarning {
+  const known = WARNING_OF[code]
+  return { ...(known ? { code: known } : {}), words: say(code, details) }
+}
+
+function oneAnswer(
+  question: CaseQuestion,
+  translated: Translated,
+  hookup: Hookup,
+  rank: number,
+): CaseAnswer {
+  const cautions = hookup.cautions.filter((c) => !UNSAID.includes(c.code))
+  const seen = new Set<string>()
+  return {
+    paths: pathsOf(question, hookup),
+    settings: hookup.settings.map((s) => settingOf(question, hookup, s)),
+    quality: {
+      picture: hookup.picture.colour ? 'colour' : 'monochrome',
+      form: formName(hookup.picture.quality),
+      sound: hookup.sound.sound === 'half' ? 'mono-one-channel-lost' : hookup.sound.sound,
+    },
+    missing: [],
+    warnings: cautions
+      .map((c) => warning(`caution.${c.code}`, c.details))
+      .filter((w) => w.code === undefined || (!seen.has(w.code) && seen.add(w.code))),
+    ...(rank > 0 ? { below: 'it is second best by the order in which answers are ranked' } : {}),
+  }
+}
+
+function formName(quality: Quality): string {
+  switch (quality) {
+    case 'rgbs':
+    case 'rgsb':
+    case 'rgbhv':
+      return 'rgb'
+    case 'hdmi':
+    case 'dvi':
+      return 'digital'
+    default:
+      return quality
+  }
+}
+
+// ---------------------------------------------------------------- settings
+
+function settingOf(
+  question: CaseQuestion,
+  hookup: Hookup,
+  s: Hookup['settings'][number],
+): CaseSetting {
+  const control = unitOf(question, s.unit)?.settings?.find((c) => c.name === s.control)
+  const base = { on: s.unit, set: s.control, ...(control ? { class: control.class } : {}) }
+  if (s.why === 'tunes-to') {
+    const sender = hookup.settings.find(
+      (o) => o.why === 'picks-channel' && o.visionMhz === s.visionMhz,
+    )
+    const from = sender?.unit ?? carrierFrom(hookup, s.unit)
+    return { ...base, to: from ? `as ${from}` : s.position }
+  }
+  if (control?.class === 'trim')
+    return { ...base, to: s.position === 'by-eye' ? 'by eye' : s.position }
+  return { ...base, to: s.why === 'picks-channel' ? caseChannel(control, s.position) : s.position }
+}
+
+/** Channel names of the product carry the letters of their plan where the case's own have none. */
+const caseChannel = (control: { choices?: string[] } | undefined, name: string): string =>
+  control?.choices?.includes(name)
+    ? name
+    : (control?.choices?.find((c) => name.endsWith(c)) ?? name)
+
+/** The unit whose fixed carrier a tuner receives. */
+function carrierFrom(hookup: Hookup, tuner: string): string | null {
+  const stops = hookup.legs[0]?.stops ?? []
+  const at = stops.findIndex((s) => s.unit === tuner)
+  return stops[at - 1]?.unit ?? null
+}
+
+const unitOf = (question: CaseQuestion, id: string): CaseUnit | undefined =>
+  id === SOURCE
+    ? question.source
+    : id === DISPLAY
+      ? question.display
+      : (question.shelf.find((s) => s.id === id) as CaseUnit | undefined)
+
+// ---------------------------------------------------------------- paths
+
+const CIRCUITS: Readonly<Record<string, readonly Circuit[]>> = {
+  composite: ['cvbs'],
+  's-video': ['y', 'c'],
+  luma: ['y'],
+  chroma: ['c'],
+  'ypbpr-y': ['y'],
+  'ypbpr-pb': ['pb'],
+  'ypbpr-pr': ['pr'],
+  'rgb-r': ['r'],
+  'rgb-g': ['g'],
+  'rgb-b': ['b'],
+  'rgb-cs': ['r', 'g', 'b', 'csync'],
+  'rgb-hv': ['r', 'g', 'b', 'hsync', 'vsync'],
+  'rgb-sog': ['r', 'g', 'b'],
+  sync: ['csync'],
+  rgbi: ['ttl-r', 'ttl-g', 'ttl-b', 'ttl-i', 'hsync', 'vsync'],
+  'mono-ttl': ['ttl-mono', 'hsync', 'vsync'],
+  hdmi: ['tmds'],
+  dvi: ['tmds'],
+  rf: ['rf'],
+}
+
+const portOf = (question: CaseQuestion, unit: string, port: string): CasePort | undefined =>
+  unitOf(question, unit)?.ports.find((p) => p.id === port)
+
+/** The name of what a link carries: the signal of the giving port that covers its picture circuits. */
+function pictureSignal(question: CaseQuestion, link: Link): string {
+  const circuits = link.circuits.map((c) => c.from).filter((c) => !isSoundCircuit(c))
+  const from = portOf(question, link.from.unit, link.from.port)?.signals ?? []
+  const to = portOf(question, link.to.unit, link.to.port)?.signals ?? []
+  const covers = from.filter((s) => circuits.every((c) => CIRCUITS[s]?.includes(c)))
+  return covers.find((s) => to.includes(s)) ?? covers[0] ?? 'composite'
+}
+
+function hop(link: Link, signal: string): CaseHop {
+  return {
+    from: `${link.from.unit}:${link.from.port}`,
+    by: link.pieces.map((p) => p.model),
+    to: `${link.to.unit}:${link.to.port}`,
+    signal,
+  }
+}
+
+function pathsOf(question: CaseQuestion, hookup: Hookup): CasePath[] {
+  const picture = hookup.legs.find((l) => l.purpose === 'picture')
+  if (!picture) return []
+  const steps = picture.stops.slice(1).map((stop, i) => {
+    const from = picture.stops[i]!.unit
+    return picture.links
+      .map((l) => hookup.links[l]!)
+      .filter((l) => l.from.unit === from && l.to.unit === stop.unit)
+      .filter((l) => l.circuits.some((c) => !isSoundCircuit(c.from)))
+  })
+  const main = steps.map((links) => hop(links[0]!, pictureSignal(question, links[0]!)))
+  const lanes = steps.flatMap((links, i) =>
+    links.slice(1).map((link): CasePath => {
+      const circuit = link.circuits[0]!.from
+      const after = steps.slice(i + 1).map((next) => {
+        const same = next.find((l) => l.circuits[0]!.from === circuit) ?? next[0]!
+        return hop(same, pictureSignal(question, same))
+      })
+      return {
+        purpose: `picture-${circuit}`,
+        hops: [...main.slice(0, i), hop(link, pictureSignal(question, link)), ...after],
+      }
+    }),
+  )
+  return [
+    { purpose: 'picture', hops: main },
+    ...lanes,
+    ...soundPaths(
+      hookup,
+      main,
+      picture.stops.map((s) => s.unit),
+    ),
+  ]
+}
+
+const PURPOSES: Partial<Record<Circuit, string>> = {
+  'audio-l': 'sound-left',
+  'audio-r': 'sound-right',
+  'audio-mono': 'sound',
+}
+
+/** Sound wire by wire: from the source, or from where it leaves the picture, to where it is heard or joins. */
+function soundPaths(
+  hookup: Hookup,
+  main: readonly CaseHop[],
+  stops: readonly string[],
+): CasePath[] {
+  const wires = hookup.links.flatMap((link) =>
+    link.circuits.filter((c) => isSoundCircuit(c.from)).map((c) => ({ link, circuit: c.from })),
+  )
+  const goesOn = (unit: string) => wires.some((w) => w.link.from.unit === unit)
+  const ends = wires.filter((w) => !goesOn(w.link.to.unit))
+  const before = (wire: (typeof wires)[number]): CaseHop[] => {
+    const own = hop(wire.link, wire.circuit)
+    const fed = wires.filter((w) => w.link.to.unit === wire.link.from.unit)
+    const same = fed.find((w) => w.circuit === wire.circuit) ?? fed[0]
+    if (same) return [...before(same), own]
+    const at = stops.indexOf(wire.link.from.unit)
+    return [...main.slice(0, Math.max(0, at)), own]
+  }
+  return ends.map((wire): CasePath => {
+    const ending = wire.link.to.unit
+    const joins = ending !== DISPLAY && stops.includes(ending)
+    return {
+      purpose: PURPOSES[wire.circuit] ?? 'sound',
+      hops: before(wire),
+      ...(joins ? { joins: 'picture' } : {}),
+    }
+  })
+}

@@ -1,0 +1,1121 @@
+import type {
+  AcceptRow,
+  AutoCause,
+  Condition,
+  Control,
+  ControlRole,
+  DeviceModel,
+  DisplayFacts,
+  Give,
+  Jack,
+  ModelFunction,
+  OptionalInput,
+  PictureGive,
+  PieceModel,
+  Plug,
+  Port,
+  PortCircuit,
+  RfGive,
+  Wire,
+} from '@coaxwain/models'
+import type { OffAir, Question, Snapshot, Unit } from '@coaxwain/shelf'
+import {
+  CONNECTOR_FACTS,
+  familyOf,
+  FORM_CIRCUITS,
+  isSingle,
+  type Circuit,
+  type Colour,
+  type Connector,
+  type ConnectorFamily,
+  type DigitalSystem,
+  type Form,
+  type PlanId,
+  type PlanPart,
+  type Protection,
+  type RfSystemId,
+  type ScanId,
+  type SwitchVolt,
+} from '@coaxwain/signal'
+import type {
+  CaseControl,
+  CaseDoes,
+  CaseMode,
+  CasePiece,
+  CasePort,
+  CaseQuestion,
+  CaseTuner,
+  CaseUnit,
+  When,
+} from './form'
+
+/** A case in the product's own types. Ids of units, ports, controls and leads stay the case's own. */
+export interface Translated {
+  readonly snapshot: Snapshot
+  readonly question: Question
+}
+
+export const SOURCE = 'source'
+export const DISPLAY = 'display'
+const PLAYS = 'plays'
+
+// ---------------------------------------------------------------- words of the form
+
+const CIRCUITS_OF: Readonly<Record<string, readonly Circuit[]>> = {
+  composite: ['cvbs'],
+  's-video': ['y', 'c'],
+  luma: ['y'],
+  chroma: ['c'],
+  'ypbpr-y': ['y'],
+  'ypbpr-pb': ['pb'],
+  'ypbpr-pr': ['pr'],
+  'rgb-r': ['r'],
+  'rgb-g': ['g'],
+  'rgb-b': ['b'],
+  'rgb-cs': ['r', 'g', 'b', 'csync'],
+  'rgb-hv': ['r', 'g', 'b', 'hsync', 'vsync'],
+  'rgb-sog': ['r', 'g', 'b'],
+  sync: ['csync'],
+  rgbi: ['ttl-r', 'ttl-g', 'ttl-b', 'ttl-i', 'hsync', 'vsync'],
+  'mono-ttl': ['ttl-mono', 'hsync', 'vsync'],
+  hdmi: ['tmds'],
+  dvi: ['tmds'],
+  rf: ['rf'],
+  'ac3-rf': ['ac3-rf'],
+  'digital-audio': ['spdif'],
+  'audio-l': ['audio-l'],
+  'audio-r': ['audio-r'],
+  'audio-mono': ['audio-mono'],
+}
+
+/** Signals that are a whole form on one port. */
+const WHOLE_FORMS: Readonly<Record<string, Form>> = {
+  composite: 'composite',
+  's-video': 's-video',
+  'rgb-cs': 'rgbs',
+  'rgb-hv': 'rgbhv',
+  'rgb-sog': 'rgsb',
+  rgbi: 'rgbi',
+  'mono-ttl': 'ttl-mono',
+  hdmi: 'hdmi',
+  dvi: 'dvi',
+  rf: 'rf',
+  'ac3-rf': 'ac3-rf',
+  'digital-audio': 'digital-sound',
+}
+
+/** Forms over several ports: the signal of each, the first being the one whose modes count. */
+const SPLIT_FORMS: readonly {
+  form: Form
+  signals: readonly string[]
+  maybe?: readonly string[]
+}[] = [
+  { form: 'component', signals: ['ypbpr-y', 'ypbpr-pb', 'ypbpr-pr'] },
+  { form: 's-video', signals: ['luma', 'chroma'] },
+  { form: 'rgbs', signals: ['rgb-g', 'rgb-r', 'rgb-b', 'sync'] },
+  { form: 'rgsb', signals: ['rgb-g', 'rgb-r', 'rgb-b'] },
+]
+
+const PLAN_PARTS: Readonly<Record<string, PlanPart>> = {
+  'us-air': { plan: 'us-broadcast', names: '2..83' },
+  'us-air-vhf': { plan: 'us-broadcast', names: '2..13' },
+  'us-air-uhf': { plan: 'us-broadcast', names: '14..83' },
+  'us-cable': { plan: 'us-cable-std' },
+  'uk-uhf': { plan: 'uk-uhf' },
+  'uk-405': { plan: 'uk-405' },
+  'ccir-vhf': { plan: 'ccir-west-europe', names: 'E2..E12' },
+  'ccir-uhf': { plan: 'ccir-west-europe', names: '21..69' },
+  'au-vhf': { plan: 'australia', names: '0..5,5A,6..11' },
+  'au-uhf': { plan: 'australia', names: '28..69' },
+  au: { plan: 'australia' },
+  'jp-vhf': { plan: 'japan-broadcast', names: '1..12' },
+  'jp-uhf': { plan: 'japan-broadcast', names: '13..62' },
+  jp: { plan: 'japan-broadcast' },
+  'fr-uhf': { plan: 'france', names: '21..69' },
+}
+
+const PREFIXED: Partial<Record<PlanId, string>> = { 'ccir-west-europe': 'E', 'uk-405': 'B' }
+
+/** A channel of a case by the name that the product's own plan gives it. */
+function ownName(plan: string, channel: string): string {
+  const part = planPart(plan)
+  const vhf = plan.endsWith('vhf') || plan === 'uk-405'
+  const prefix = vhf ? (PREFIXED[part.plan] ?? '') : ''
+  return prefix && /^\d/.test(channel) ? prefix + channel : channel
+}
+
+function planPart(plan: string): PlanPart {
+  const [name = '', span] = plan.split(':')
+  const part = PLAN_PARTS[name]
+  if (!part) throw new Error(`unknown plan ${plan}`)
+  if (span === undefined) return part
+  const [from = '', to = ''] = span.split('-')
+  return { plan: part.plan, names: `${ownName(name, from)}..${ownName(name, to)}` }
+}
+
+const DIGITAL: Readonly<Record<string, DigitalSystem>> = {
+  '8vsb': 'atsc',
+  atsc: 'atsc',
+  qam: 'qam',
+  'dvb-t': 'dvb-t',
+  'isdb-t': 'isdb-t',
+}
+
+const condition = (when: When | undefined): Condition =>
+  Object.entries(when ?? {}).map(([control, positions]) => ({ control, in: positions }))
+
+const both = (...all: (When | undefined)[]): Condition => all.flatMap((w) => condition(w))
+
+// ---------------------------------------------------------------- ports and jacks
+
+interface CaseJack {
+  readonly jack: Jack
+  readonly ports: readonly CasePort[]
+  /** The signal whose modes count. */
+  readonly lead: string
+  readonly when: When | undefined
+}
+
+const sides = (port: CasePort): ('in' | 'out')[] =>
+  port.dir === 'both' ? ['in', 'out'] : [port.dir]
+
+const sameWhen = (a: CasePort, b: CasePort): boolean =>
+  JSON.stringify(a.when ?? {}) === JSON.stringify(b.when ?? {})
+
+function wholeJacks(port: CasePort, dir: 'in' | 'out'): CaseJack[] {
+  return port.signals.flatMap((signal): CaseJack[] => {
+    const form = WHOLE_FORMS[signal]
+    if (!form) return []
+    const contacts = (CIRCUITS_OF[signal] ?? []).map((circuit) => ({ circuit, port: port.id }))
+    return [
+      {
+        jack: { key: `${port.id} ${signal} ${dir}`, form, dir, contacts },
+        ports: [port],
+        lead: signal,
+        when: port.when,
+      },
+    ]
+  })
+}
+
+/** Forms over several ports: the n-th port of each signal goes with the n-th of the others. */
+function splitJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
+  const made: CaseJack[] = []
+  for (const { form, signals } of SPLIT_FORMS) {
+    const [first = '', ...rest] = signals
+    const firsts = ports.filter((p) => p.signals.includes(first))
+    firsts.forEach((lead, n) => {
+      const others = rest.map((signal) => {
+        const with_ = ports.filter((p) => p.signals.includes(signal))
+        const alike = with_.filter((p) => sameWhen(p, lead))
+        return alike.length > 0 && alike.length < with_.length ? alike[0] : with_[n]
+      })
+      if (others.some((p) => p === undefined)) return
+      if (form === 'rgsb' && made.some((m) => m.jack.form === 'rgbs' && m.ports[0] === lead)) return
+      const all = [lead, ...(others as CasePort[])]
+      made.push({
+        jack: {
+          key: `${all.map((p) => p.id).join('+')} ${form} ${dir}`,
+          form,
+          dir,
+          contacts: signals.flatMap((signal, i) =>
+            (CIRCUITS_OF[signal] ?? []).map((circuit) => ({ circuit, port: all[i]!.id })),
+          ),
+        },
+        ports: all,
+        lead: first,
+        when: lead.when,
+      })
+    })
+  }
+  return made
+}
+
+const hasSound = (port: CasePort, signal: string): boolean => port.signals.includes(signal)
+
+/** Sound jacks: left and right that belong together, or one port for all there is. */
+function soundJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
+  const rights = ports.filter(
+    (p) => hasSound(p, 'audio-r') && !hasSound(p, 'audio-l') && !hasSound(p, 'audio-mono'),
+  )
+  const lefts = ports.filter(
+    (p) => (hasSound(p, 'audio-l') || hasSound(p, 'audio-mono')) && !whole(p),
+  )
+  const jack = (all: CasePort[], contacts: Jack['contacts']): CaseJack => ({
+    jack: { key: `${all.map((p) => p.id).join('+')} sound ${dir}`, form: 'sound', dir, contacts },
+    ports: all,
+    lead: 'sound',
+    when: all[0]?.when,
+  })
+  const taken = new Set<CasePort>()
+  const pairs = lefts.flatMap((left) => {
+    const free = rights.filter((r) => !taken.has(r))
+    const right = free.find((r) => sameWhen(r, left)) ?? free[0]
+    if (!right || !hasSound(left, 'audio-l'))
+      return [jack([left], [{ circuit: 'audio-mono', port: left.id }])]
+    taken.add(right)
+    return [
+      jack(
+        [left, right],
+        [
+          { circuit: 'audio-l', port: left.id },
+          { circuit: 'audio-r', port: right.id },
+          ...(hasSound(left, 'audio-mono') && dir === 'in'
+            ? [{ circuit: 'audio-mono' as const, port: left.id }]
+            : []),
+        ],
+      ),
+    ]
+  })
+  const alone = rights
+    .filter((r) => !taken.has(r))
+    .map((r) => jack([r], [{ circuit: 'audio-r', port: r.id }]))
+  const wholes = ports.filter(whole).map((p) =>
+    isSingle(p.connector as Connector)
+      ? jack([p], [{ circuit: 'audio-mono', port: p.id }])
+      : jack(
+          [p],
+          [
+            { circuit: 'audio-l', port: p.id },
+            { circuit: 'audio-r', port: p.id },
+          ],
+        ),
+  )
+  return [...pairs, ...alone, ...wholes]
+}
+
+/** One port that carries both channels: a multi-way socket, or a mono input that takes either. */
+const whole = (port: CasePort): boolean => hasSound(port, 'audio-l') && hasSound(port, 'audio-r')
+
+function jacksOf(unit: CaseUnit): CaseJack[] {
+  return (['in', 'out'] as const).flatMap((dir) => {
+    const ports = unit.ports.filter((p) => sides(p).includes(dir))
+    return [
+      ...ports.flatMap((p) => wholeJacks(p, dir)),
+      ...splitJacks(ports, dir),
+      ...soundJacks(ports, dir),
+    ]
+  })
+}
+
+function portOf(unit: CaseUnit, port: CasePort, jacks: readonly CaseJack[], column: number): Port {
+  const circuits = new Map<Circuit, PortCircuit['dir']>()
+  for (const { jack } of jacks) {
+    for (const contact of jack.contacts.filter((c) => c.port === port.id)) {
+      const before = circuits.get(contact.circuit)
+      circuits.set(contact.circuit, before && before !== jack.dir ? 'either' : jack.dir)
+    }
+  }
+  const aerial = port.signals.includes('rf')
+  return {
+    key: port.id,
+    label: port.label,
+    connector: port.connector as Connector,
+    mount: port.mount,
+    circuits: [...circuits].map(([circuit, dir]) => ({ circuit, dir })),
+    ...(port.ohm === undefined ? {} : { impedanceOhm: port.ohm }),
+    origin: 'factory',
+    isolated: unit.liveChassis === true && !aerial ? 'no' : 'yes',
+    ...(port.dcVolts ? { suppliesDcVolts: port.dcVolts } : {}),
+    standsDc: 'yes',
+    at: { face: 'back', row: 0, column },
+  }
+}
+
+// ---------------------------------------------------------------- controls
+
+const ROLES: Readonly<Record<string, ControlRole>> = {
+  input: 'input',
+  standard: 'standard',
+  scan: 'scan',
+  direction: 'direction',
+  mode: 'mode',
+  termination: 'termination',
+  'antenna-plan': 'tuner-plan',
+  power: 'power',
+  other: 'other',
+}
+
+const WAYS: Readonly<Record<string, 'numbers' | 'presets' | 'knob' | 'turret' | 'search'>> = {
+  numbers: 'numbers',
+  presets: 'presets',
+  turret: 'turret',
+  dial: 'knob',
+  scan: 'search',
+}
+
+const isShape = (control: CaseControl): boolean =>
+  control.class === 'mode' && (control.choices ?? []).includes('16:9')
+
+function controlOf(unit: CaseUnit, control: CaseControl): Control[] {
+  const base = {
+    key: control.name,
+    label: control.name,
+    access: 'front' as const,
+    look: 'slide' as const,
+  }
+  const choices = control.choices ?? []
+  switch (control.class) {
+    case 'channel':
+      return channelControl(unit, control)
+    case 'tuned-to':
+      return tunedControl(unit, control)
+    case 'trim':
+      return [{ ...base, kind: 'trim', quantity: trimQuantity(control.name), ...standing(control) }]
+    case 'auto':
+      return [
+        {
+          ...base,
+          kind: 'auto',
+          positions: choices.map((key) => ({
+            key,
+            label: key,
+            cause: causeOf(unit, control.movedBy?.[key]),
+          })),
+        },
+      ]
+    default:
+      return [
+        {
+          ...base,
+          kind: 'positions',
+          role: isShape(control) ? 'shape' : (ROLES[control.class] ?? 'other'),
+          positions: choices.map((key) => ({ key, label: key })),
+        },
+      ]
+  }
+}
+
+function trimQuantity(name: string): 'fine-tuning' | 'video-level' | 'vertical-hold' | 'other' {
+  if (/fine tun/i.test(name)) return 'fine-tuning'
+  if (/video level/i.test(name)) return 'video-level'
+  return /vertical hold/i.test(name) ? 'vertical-hold' : 'other'
+}
+
+function standing({ now, aim }: CaseControl): { stands?: number; aim?: number } {
+  const [stands] = Object.values(now ?? {})
+  const [wanted] = Object.values(aim ?? {})
+  return stands === undefined || wanted === undefined ? {} : { stands, aim: wanted }
+}
+
+/** What moves an automatic control, read from its words. */
+function causeOf(unit: CaseUnit, words: string | undefined): AutoCause {
+  const port = unit.ports.find(
+    (p) => words !== undefined && new RegExp(`\\b${p.id}\\b`).test(words),
+  )
+  if (!words || !port) return { kind: 'otherwise' }
+  if (/volt|dc\b|direct current/i.test(words)) return { kind: 'voltage-at', port: port.id }
+  return { kind: /plug/i.test(words) ? 'plug-in' : 'signal-at', port: port.id }
+}
+
+function channelControl(unit: CaseUnit, control: CaseControl): Control[] {
+  const rf = unit.ports.find((p) => p.rf?.control === control.name)?.rf
+  if (!rf) return []
+  const part = {
+    plan: planPart(rf.plan).plan,
+    names: rf.channels.map((c) => ownName(rf.plan, c)).join(','),
+  }
+  return [
+    {
+      key: control.name,
+      label: control.name,
+      access: 'back',
+      look: 'slide',
+      kind: 'channel',
+      carriers: { kind: 'channels', part },
+      toleranceMhz: 0.1,
+    },
+  ]
+}
+
+function tunedControl(unit: CaseUnit, control: CaseControl): Control[] {
+  const tuners = unit.ports.flatMap((p) => (p.tuner?.control === control.name ? [p.tuner] : []))
+  const reaches = tuners.flatMap((tuner) => reachesOf(tuner))
+  if (reaches.length === 0) return []
+  return [
+    {
+      key: control.name,
+      label: control.name,
+      access: 'front',
+      look: control.way === 'turret' ? 'knob' : 'push',
+      kind: 'tuned-to',
+      // A stepless tuner of a case stops on channels only, so that it is judged by the same measure.
+      way: WAYS[control.way ?? ''] === 'turret' ? 'turret' : 'numbers',
+      reaches,
+      pullInMhz: 0.3,
+    },
+  ]
+}
+
+function reachesOf(tuner: CaseTuner): { part: PlanPart; while?: Condition }[] {
+  const variants = (tuner.variants ?? []).filter((v) => v.plans)
+  if (variants.length === 0) return tuner.plans.map((plan) => ({ part: planPart(plan) }))
+  return variants.flatMap((v) =>
+    (v.plans ?? []).map((plan) => ({ part: planPart(plan), while: condition(v.when) })),
+  )
+}
+
+// ---------------------------------------------------------------- functions
+
+const modesFor = (jack: CaseJack): CaseMode[] =>
+  (jack.ports[0]?.modes ?? []).filter(
+    (m) => (!m.signals || m.signals.includes(jack.lead)) && colourFits(jack.jack.form, m.colour),
+  )
+
+/** A mode of another form on the same port says nothing of this one. */
+function colourFits(form: Form, colour: string): boolean {
+  const plain: Partial<Record<Form, readonly string[]>> = {
+    component: ['ypbpr', 'mono'],
+    rgbs: ['rgb', 'mono'],
+    rgsb: ['rgb', 'mono'],
+    rgbhv: ['rgb', 'mono'],
+    rgbi: ['rgbi', 'mono'],
+    hdmi: ['digital'],
+    dvi: ['digital'],
+    'ttl-mono': ['mono'],
+  }
+  const own = plain[form]
+  return own ? own.includes(colour) : !['ypbpr', 'rgb', 'rgbi', 'digital'].includes(colour)
+}
+
+const colours = (list: readonly string[]): readonly Colour[] | 'any' =>
+  list.includes('mono') ? 'any' : (list as Colour[])
+
+function acceptRows(jack: CaseJack): AcceptRow[] {
+  const tuner = jack.ports[0]?.tuner
+  if (tuner && jack.jack.form === 'rf') return tunerRows(tuner)
+  const modes = modesFor(jack)
+  if (modes.length === 0) return [{ scans: 'any', colours: 'any' }]
+  return modes.map((m) => ({
+    scans: [m.scan as ScanId],
+    colours: colours([m.colour]),
+    while: condition(m.when),
+    ...(m.needs ? { volts: m.needs as SwitchVolt[] } : {}),
+  }))
+}
+
+function tunerRows(tuner: CaseTuner): AcceptRow[] {
+  const row = (
+    t: Pick<CaseTuner, 'systems' | 'colours' | 'scans' | 'digital'>,
+    when?: When,
+  ): AcceptRow => ({
+    scans: t.scans as ScanId[],
+    colours: colours(t.colours),
+    systems: t.systems as RfSystemId[],
+    digital: t.digital.flatMap((d) => (DIGITAL[d] ? [DIGITAL[d]] : [])),
+    while: condition(when),
+  })
+  const variants = (tuner.variants ?? []).filter((v) => v.systems ?? v.colours ?? v.scans)
+  return variants.length > 0 ? variants.map((v) => row({ ...tuner, ...v }, v.when)) : [row(tuner)]
+}
+
+const shapeAt = (port: CasePort | undefined): string | undefined =>
+  typeof port?.shape === 'string' ? port.shape : undefined
+
+function pictureRows(jack: CaseJack, modes: readonly CaseMode[]): PictureGive[] {
+  if (modes.length === 0) return [{ scan: 'same', colour: 'same' }]
+  return modes.map((m) => ({
+    scan: m.scan as ScanId,
+    colour: m.colour as Colour,
+    while: condition(m.when),
+    ...(m.converts ? { converts: true } : {}),
+    ...(shapeAt(jack.ports[0]) ? { shape: shapeAt(jack.ports[0]) as PictureGive['shape'] } : {}),
+  }))
+}
+
+function rfRows(port: CasePort): RfGive[] {
+  const { rf } = port
+  if (!rf || rf.system === 'digital') return []
+  const row = (r: typeof rf, when?: When): RfGive => ({
+    channel:
+      r.control === undefined
+        ? {
+            part: {
+              plan: planPart(r.plan).plan,
+              names: r.channels.map((c) => ownName(r.plan, c)).join(','),
+            },
+          }
+        : { control: r.control },
+    system: r.system as RfSystemId,
+    colours: r.colour as Colour[],
+    sideband: r.sideband === 'vsb' ? 'vestigial' : 'double',
+    levelDbmv: r.levelDbmv ?? 6,
+    sound: r.sound === 'stereo' ? 'stereo' : r.sound === 'none' ? 'none' : 'mono',
+    ...(r.always ? { always: true } : {}),
+    while: condition(when),
+  })
+  return rf.variants?.length ? rf.variants.map((v) => row({ ...rf, ...v }, v.when)) : [row(rf)]
+}
+
+const voltsOf = (port: CasePort | undefined): SwitchVolt[] =>
+  (port?.volts ?? []).map((v) => v.volt as SwitchVolt)
+
+function give(jack: CaseJack, extra: When | undefined, modes = modesFor(jack)): Give {
+  const port = jack.ports[0]!
+  const rf = jack.jack.form === 'rf' ? rfRows(port) : []
+  return {
+    jack: jack.jack.key,
+    while: both(jack.when, extra),
+    picture: pictureRows(jack, modes),
+    ...(rf.length > 0 ? { rf } : {}),
+    volts: voltsOf(port),
+  }
+}
+
+const isSoundJack = (jack: CaseJack): boolean => jack.jack.form === 'sound'
+const isPicture = (jack: CaseJack): boolean =>
+  !['sound', 'digital-sound', 'ac3-rf'].includes(jack.jack.form)
+
+/** The source: what it plays leaves by every output. */
+function playing(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction {
+  const recorded = unit.content?.scans
+  const serves = (m: CaseMode): boolean =>
+    !recorded || m.converts === true || recorded.includes(m.scan)
+  const outs = jacks.filter((j) => j.jack.dir === 'out')
+  const anywhere = outs.flatMap((j) => modesFor(j)).filter(serves)
+  const pictures = outs.filter(isPicture).flatMap((j): Give[] => {
+    const modes = modesFor(j).filter(serves)
+    if (j.jack.form === 'rf')
+      return [{ ...give(j, undefined, modes), picture: rfPictures(j, anywhere) }]
+    const given = modes.length > 0 ? modes : modesFor(j).length > 0 ? [] : anywhere
+    return given.length > 0 ? [give(j, undefined, given)] : []
+  })
+  const withHdmi = pictures.map((g) =>
+    outs.find((j) => j.jack.key === g.jack)?.jack.form === 'hdmi'
+      ? { ...g, sound: 'stereo' as const }
+      : g,
+  )
+  const sounds = outs.filter(isSoundJack).map((j): Give => ({
+    jack: j.jack.key,
+    while: condition(j.when),
+    sound: j.jack.contacts.some((c) => c.circuit === 'audio-r') ? 'stereo' : 'mono',
+  }))
+  return {
+    key: PLAYS,
+    kind: 'plays',
+    needs: [],
+    accepts: [],
+    gives: [...withHdmi, ...sounds],
+    power: 'on',
+  }
+}
+
+/** A source with nothing but RF says its colours; its lines are those of its system. */
+function rfPictures(jack: CaseJack, anywhere: readonly CaseMode[]): PictureGive[] {
+  const rf = jack.ports[0]?.rf
+  const known = anywhere.filter((m) => rf?.colour.includes(m.colour))
+  if (known.length > 0)
+    return known.map((m) => ({
+      scan: m.scan as ScanId,
+      colour: m.colour as Colour,
+      while: condition(m.when),
+    }))
+  const scans: ScanId[] =
+    rf?.system === 'M'
+      ? ['262p60', '525i60']
+      : rf?.system === 'A'
+        ? ['405i50']
+        : ['312p50', '625i50']
+  return scans.flatMap((scan) =>
+    (rf?.colour ?? []).map((colour) => ({ scan, colour: colour as Colour })),
+  )
+}
+
+/** Sound inputs that can be listened to while a picture input is chosen. */
+const listened = (jacks: readonly CaseJack[], picture: CaseJack): OptionalInput[] =>
+  jacks
+    .filter((j) => isSoundJack(j) && j.jack.dir === 'in' && agree(picture.when, j.when))
+    .map((j) => ({ jack: j.jack.key, ifAbsent: 'silent', while: condition(j.when) }))
+
+/** Two conditions that can hold at once. */
+const agree = (a: When | undefined, b: When | undefined): boolean =>
+  Object.entries(a ?? {}).every(([control, positions]) => {
+    const other = b?.[control]
+    return !other || positions.some((p) => other.includes(p))
+  })
+
+function showing(jacks: readonly CaseJack[]): ModelFunction[] {
+  return jacks
+    .filter((j) => j.jack.dir === 'in' && isPicture(j))
+    .map((j): ModelFunction => {
+      const tuner = j.jack.form === 'rf' ? j.ports[0]?.tuner : undefined
+      return {
+        key: `shows ${j.jack.key}`,
+        kind: 'shows',
+        while: condition(j.when),
+        needs: [j.jack.key],
+        optional: j.jack.form === 'rf' ? [] : listened(jacks, j),
+        accepts: acceptRows(j),
+        gives: [],
+        ...(tuner?.control ? { tunedBy: tuner.control } : {}),
+        power: 'on',
+        ...(j.ports[0]?.hdcp === false ? { hdcp: false } : { hdcp: true }),
+      }
+    })
+}
+
+const edges = (unit: CaseUnit, from: CaseJack, to: CaseJack): CaseDoes[] =>
+  (unit.does ?? []).filter(
+    (d) => from.ports.some((p) => p.id === d.from) && to.ports.some((p) => p.id === d.to),
+  )
+
+/** Every port of the output is fed by the input, under conditions that can hold at once. */
+function feeds(unit: CaseUnit, from: CaseJack, to: CaseJack): CaseDoes[] | null {
+  const found = edges(unit, from, to)
+  return to.ports.every((p) => found.some((d) => d.to === p.id)) ? found : null
+}
+
+/** A box passes a form as it is where it can; only where it cannot does it make another. */
+function turnsInto(
+  jacks: readonly CaseJack[],
+  unit: CaseUnit,
+  from: CaseJack,
+  to: CaseJack,
+): boolean {
+  if (from.jack.form === to.jack.form) return true
+  const keeps = jacks.some(
+    (j) =>
+      j !== to &&
+      j.jack.dir === 'out' &&
+      j.jack.form === from.jack.form &&
+      samePorts(j, to) &&
+      feeds(unit, from, j),
+  )
+  const comes = jacks.some(
+    (j) =>
+      j !== from &&
+      j.jack.dir === 'in' &&
+      j.jack.form === to.jack.form &&
+      samePorts(j, from) &&
+      feeds(unit, j, to),
+  )
+  return !keeps && !comes
+}
+
+const samePorts = (a: CaseJack, b: CaseJack): boolean =>
+  a.ports.some((p) => b.ports.some((q) => p.id === q.id))
+
+function boxFunctions(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction[] {
+  const ins = jacks.filter((j) => j.jack.dir === 'in')
+  const outs = jacks.filter((j) => j.jack.dir === 'out')
+  const power = unit.powered ? ('on' as const) : ('none' as const)
+  const made: ModelFunction[] = []
+  for (const from of ins.filter(isPicture)) {
+    for (const how of ['loop', 'tuned', undefined] as const) {
+      made.push(...pictureFunction(unit, jacks, from, how, power))
+    }
+  }
+  const pictured = made.length > 0
+  if (!pictured) {
+    for (const from of ins.filter(isSoundJack)) {
+      const gives = outs
+        .filter(isSoundJack)
+        .flatMap((to) =>
+          (feeds(unit, from, to) ?? []).slice(0, 1).map((d): Give => soundGive(to, d.when)),
+        )
+      if (gives.length > 0) {
+        made.push({
+          key: `sound ${from.jack.key}`,
+          kind: 'selects',
+          needs: [from.jack.key],
+          accepts: [],
+          gives,
+          power,
+        })
+      } else if (outs.length === 0) {
+        made.push({
+          key: `speaks ${from.jack.key}`,
+          kind: 'makes-sound',
+          needs: [from.jack.key],
+          accepts: [],
+          gives: [],
+          power,
+        })
+      }
+    }
+  }
+  const aerial = ins.length === 0 ? outs.filter((j) => j.jack.form === 'rf') : []
+  for (const out of aerial) {
+    made.push({
+      key: `receives ${out.jack.key}`,
+      kind: 'receives',
+      needs: [],
+      accepts: [],
+      gives: [{ jack: out.jack.key }],
+      power: 'none',
+    })
+  }
+  return made
+}
+
+const soundGive = (to: CaseJack, when: When | undefined): Give => ({
+  jack: to.jack.key,
+  while: both(to.when, when),
+  sound: to.jack.contacts.some((c) => c.circuit === 'audio-r') ? 'same' : 'mono',
+})
+
+function pictureFunction(
+  unit: CaseUnit,
+  jacks: readonly CaseJack[],
+  from: CaseJack,
+  how: 'loop' | 'tuned' | undefined,
+  power: 'on' | 'none',
+): ModelFunction[] {
+  const outs = jacks.filter((j) => j.jack.dir === 'out')
+  const wanted = (d: CaseDoes): boolean => d.how === how
+  const gives = outs
+    .filter((to) => isPicture(to) && turnsInto(jacks, unit, from, to))
+    .flatMap((to): Give[] => {
+      const found = feeds(unit, from, to)?.filter(wanted) ?? []
+      const [edge] = found
+      if (!edge) return []
+      const made = give(to, mergeWhen(found))
+      return how === 'loop'
+        ? [{ jack: made.jack, while: made.while, picture: [{ scan: 'same', colour: 'same' }] }]
+        : [made]
+    })
+  if (gives.length === 0) return []
+  const soundOuts = outs.filter(isSoundJack).flatMap((to): Give[] => {
+    const direct = feeds(unit, from, to)?.filter(wanted) ?? []
+    const beside = jacks
+      .filter((j) => isSoundJack(j) && j.jack.dir === 'in')
+      .flatMap((s) => feeds(unit, s, to) ?? [])
+    const [edge] = direct.length > 0 ? direct : beside
+    return edge ? [soundGive(to, edge.when)] : []
+  })
+  const optional = jacks
+    .filter((s) => isSoundJack(s) && s.jack.dir === 'in')
+    .flatMap((s): OptionalInput[] => {
+      const [edge] = outs.flatMap((to) => edges(unit, s, to))
+      const fits = edge && gives.some((g) => compatible(g.while, edge.when))
+      return fits ? [{ jack: s.jack.key, ifAbsent: 'silent', while: both(s.when, edge.when) }] : []
+    })
+  const tuner = from.jack.form === 'rf' && how !== 'loop' ? from.ports[0]?.tuner : undefined
+  const agc = unit.recorderInputAgc === true || from.ports[0]?.recorderInputAgc === true
+  return [
+    {
+      key: `${how ?? 'passes'} ${from.jack.key}`,
+      kind: kindOf(from, gives, how),
+      while: condition(from.when),
+      needs: [from.jack.key],
+      optional: how === 'loop' || tuner ? [] : optional,
+      accepts: how === 'loop' ? [] : acceptRows(from),
+      gives: [...gives, ...(how === 'loop' ? [] : soundOuts)],
+      ...(tuner?.control ? { tunedBy: tuner.control } : {}),
+      power,
+      ...(agc && from.jack.form !== 'rf' ? { inputAgc: true } : {}),
+      ...(unit.hdcp === undefined ? {} : { hdcp: unit.hdcp }),
+      ...(unit.gainDb === undefined && unit.lossDb === undefined
+        ? {}
+        : { gainDb: (unit.gainDb ?? 0) - (unit.lossDb ?? 0) }),
+    },
+  ]
+}
+
+const mergeWhen = (found: readonly CaseDoes[]): When =>
+  Object.assign({}, ...found.map((d) => d.when ?? {})) as When
+
+const compatible = (a: Condition | undefined, b: When | undefined): boolean =>
+  (a ?? []).every((c) => {
+    const other = b?.[c.control]
+    return !other || c.in.some((p) => other.includes(p))
+  })
+
+function kindOf(
+  from: CaseJack,
+  gives: readonly Give[],
+  how: string | undefined,
+): ModelFunction['kind'] {
+  if (how === 'loop') return 'loop-through'
+  if (how === 'tuned') return 'remodulates'
+  if (from.jack.form === 'rf') return from.ports[0]?.tuner ? 'tunes' : 'selects'
+  return gives.some((g) => g.rf) ? 'modulates' : 'converts-form'
+}
+
+// ---------------------------------------------------------------- whole units
+
+function displayFacts(unit: CaseUnit): DisplayFacts | undefined {
+  if (!unit.deflection) return undefined
+  const tube = /crt|tube/.test(unit.kind ?? '') || unit.kind === 'monitor'
+  return {
+    screen:
+      unit.kind === 'flat'
+        ? 'flat'
+        : unit.kind === 'crt-mono'
+          ? 'tube-mono'
+          : tube
+            ? 'tube-colour'
+            : 'projector',
+    deflection: {
+      lineKhz: unit.deflection.lineKhz,
+      fieldHz: unit.deflection.fieldHz.map((hz) => [hz, hz] as const),
+      fixed: tube,
+    },
+    shape: unit.aspect === '16:9' || unit.kind === 'flat' ? '16:9' : '4:3',
+    loudspeakers: unit.sound === 'stereo' ? 'stereo' : unit.sound === 'mono' ? 'mono' : 'none',
+    storesFields: unit.fieldStore === true,
+    convertsScan: unit.scanConversion === true,
+    directView: tube && (unit.tube?.view ?? 'direct') === 'direct',
+  }
+}
+
+function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceModel {
+  const jacks = jacksOf(unit)
+  const display = displayFacts(unit)
+  const functions =
+    role === 'source'
+      ? [playing(unit, jacks), ...boxFunctions(unit, jacks)]
+      : role === 'display'
+        ? [...showing(jacks), ...boxFunctions(unit, jacks)]
+        : boxFunctions(unit, jacks)
+  return {
+    format: 1,
+    type: 'device',
+    kind: role === 'display' ? 'television' : 'other',
+    maker: '',
+    name: unit.what,
+    market: 'any',
+    aliases: [],
+    factSource: 'manual',
+    groups: [],
+    ports: unit.ports.map((p, i) => portOf(unit, p, jacks, i)),
+    jacks: jacks.map((j) => j.jack).filter((j) => j.contacts.length > 0),
+    controls: (unit.settings ?? []).flatMap((c) => controlOf(unit, c)),
+    functions,
+    leaks: unit.leaks ?? [],
+    chassis: unit.liveChassis ? 'live' : 'isolated',
+    ...(unit.powered || role !== 'box'
+      ? { mains: { volts: [100, 240] as const, hz: [50, 60] } }
+      : {}),
+    remote: 'none',
+    ...(display ? { display } : {}),
+  }
+}
+
+/** What is recorded as not working is dead, the rest works: a case knows no doubt. */
+function unitOf(id: string, unit: CaseUnit, device: DeviceModel): Unit {
+  const dead = new Set(unit.ports.filter((p) => p.works === false || p.taken).map((p) => p.id))
+  return {
+    uid: id,
+    model: id,
+    quantity: 1,
+    working: 'works',
+    holding: 'kept',
+    place: null,
+    forms: device.jacks.flatMap((jack) =>
+      jack.contacts.map(({ port }) => ({
+        jack: jack.key,
+        port,
+        state: dead.has(port) ? ('dead' as const) : ('works' as const),
+      })),
+    ),
+    functions: device.functions.map((f) => ({ function: f.key, state: 'works' as const })),
+    modifications: [],
+    stands: {},
+    remotePresent: true,
+  }
+}
+
+// ---------------------------------------------------------------- leads and adapters
+
+const USUAL_WIRES: Partial<Record<ConnectorFamily, readonly Circuit[]>> = {
+  scart: ['cvbs', 'audio-l', 'audio-r', 'r', 'g', 'b'],
+  hd15: ['r', 'g', 'b', 'hsync', 'vsync'],
+  svideo4: ['y', 'c'],
+  jack35: ['audio-l', 'audio-r', 'cvbs'],
+  dterm: ['y', 'pb', 'pr'],
+  din5: ['audio-l', 'audio-r'],
+  din6: ['cvbs', 'audio-l', 'audio-r'],
+  db23: ['r', 'g', 'b', 'csync'],
+}
+
+const LOOSE_300: readonly string[] = ['spades', 'screws', 'bare']
+
+const signalCircuits = (signals: readonly string[]): Circuit[] => [
+  ...new Set(signals.flatMap((s) => CIRCUITS_OF[s] ?? [])),
+]
+
+function pieceOf(piece: CasePiece): PieceModel {
+  const limited = piece.wired ?? piece.carries
+  const meant = limited ? signalCircuits(limited) : undefined
+  const [a, b, wires] = piece.joins ? mixing(piece) : ordinary(piece, meant)
+  const ohm = piece.ends.map((e) => (LOOSE_300.includes(e) ? 300 : 75))
+  return {
+    format: 1,
+    type: 'piece',
+    kind: piece.terminates ? 'terminator' : piece.kind,
+    maker: '',
+    name: piece.what,
+    market: 'any',
+    aliases: [],
+    factSource: 'manual',
+    a,
+    b,
+    wires,
+    ...(meant ? { meantFor: meant } : {}),
+    lossDb: piece.lossDb ?? 0,
+    ...(ohm[0] === ohm[1] ? {} : { impedanceOhm: [ohm[0]!, ohm[1]!] as const }),
+    mixes: piece.joins !== undefined,
+    suppliesVolts: (piece.volts ?? []) as SwitchVolt[],
+    blocksDc: false,
+  }
+}
+
+function mixing(piece: CasePiece): [Plug[], Plug[], Wire[]] {
+  const [separate, joined] = piece.ends as [Connector, Connector]
+  const count = piece.joins?.length ?? 2
+  return [
+    Array.from({ length: count }, () => ({ connector: separate })),
+    [{ connector: joined }],
+    Array.from({ length: count }, (_, i): Wire => ({
+      a: { plug: i, circuit: 'any' },
+      b: { plug: 0, circuit: 'any' },
+      way: 'both',
+    })),
+  ]
+}
+
+function ordinary(
+  piece: CasePiece,
+  meant: readonly Circuit[] | undefined,
+): [Plug[], Plug[], Wire[]] {
+  const [endA, endB] = piece.ends as [Connector, Connector]
+  const cores = piece.cores ?? 1
+  const singleA = isSingle(endA)
+  const singleB = isSingle(endB)
+  const many = (connector: Connector): Plug[] =>
+    Array.from({ length: cores }, () => ({ connector }))
+  if (singleA && singleB) {
+    return [many(endA), many(endB), many(endA).map((_, i) => wire(i, 'any', i, 'any'))]
+  }
+  const circuits = meant ?? usualWires(singleA ? endB : endA, singleA || singleB)
+  if (!singleA && !singleB) {
+    const volts: Circuit[] = piece.wired || piece.carries ? [] : ['switch-volts']
+    return [
+      [{ connector: endA }],
+      [{ connector: endB }],
+      [...circuits, ...volts].map((c) => wire(0, c, 0, c)),
+    ]
+  }
+  const used = circuits.slice(0, cores)
+  return singleB
+    ? [[{ connector: endA }], many(endB), used.map((c, i) => wire(0, c, i, 'any'))]
+    : [many(endA), [{ connector: endB }], used.map((c, i) => wire(i, 'any', 0, c))]
+}
+
+const wire = (a: number, ca: Circuit | 'any', b: number, cb: Circuit | 'any'): Wire => ({
+  a: { plug: a, circuit: ca },
+  b: { plug: b, circuit: cb },
+  way: 'both',
+})
+
+/** Without a list a lead between two multi-way plugs carries all that they have. */
+function usualWires(multi: Connector, fansOut: boolean): readonly Circuit[] {
+  const family = familyOf(multi) as ConnectorFamily
+  if (fansOut) return USUAL_WIRES[family] ?? ['cvbs', 'audio-l', 'audio-r']
+  return [...new Set(Object.values(FORM_CIRCUITS).flat())].filter(
+    (c) => family in CONNECTOR_FACTS && c !== 'rf',
+  )
+}
+
+// ---------------------------------------------------------------- whole cases
+
+const isPiece = (item: CaseUnit | CasePiece): item is CasePiece => 'ends' in item
+
+function protectionOf(list: readonly string[] | undefined): Protection {
+  if (list?.includes('hdcp')) return 'hdcp'
+  return list?.includes('analogue-agc') ? 'agc-pulses' : 'none'
+}
+
+/** The plan in which the numbers of stations are to be read: that of the tuners at hand. */
+function airPlan(question: CaseQuestion): string {
+  const units = [
+    question.display,
+    question.source,
+    ...question.shelf.filter((s) => !isPiece(s)),
+  ] as CaseUnit[]
+  const plans = units.flatMap((u) =>
+    u.ports.flatMap((p) => p.tuner?.plans ?? (p.rf ? [p.rf.plan] : [])),
+  )
+  const air = plans.filter((p) => !p.startsWith('us-cable'))
+  return (air[0] ?? 'us-air').split(':')[0] ?? 'us-air'
+}
+
+function offAir(question: CaseQuestion): OffAir[] {
+  const first = airPlan(question)
+  const region = first.replace(/-(air-)?(vhf|uhf)$/, first.startsWith('us-air') ? '-air' : '')
+  return question.environment.offAir.map((station) => {
+    const plan = PLAN_PARTS[region] ? region : first
+    return {
+      plan: planPart(plan).plan,
+      channel: ownName(plan, station.channel),
+      kind: station.kind,
+      ...(station.levelDbmv === undefined ? {} : { levelDbmv: station.levelDbmv }),
+    }
+  })
+}
+
+const wantsGun = (question: CaseQuestion): boolean =>
+  question.source.needs?.includes('light-gun') === true || /light.?gun/i.test(question.aim ?? '')
+
+/** Turns the question part of a case into a shelf and a question; sees nothing of what is expected. */
+export function translate(question: CaseQuestion): Translated {
+  const boxes = question.shelf.filter((s): s is CaseUnit => !isPiece(s))
+  const pieces = question.shelf.filter(isPiece)
+  const devices: [string, CaseUnit, DeviceModel][] = [
+    [SOURCE, question.source, deviceOf(question.source, 'source')],
+    [DISPLAY, question.display, deviceOf(question.display, 'display')],
+    ...boxes.map((b): [string, CaseUnit, DeviceModel] => [b.id ?? '', b, deviceOf(b, 'box')]),
+  ]
+  const pieceUnit = (p: CasePiece): Unit => ({
+    ...unitOf(p.id, { what: '', ports: [] }, EMPTY),
+    uid: p.id,
+    model: p.id,
+  })
+  return {
+    snapshot: {
+      shelfVersion: 1,
+      catalogueVersion: 1,
+      models: Object.fromEntries([
+        ...devices.map(([id, , device]) => [id, device] as const),
+        ...pieces.map((p) => [p.id, pieceOf(p)] as const),
+      ]),
+      units: [
+        ...devices.map(([id, unit, device]) => unitOf(id, unit, device)),
+        ...pieces.map(pieceUnit),
+      ],
+    },
+    question: {
+      format: 1,
+      source: { unit: SOURCE, playing: PLAYS },
+      material: { protection: protectionOf(question.source.content?.protection) },
+      display: { unit: DISPLAY },
+      demands: {
+        ...(question.environment.antennaUsed ? { keepAerial: true } : {}),
+        ...(wantsGun(question) ? { aim: 'light-gun' as const } : {}),
+      },
+      avoid: [],
+      offAir: offAir(question),
+      assumedLeads: [],
+    },
+  }
+}
+
+const EMPTY: DeviceModel = {
+  format: 1,
+  type: 'device',
+  kind: 'other',
+  maker: '',
+  name: '',
+  market: 'any',
+  aliases: [],
+  factSource: 'manual',
+  groups: [],
+  ports: [],
+  jacks: [],
+  controls: [],
+  functions: [],
+  leaks: [],
+  chassis: 'isolated',
+  remote: 'none',
+}
