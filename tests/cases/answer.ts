@@ -82,6 +82,10 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'caution.air-or-cable': 'W-CATV',
   'caution.moves-itself': 'W-AUTO-SWITCH',
   'caution.direction-switch': 'W-DIRECTION',
+  'caution.check-isolation': 'W-RADIATE',
+  'caution.radiation-limit': 'W-RADIATE',
+  'caution.level-lost': 'W-LEVEL-LOW',
+  'caution.channel-below': 'W-DSB',
   'caution.choose-by-hand': 'W-SWITCHING-VOLTAGE',
   'caution.less-detail': 'W-DROPPED-RES',
   'obstacle.added-socket': 'W-LIVE-CHASSIS',
@@ -259,6 +263,7 @@ function pathsOf(question: CaseQuestion, hookup: Hookup): CasePath[] {
   )
   return [
     { purpose: 'picture', hops: main },
+    ...offAirPaths(hookup),
     ...lanes,
     ...soundPaths(
       hookup,
@@ -266,6 +271,22 @@ function pathsOf(question: CaseQuestion, hookup: Hookup): CasePath[] {
       picture.stops.map((s) => s.unit),
     ),
   ]
+}
+
+/** From the aerial to where it is received. */
+function offAirPaths(hookup: Hookup): CasePath[] {
+  return hookup.legs
+    .filter((l) => l.purpose === 'aerial')
+    .map((leg) => ({
+      purpose: 'off-air',
+      hops: leg.stops.slice(1).flatMap((stop, i) =>
+        leg.links
+          .map((l) => hookup.links[l]!)
+          .filter((l) => l.from.unit === leg.stops[i]!.unit && l.to.unit === stop.unit)
+          .slice(0, 1)
+          .map((l) => hop(l, 'rf')),
+      ),
+    }))
 }
 
 const PURPOSES: Partial<Record<Circuit, string>> = {

@@ -864,7 +864,7 @@ function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMod
   const display = displayFacts(unit)
   const functions =
     role === 'source'
-      ? [playing(unit, jacks), ...boxFunctions(unit, jacks)]
+      ? [playing(unit, jacks), ...receiving(jacks), ...boxFunctions(unit, jacks)]
       : role === 'display'
         ? [...showing(jacks), ...boxFunctions(unit, jacks)]
         : boxFunctions(unit, jacks)
@@ -882,7 +882,7 @@ function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMod
     jacks: jacks.map((j) => j.jack).filter((j) => j.contacts.length > 0),
     controls: (unit.settings ?? []).flatMap((c) => controlOf(unit, c)),
     functions,
-    leaks: unit.leaks ?? [],
+    leaks: leaksOf(unit),
     chassis: unit.liveChassis ? 'live' : 'isolated',
     ...(unit.powered || role !== 'box'
       ? { mains: { volts: [100, 240] as const, hz: [50, 60] } }
@@ -891,6 +891,32 @@ function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMod
     ...(display ? { display } : {}),
   }
 }
+
+/** An isolation that a case does not state is none: 0 dB backwards and from input to input. */
+function leaksOf(unit: CaseUnit): DeviceModel['leaks'] {
+  const rf = unit.ports.filter((p) => p.signals.includes('rf'))
+  const stated = unit.leaks ?? []
+  const others = rf.flatMap((a) =>
+    rf
+      .filter((b) => a !== b && !stated.some((l) => l.from === a.id && l.to === b.id))
+      .map((b) => ({ from: a.id, to: b.id, db: 0 })),
+  )
+  return [...stated, ...others]
+}
+
+/** A source that receives by itself, such as a converter box, is fed by the aerial. */
+const receiving = (jacks: readonly CaseJack[]): ModelFunction[] =>
+  jacks
+    .filter((j) => j.jack.form === 'rf' && j.jack.dir === 'in' && j.ports[0]?.tuner?.control)
+    .map((j) => ({
+      key: `watches ${j.jack.key}`,
+      kind: 'tunes',
+      needs: [j.jack.key],
+      accepts: acceptRows(j),
+      gives: [],
+      tunedBy: j.ports[0]?.tuner?.control,
+      power: 'on',
+    }))
 
 /** What is recorded as not working is dead, the rest works: a case knows no doubt. */
 function unitOf(id: string, unit: CaseUnit, device: DeviceModel): Unit {

@@ -2,9 +2,10 @@ import { isSoundCircuit, TIER, SOUND_RANK, type Sound } from '@coaxwain/signal'
 import { doubtOf, formState, functionState, LIMITS, mayLend } from '@coaxwain/shelf'
 import type { Hookup, Leg, Question, SeenPicture, Snapshot, Uid } from '@coaxwain/shelf'
 import type { DeviceModel, Key } from '@coaxwain/models'
-import { Ears, type Pair } from './ears'
+import { checkAerial } from './aerial'
+import { Ears, soundOf, type Pair } from './ears'
 import { finding, type Finding } from './finding'
-import { settled, type Bench } from './flow'
+import type { Bench } from './flow'
 import { checkLinks } from './links'
 import { Positions, ShelfView } from './shelf-view'
 import { fromDisplay, walkPicture } from './walk'
@@ -35,7 +36,11 @@ export function checkHookup(snapshot: Snapshot, question: Question, hookup: Hook
   )
   const walked = walkPicture(bench, question, picture?.stops ?? [], ears)
   const sound = hear(bench, question, picture, ears, walked.embedded)
-  bench.found.push(...checkHarm(bench), ...checkClaims(bench, question, walked.picture, sound))
+  bench.found.push(
+    ...checkHarm(bench),
+    ...checkAerial(bench, question),
+    ...checkClaims(bench, question, walked.picture, sound),
+  )
   const findings = distinct(bench.found)
   return { ok: findings.length === 0, findings, picture: walked.picture, sound }
 }
@@ -183,11 +188,9 @@ function hear(
   const speaks = device.functions.filter((f) => f.kind === 'makes-sound')
   const heard = speaks.map((fn) => ears.enters(from, fn))
   return (
-    heard.map((pair) => soundFrom(pair)).sort((a, b) => SOUND_RANK[b] - SOUND_RANK[a])[0] ?? 'none'
+    heard.map((pair) => soundOf(pair)).sort((a, b) => SOUND_RANK[b] - SOUND_RANK[a])[0] ?? 'none'
   )
 }
-
-import { soundOf as soundFrom } from './ears'
 
 function checkClaims(
   bench: Bench,
@@ -220,9 +223,10 @@ const isPowered = (d: DeviceModel): boolean =>
   d.mains !== undefined || d.pack !== undefined || d.functions.some((f) => f.power !== 'none')
 
 function effortOf({ hookup, view }: Bench, question: Question): { boxes: number; pieces: number } {
-  const between = allUnits(hookup).filter(
-    (u) => u !== question.source.unit && u !== question.display.unit,
-  )
+  const aerial = hookup.legs.find((l) => l.purpose === 'aerial')?.stops[0]?.unit
+  const between = allUnits(hookup)
+    .filter((u) => u !== aerial)
+    .filter((u) => u !== question.source.unit && u !== question.display.unit)
   const devices = between.flatMap((u) => view.device(u) ?? [])
   const copies = new Set(hookup.links.flatMap((l) => l.pieces.map((p) => `${p.model} ${p.copy}`)))
   return {
@@ -312,5 +316,3 @@ function dcUnknown({ hookup, view }: Bench): number {
   }
   return pairs.size
 }
-
-export { settled }

@@ -52,6 +52,8 @@ export const FINDINGS = [
   'claims-sound',
   'claims-effort',
   'claims-doubt',
+  'aerial-not-kept',
+  'radiates',
   'legs-and-links-differ',
 ] as const
 

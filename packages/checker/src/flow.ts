@@ -378,7 +378,9 @@ const ridden = (give: Give): Sound => {
 
 /** What sound a source makes of itself. */
 export function ownSound(fn: ModelFunction, material: Material): Sound {
-  const gives = fn.gives.filter((g) => g.sound !== undefined || g.rf !== undefined)
+  const gives = fn.gives.filter(
+    (g) => g.sound !== undefined || g.rf?.some((r) => r.sound !== 'none'),
+  )
   if (gives.length === 0) return 'none'
   const stereo = gives.some((g) => g.sound === 'stereo' || g.rf?.some((r) => r.sound === 'stereo'))
   if (material.sound === undefined) return stereo ? 'stereo' : 'mono'

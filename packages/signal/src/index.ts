@@ -1,5 +1,6 @@
 export * from './arrival'
 export * from './circuits'
+export * from './coexist'
 export * from './colour'
 export * from './connectors'
 export * from './forms'

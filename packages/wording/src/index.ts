@@ -1,5 +1,7 @@
 import { format, type Details } from './format'
 import type { Locale } from './locale'
+import { APP } from './messages/app'
+import { ASK } from './messages/ask'
 import { GENERAL } from './messages/general'
 import { HOOKUP, OBSTACLES } from './messages/hookup'
 import { MODELS } from './messages/models'
@@ -13,6 +15,8 @@ export { chooseLocale, isLocale, LOCALES, type Locale } from './locale'
 /** Every message by its code. Each file under `messages/` holds one area; codes are unique over all. */
 export const MESSAGES = {
   ...GENERAL,
+  ...APP,
+  ...ASK,
   ...HOOKUP,
   ...OBSTACLES,
   ...MODELS,

@@ -29,6 +29,8 @@ export type SoundPlace = 'picture' | SoundEnd | null
 /** One way through a unit: a picture in and out, and what it does with the sound meanwhile. */
 export interface Way {
   readonly id: number
+  /** The same for ways that take a picture by the same input of the same function. */
+  readonly takeId: number
   readonly variant: Variant
   readonly fn: ModelFunction
   readonly in: Key | null
@@ -301,14 +303,16 @@ function reachable(device: DeviceModel, stand: Condition): boolean {
 /** Makes and numbers ways; one for the whole search. */
 export class WayMaker {
   private made = 0
+  private readonly takes = new Map<string, number>()
 
   constructor(private readonly faces: FaceTable) {}
 
   /** Every way through a variant that its functions allow. */
   waysOf(variant: Variant): Way[] {
-    return variant.device.functions.flatMap((fn) =>
+    const ways = variant.device.functions.flatMap((fn) =>
       draftsOf(variant.device, fn).flatMap((draft) => this.make(variant, draft)),
     )
+    return ways.filter((way) => !rightInVain(way, ways))
   }
 
   /** Sound-only ways of a variant: mixers, sound selectors, loudspeakers. */
@@ -363,6 +367,7 @@ export class WayMaker {
       {
         ...draft,
         id: this.made++,
+        takeId: this.take(`${variant.id} ${draft.fn.key} ${draft.in ?? ''}`),
         variant,
         into: this.face(wired, draft.in, draft.soundFrom, []),
         from: this.face(wired, draft.out?.jack ?? null, draft.soundTo, draft.out?.volts ?? []),
@@ -370,6 +375,12 @@ export class WayMaker {
         harm: harmOf(device, draft),
       },
     ]
+  }
+
+  private take(key: string): number {
+    const known = this.takes.get(key) ?? this.takes.size
+    this.takes.set(key, known)
+    return known
   }
 
   private face(
@@ -386,6 +397,42 @@ export class WayMaker {
       volts: volts ?? [],
     })
   }
+}
+
+const isRight = (place: SoundPlace): boolean => {
+  const end = soundEnd(place)
+  return end?.circuits.length === 1 && end.circuits[0] === 'audio-r'
+}
+
+const asLeft = (place: SoundPlace): string => {
+  const end = soundEnd(place)
+  if (!end) return String(place)
+  return `${end.jack} ${end.circuits.join()}`.replace(
+    /audio-r$/,
+    end.circuits.length === 1 ? 'audio-l' : 'audio-r',
+  )
+}
+
+const plugsOf = (placed: Placed | null): string =>
+  (placed?.face.ports ?? []).map((p) => `${p.connector} ${p.mount}`).join()
+
+/** The right channel alone is worth trying only where the left is worse off. */
+function rightInVain(way: Way, ways: readonly Way[]): boolean {
+  if (!isRight(way.soundFrom) && !isRight(way.soundTo)) return false
+  return ways.some(
+    (other) =>
+      other !== way &&
+      other.fn === way.fn &&
+      other.in === way.in &&
+      other.out === way.out &&
+      !isRight(other.soundFrom) &&
+      !isRight(other.soundTo) &&
+      asLeft(other.soundFrom) === asLeft(way.soundFrom) &&
+      asLeft(other.soundTo) === asLeft(way.soundTo) &&
+      plugsOf(other.into) === plugsOf(way.into) &&
+      plugsOf(other.from) === plugsOf(way.from) &&
+      (other.offers[0]?.doubt ?? Infinity) <= (way.offers[0]?.doubt ?? Infinity),
+  )
 }
 
 /** Ports whose automatic switch waits for a voltage need it from their cable. */

@@ -1,7 +1,15 @@
 import type { PieceModel, Plug, Wire } from '@coaxwain/models'
 import { mayLend } from '@coaxwain/shelf'
 import type { Snapshot, Uid } from '@coaxwain/shelf'
-import { contactOf, isSingle, mates, type Circuit, type Connector } from '@coaxwain/signal'
+import {
+  CONNECTORS,
+  contactOf,
+  isSingle,
+  isSoundCircuit,
+  mates,
+  type Circuit,
+  type Connector,
+} from '@coaxwain/signal'
 
 /** A wire of a piece seen from the side that it is entered by. */
 export interface Passage {
@@ -22,8 +30,9 @@ export interface Turned {
   readonly ohm: readonly [entry: number, exit: number] | null
 }
 
+/** Pieces that do the same, whatever their names and lengths. */
 export interface DrawerPiece {
-  readonly model: Uid
+  readonly models: readonly { readonly model: Uid; readonly stock: number }[]
   readonly piece: PieceModel
   /** How many there are; Infinity for the usual leads that are taken as being there. */
   readonly stock: number
@@ -33,8 +42,14 @@ export interface DrawerPiece {
 /** Leads and adapters at hand, each in both ways round. */
 export interface Drawer {
   readonly pieces: readonly DrawerPiece[]
+  readonly turned: readonly Turned[]
+  /** Every connector at which a lead could begin or end. */
+  readonly connectors: readonly Connector[]
   /** How many pieces there are in all. */
   readonly total: number
+  readonly mixers: boolean
+  /** The piece is made for such a circuit. */
+  suits(piece: number, circuit: Circuit): boolean
   /** Pieces that can be pushed onto a connector, by that connector. */
   onto(connector: Connector): readonly { readonly turned: Turned; readonly plug: number }[]
 }
@@ -86,13 +101,7 @@ export function compileDrawer(
     stock.set(unit.model, (stock.get(unit.model) ?? 0) + unit.quantity)
   }
   for (const uid of assumed) stock.set(uid, Infinity)
-  const pieces = [...stock].flatMap(([model, count]): DrawerPiece[] => {
-    const piece = snapshot.models[model]
-    if (piece?.type !== 'piece' || piece.kind === 'terminator' || count <= 0) return []
-    return [{ model, piece, stock: count, passesVolts: passesVolts(piece) }]
-  })
-  // By content, so that neither names nor the order on the shelf decide between equals.
-  pieces.sort((a, b) => compareContent(a.piece, b.piece))
+  const pieces = classes(snapshot, stock)
   const turned = pieces.flatMap(({ piece }, i) =>
     symmetric(piece)
       ? [turn(piece, i, 'forward')]
@@ -101,6 +110,10 @@ export function compileDrawer(
   const byConnector = new Map<Connector, { turned: Turned; plug: number }[]>()
   return {
     pieces,
+    turned,
+    connectors: CONNECTORS,
+    mixers: pieces.some((p) => p.piece.mixes),
+    suits: (piece, circuit) => meantFor(pieces[piece]?.piece.meantFor, circuit),
     total: pieces.reduce((sum, p) => sum + p.stock, 0),
     onto(connector) {
       const known = byConnector.get(connector)
@@ -139,10 +152,62 @@ const sharedExit = (turned: Turned, passage: Passage): number | null =>
     ? passage.exitPlug
     : null
 
-const withoutNames = (piece: PieceModel): string =>
-  JSON.stringify({ ...piece, maker: '', name: '', aliases: [], year: 0 })
+const ofAll = (piece: PieceModel): number => piece.a.length + piece.b.length
 
-const compareContent = (a: PieceModel, b: PieceModel): number => {
-  const [x, y] = [withoutNames(a), withoutNames(b)]
-  return x < y ? -1 : x > y ? 1 : 0
+const leadFirst = (a: PieceModel, b: PieceModel): number =>
+  Number(b.kind === 'lead') - Number(a.kind === 'lead')
+
+/** Alike in everything that matters between two sockets. */
+const content = (piece: PieceModel): string =>
+  JSON.stringify({
+    kind: piece.kind,
+    a: piece.a,
+    b: piece.b,
+    wires: piece.wires,
+    meantFor: piece.meantFor ?? null,
+    lossDb: piece.lossDb,
+    impedanceOhm: piece.impedanceOhm ?? null,
+    mixes: piece.mixes,
+    suppliesVolts: piece.suppliesVolts,
+    blocksDc: piece.blocksDc,
+  })
+
+/** Puts pieces that do the same together, those with the fewest plugs first: none is left hanging. */
+function classes(snapshot: Snapshot, stock: ReadonlyMap<Uid, number>): DrawerPiece[] {
+  const groups = new Map<string, { model: Uid; stock: number; piece: PieceModel }[]>()
+  for (const [model, count] of stock) {
+    const piece = snapshot.models[model]
+    if (piece?.type !== 'piece' || piece.kind === 'terminator' || count <= 0) continue
+    const key = content(piece)
+    groups.set(key, [...(groups.get(key) ?? []), { model, stock: count, piece }])
+  }
+  // By content, so that neither names nor the order on the shelf decide between equals.
+  return [...groups.entries()]
+    .sort(
+      ([x, [a]], [y, [b]]) =>
+        ofAll(a!.piece) - ofAll(b!.piece) || leadFirst(a!.piece, b!.piece) || (x < y ? -1 : 1),
+    )
+    .map(([, members]) => ({
+      models: members
+        .map(({ model, stock: n }) => ({
+          model,
+          stock: n,
+          length: snapshotLength(snapshot, model),
+        }))
+        .sort((a, b) => a.length - b.length),
+      piece: members[0]!.piece,
+      stock: members.reduce((sum, m) => sum + m.stock, 0),
+      passesVolts: passesVolts(members[0]!.piece),
+    }))
 }
+
+/** Shorter leads first. */
+function snapshotLength(snapshot: Snapshot, model: Uid): number {
+  const piece = snapshot.models[model]
+  return piece?.type === 'piece' ? (piece.lengthMm ?? 0) : 0
+}
+
+export const meantFor = (meant: readonly Circuit[] | undefined, circuit: Circuit): boolean =>
+  !meant ||
+  meant.includes(circuit) ||
+  (isSoundCircuit(circuit) && meant.some((c) => isSoundCircuit(c)))

@@ -1,6 +1,7 @@
 import { LIMITS } from '@coaxwain/shelf'
 import type { SwitchVolt } from '@coaxwain/signal'
 import type { Face, FacePort } from '../compile/face'
+import { Distances } from './distance'
 import type { Drawer } from './drawer'
 import { Router, usageOf, type Routing, type WantedWire } from './route'
 import {
@@ -42,6 +43,7 @@ const SPARE_PIECES = 2
 export class JoinTable {
   private readonly known = new Map<string, readonly Join[]>()
   private readonly single = new Map<string, number>()
+  private readonly distances: Distances
   /** True once a longer way round a scarce piece was not sought. */
   capped = false
 
@@ -49,7 +51,9 @@ export class JoinTable {
   constructor(
     readonly drawer: Drawer,
     private readonly scarce: ReadonlySet<number>,
-  ) {}
+  ) {
+    this.distances = new Distances(drawer)
+  }
 
   get hasScarce(): boolean {
     return this.scarce.size > 0
@@ -87,15 +91,22 @@ export class JoinTable {
     picture: PictureMeeting | null,
     sound: SoundMeeting | null,
   ): Join[] {
-    const least = Math.max(...wires.map((w) => this.leastFor(out, into, w)))
+    if (sound === 'fold' && !this.drawer.mixers) return []
+    const each = wires.map((w) => this.leastFor(out, into, w))
+    const least = Math.max(...each)
     if (least === Infinity) return []
+    // Every wire by pieces of its own is the most that can be needed; a mixing piece is one more.
+    const most = Math.min(
+      MOST_PIECES,
+      each.reduce((sum, n) => sum + n, sound === 'fold' ? 1 : 0),
+    )
     const kept: Join[] = []
-    for (let pieces = least; pieces <= MOST_PIECES; pieces++) {
+    for (let pieces = least; pieces <= Math.max(most, least) + this.slack(kept); pieces++) {
       if (kept[0] && pieces > kept[0].pieces + SPARE_PIECES && this.drawer.total > MOST_PIECES) {
         this.capped ||= this.scarce.size > 0
         break
       }
-      new Router(this.drawer, out, into, wires, pieces, (routing) => {
+      new Router(this.drawer, this.distances, out, into, wires, pieces, (routing) => {
         const join = this.judge(out, into, wires, routing, picture, sound)
         if (join && !kept.some((k) => noWorse(k, join))) kept.push(join)
         return settled(kept, out)
@@ -103,6 +114,11 @@ export class JoinTable {
       if (settled(kept, out)) break
     }
     return kept
+  }
+
+  /** Round a scarce piece or a missing voltage it may take longer. */
+  private slack(kept: readonly Join[]): number {
+    return kept.length > 0 || this.scarce.size > 0 ? SPARE_PIECES : 0
   }
 
   /** The fewest pieces by which one wire alone can come about. */
@@ -114,7 +130,7 @@ export class JoinTable {
     if (known !== undefined) return known
     let least = Infinity
     for (let pieces = 0; pieces <= LIMITS.piecesInLink && least === Infinity; pieces++) {
-      new Router(this.drawer, out, into, [wire], pieces, () => {
+      new Router(this.drawer, this.distances, out, into, [wire], pieces, () => {
         least = pieces
         return true
       }).run()

@@ -1,7 +1,8 @@
 import { LIMITS } from '@coaxwain/shelf'
 import { isSoundCircuit, mates, type Circuit, type Connector } from '@coaxwain/signal'
 import type { Face, FacePort } from '../compile/face'
-import type { Drawer, Passage, Turned } from './drawer'
+import type { Distances } from './distance'
+import { meantFor, type Drawer, type Passage, type Turned } from './drawer'
 
 /** One wire that must come about: a contact of an output to a contact of an input. */
 export interface WantedWire {
@@ -70,6 +71,7 @@ export class Router {
 
   constructor(
     private readonly drawer: Drawer,
+    private readonly distances: Distances,
     private readonly out: Face,
     private readonly into: Face,
     private readonly wires: readonly WantedWire[],
@@ -147,9 +149,21 @@ export class Router {
       this.arrive(index, wire.toPort, open)
       this.part(end, to)
     }
-    if (open.hops.length >= LIMITS.piecesInLink) return
+    if (this.tooFar(wire, target, open)) return
     this.intoLaidOut(index, end, open)
     if (this.instances.length < this.pieces) this.intoNew(index, end, open)
+  }
+
+  /** The target cannot be reached with the pieces that a link may still have. */
+  private tooFar(wire: WantedWire, target: FacePort, open: Open): boolean {
+    const left = this.distances.from(
+      open.connector,
+      open.contact,
+      wire.circuit,
+      target,
+      wire.toContact,
+    )
+    return open.hops.length + Math.max(left, 1) > LIMITS.piecesInLink
   }
 
   private pluggable(open: Open, target: FacePort): boolean {
@@ -191,6 +205,7 @@ export class Router {
       const lead = this.drawer.pieces[turned.piece]?.piece.kind === 'lead' ? 1 : 0
       if (open.leads + lead > LIMITS.leadsInLink || this.usedUp(turned.piece)) continue
       const instance = this.instances.length
+      if (!this.leadsOn(index, turned, plug, open)) continue
       this.instances.push({ turned, entry: [], exit: [] })
       const to: End = { at: 'piece', instance, plug }
       this.join(end, to)
@@ -198,6 +213,23 @@ export class Router {
       this.part(end, to)
       this.instances.pop()
     }
+  }
+
+  /** Some wire of the piece brings the signal nearer within what is left. */
+  private leadsOn(index: number, turned: Turned, plug: number, open: Open): boolean {
+    const wire = this.wires[index] as WantedWire
+    const target = this.into.ports[wire.toPort] as FacePort
+    return turned.passages.some((p) => {
+      if (p.plug !== plug || !enters(p, open.contact)) return false
+      const left = this.distances.from(
+        turned.exit[p.exitPlug]!.connector,
+        p.exitContact ?? open.contact,
+        wire.circuit,
+        target,
+        wire.toContact,
+      )
+      return open.hops.length + 1 + left <= LIMITS.piecesInLink
+    })
   }
 
   private usedUp(piece: number): boolean {
@@ -217,7 +249,7 @@ export class Router {
     if (ohm === null) return
     for (const passage of turned.passages) {
       if (passage.plug !== plug || !enters(passage, open.contact)) continue
-      if (this.taken(index, at, passage, drawn.piece.mixes)) continue
+      if (this.taken(index, at, passage, drawn.piece.mixes, open.hops)) continue
       this.follow(
         index,
         { at: 'piece', instance: at, plug: passage.exitPlug },
@@ -234,17 +266,34 @@ export class Router {
   }
 
   /** Two wires never share a way through a piece, nor a contact of its exit unless it is made to mix them. */
-  private taken(index: number, at: number, passage: Passage, mixes: boolean): boolean {
+  private taken(
+    index: number,
+    at: number,
+    passage: Passage,
+    mixes: boolean,
+    path: readonly Hop[],
+  ): boolean {
     const wire = this.wires[index] as WantedWire
     return this.hops.slice(0, index).some((hops, other) =>
       hops.some((hop) => {
         if (hop.instance !== at || hop.outPlug !== passage.exitPlug) return false
+        if (this.mixedBefore(hops, at, path)) return false
         const sameEnd =
           (this.wires[other] as WantedWire).toPort === wire.toPort &&
           (this.wires[other] as WantedWire).toContact === wire.toContact
         const single = passage.exitContact === 'pin'
         return (single || sameEnd) && !(mixes && isSoundCircuit(wire.circuit))
       }),
+    )
+  }
+
+  /** Both wires came out of one mixing piece, and have been one ever since. */
+  private mixedBefore(other: readonly Hop[], at: number, path: readonly Hop[]): boolean {
+    return path.some(
+      (mine) =>
+        mine.instance !== at &&
+        this.drawer.pieces[this.instances[mine.instance]!.turned.piece]?.piece.mixes === true &&
+        other.some((o) => o.instance === mine.instance && o.outPlug === mine.outPlug),
     )
   }
 
@@ -267,8 +316,3 @@ export class Router {
 
 const enters = (passage: Passage, contact: string | null): boolean =>
   passage.contact === null || contact === null || passage.contact === contact
-
-const meantFor = (meant: readonly Circuit[] | undefined, circuit: Circuit): boolean =>
-  !meant ||
-  meant.includes(circuit) ||
-  (isSoundCircuit(circuit) && meant.some((c) => isSoundCircuit(c)))

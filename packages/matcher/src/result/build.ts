@@ -51,9 +51,9 @@ function speaker({ solved, frame }: BuildInput): Uid | null {
 }
 
 const unitFor = ({ solved, frame }: BuildInput, way: Way): Unit => {
-  const unit =
-    solved.units.get(way) ?? (way.variant === frame.source ? frame.source : frame.display).units[0]
-  if (!unit) throw new Error('a way without a unit')
+  const end = [frame.source, frame.display].find((v) => v === way.variant)
+  const unit = end ? end.units[0] : solved.units.get(way)
+  if (!unit) throw new Error(`no unit was picked for ${way.fn.key}`)
   return unit
 }
 
@@ -158,8 +158,64 @@ function makeLegs(input: BuildInput, stops: readonly PathStop[], made: LinkMaker
     soundLinks.push(...addRoute(input, made, found.speakers.route, from, speakersStop(input)))
   }
   const picture: Leg = { purpose: 'picture', stops: stops.map(stopOf(input)), links: pictureLinks }
-  if (soundLinks.length === 0) return [picture]
-  return [picture, { purpose: 'sound', stops: soundStops(input, stops), links: soundLinks }]
+  const sound: Leg[] =
+    soundLinks.length === 0
+      ? []
+      : [{ purpose: 'sound', stops: soundStops(input, stops), links: soundLinks }]
+  return [picture, ...sound, ...aerialLeg(input, stops, made, pictureLinks)]
+}
+
+/** From the aerial through boxes of its own to where it joins, and on with the picture. */
+function aerialLeg(
+  input: BuildInput,
+  stops: readonly PathStop[],
+  made: LinkMaker,
+  pictureLinks: readonly number[],
+): Leg[] {
+  const use = input.solved.found.aerial
+  if (!use) return []
+  const joint = stops.findIndex((s) => s.way === use.at)
+  const at = stops[joint]
+  if (!at) return []
+  const { ways, joins } = use.route
+  const own = ways.map((way) => ({ way, unit: unitFor(input, way) }))
+  const links = joins.flatMap((join, i) => {
+    const from = own[i]!
+    const next = own[i + 1]
+    const to = next
+      ? { unit: next.unit.uid, placed: next.way.into! }
+      : { unit: at.unit.uid, placed: use.into }
+    return made.add(join, { unit: from.unit.uid, placed: from.way.from! }, to)
+  })
+  const after = use.fn.tunedBy === undefined ? stops.slice(joint + 1) : []
+  const shared = pictureLinks.filter((i) => {
+    const link = made.links[i]!
+    return after.some((s) => s.unit.uid === link.to.unit) && link.from.unit !== link.to.unit
+  })
+  const stop = (unit: Unit, fn: Key, into: Key | null, out: Key | null): Stop => ({
+    unit: unit.uid,
+    function: fn,
+    in: into,
+    out,
+    picture: null,
+    sound: 'none',
+  })
+  return [
+    {
+      purpose: 'aerial',
+      stops: [
+        ...own.map(({ way, unit }) => stop(unit, way.fn.key, way.in, way.out?.jack ?? null)),
+        stop(
+          at.unit,
+          use.fn.key,
+          use.in,
+          use.fn.tunedBy === undefined ? (at.way.out?.jack ?? null) : null,
+        ),
+        ...after.map((s) => stop(s.unit, s.way.fn.key, s.way.in, s.way.out?.jack ?? null)),
+      ],
+      links: [...links, ...shared],
+    },
+  ]
 }
 
 interface RouteEnd {

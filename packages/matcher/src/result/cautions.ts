@@ -1,6 +1,7 @@
 import { portOf } from '@coaxwain/models'
 import type { Caution, Hookup } from '@coaxwain/shelf'
 import { SCANS, TIER } from '@coaxwain/signal'
+import { AERIAL_LIMIT_DBMV } from '../search/aerial'
 import { pathOf } from '../search/label'
 import type { BuildInput, PathStop } from './build'
 
@@ -110,7 +111,7 @@ const channels: Rule = (c) =>
     if (!channel) return []
     if (channel.onAir) return [caution('channel-on-air', { channel: channel.name, name: named(s) })]
     const [other] = channel.orElse
-    return other === undefined || c.input.offAir.length > 0
+    return other === undefined || (c.input.offAir.length > 0 && !c.input.solved.found.aerial)
       ? []
       : [caution('channel-may-be-used', { channel: channel.name, other })]
   })
@@ -195,10 +196,40 @@ const dcUnknown: Rule = (c) =>
     ? [caution('check-dc')]
     : []
 
+/** What gets up to the aerial stays under the limit, or nobody knows (47 CFR 15.115(c)(1)). */
+const radiation: Rule = (c) => {
+  const use = c.input.solved.found.aerial
+  if (!use || use.radiatesDbmv === -Infinity) return []
+  if (use.radiatesDbmv === null)
+    return [caution('check-isolation', { name: use.variant.device.name })]
+  return [
+    caution('radiation-limit', {
+      level: Math.round(use.radiatesDbmv * 10) / 10,
+      limit: AERIAL_LIMIT_DBMV,
+    }),
+  ]
+}
+
+/** Passive joints and splitters on the way cost level. */
+const lossOnTheWay: Rule = (c) => {
+  const loss = boxes(c).reduce((sum, s) => sum + Math.min(0, s.way.fn.gainDb ?? 0), 0)
+  return loss <= -3 ? [caution('level-lost', { db: -loss })] : []
+}
+
+/** The sideband of an unfiltered modulator falls on a station below. */
+const sideband: Rule = (c) => {
+  const use = c.input.solved.found.aerial
+  if (!use?.together) return []
+  return c.stops
+    .filter((s) => s.sends !== null && s.way.out?.rf?.some((r) => r.sideband === 'double'))
+    .map((s) => caution('channel-below', { name: named(s), channel: s.sends!.channel.name }))
+}
+
 /** Danger first, then what is lost, then what helps. */
 const RULES: readonly Rule[] = [
   liveChassis,
   neverToAerial,
+  radiation,
   dcUnknown,
   mainsDiffer,
   packs,
@@ -208,6 +239,8 @@ const RULES: readonly Rule[] = [
   sound,
   progressive,
   channels,
+  sideband,
+  lossOnTheWay,
   airOrCable,
   automatic,
   directionSwitch,

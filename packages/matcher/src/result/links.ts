@@ -11,14 +11,27 @@ interface End {
 /** Numbers the pieces of a hookup: two of one sort are two copies, cores of one lead share its number. */
 export class LinkMaker {
   private readonly copies = new Map<Uid, number>()
+  private readonly drawn = new Map<number, number>()
   readonly links: Link[] = []
 
   constructor(private readonly drawer: Drawer) {}
 
+  /** The next piece of a sort: its models in turn, each as often as it is there. */
+  private draw(piece: number): Uid {
+    let nth = this.drawn.get(piece) ?? 0
+    this.drawn.set(piece, nth + 1)
+    const { models } = this.drawer.pieces[piece]!
+    for (const m of models) {
+      if (nth < m.stock) return m.model
+      nth -= m.stock
+    }
+    return models.at(-1)!.model
+  }
+
   /** Adds the links of one join, and says which they are. */
   add(join: Join, from: End, to: End): number[] {
     const copies = join.routing.instances.map(({ piece }) => {
-      const { model } = this.drawer.pieces[piece]!
+      const model = this.draw(piece)
       const copy = (this.copies.get(model) ?? 0) + 1
       this.copies.set(model, copy)
       return { model, copy }

@@ -16,6 +16,7 @@ export function waysUsed(found: Finished): Way[] {
     ...path.slice(1).map((l) => l.way),
     ...alone,
     ...(found.speakers ? [found.speakers.way] : []),
+    ...(found.aerial?.route.ways ?? []),
   ]
 }
 
@@ -25,6 +26,7 @@ export function joinsUsed(found: Finished): Join[] {
   return [
     ...steps.flatMap((s) => [s.join, ...(s.soundRoute?.joins ?? [])]),
     ...(found.speakers?.route.joins ?? []),
+    ...(found.aerial?.route.joins ?? []),
   ]
 }
 

@@ -1,10 +1,11 @@
 import { jackOf, together, type Condition, type DeviceModel } from '@coaxwain/models'
-import type { Protection, Sound } from '@coaxwain/signal'
+import { SOUND_RANK, type Protection, type Sound } from '@coaxwain/signal'
 import { accept, type Taken } from '../compile/accept'
 import { leave, type Leaving } from '../compile/leave'
 import type { Sig, SigTable } from '../compile/sig'
 import type { SoundEnd, Way } from '../compile/way'
 import type { Join, JoinTable } from '../join/join'
+import { levelOf, type Aerials, type AerialUse } from './aerial'
 import { leastApart } from './assign'
 import { pathOf, type Label, type SoundRoute, type SoundState, type Step } from './label'
 import { met, toMono, type SoundRoutes } from './sound-route'
@@ -44,20 +45,23 @@ function shareSocket(way: Way, side: 'into' | 'from'): boolean {
 }
 
 export class Expander {
-  private readonly takenBy = new Map<string, readonly Taken[]>()
-  private readonly leavingBy = new Map<string, readonly Leaving[]>()
+  private readonly takenBy = new Map<number, Map<number, readonly Taken[]>>()
+  private readonly leavingBy = new Map<number, Map<number, readonly Leaving[]>>()
 
   constructor(
     private readonly joins: JoinTable,
     private readonly sounds: SoundRoutes,
     private readonly sigs: SigTable,
     private readonly scarceUnits: ReadonlySet<string>,
+    private readonly aerials: Aerials | null,
   ) {}
 
   /** Every way of entering a unit from a label. */
   entries(label: Label, way: Way): Entry[] {
     if (!label.way.from || !way.into || stopsAt(way.variant.device, way, label.sig.protection))
       return []
+    const pictures = this.joins.between(label.way.from.face, way.into.face, PICTURE)
+    if (pictures.every((join) => this.taken(way, label.sig, join).length === 0)) return []
     const unknown = handshakeUnknown(way, label.sig.protection) ? 1 : 0
     return this.meetings(label, way).flatMap(({ join, route, sound, left }) =>
       this.taken(way, label.sig, join).map((taken): Entry => {
@@ -84,7 +88,7 @@ export class Expander {
       if (way.soundFrom === 'picture' && label.sig.sound === 'none') return []
       const left = waits && this.mayStay(label) ? waits : NONE
       return this.joins
-        .between(out, into, { picture: true, sound: false })
+        .between(out, into, PICTURE)
         .map((join) => ({ join, route: null, sound: label.sig.sound, left }))
     }
     if (!waits) return []
@@ -110,7 +114,7 @@ export class Expander {
     // Between the same two units a straight route is a link of both, found already.
     const own = waits.at === label ? routes.filter((r) => r.via !== null) : routes
     if (own.length === 0) return []
-    const pictures = this.joins.between(out, into, { picture: true, sound: false })
+    const pictures = this.joins.between(out, into, PICTURE)
     return pictures.flatMap((join) =>
       own.map((route) => ({ join, route, sound: route.sound, left: NONE })),
     )
@@ -125,18 +129,17 @@ export class Expander {
 
   private taken(way: Way, sig: Sig, join: Join): readonly Taken[] {
     const lumaOnly = join.picture === 'luma-only'
-    const key = `${way.variant.id} ${way.fn.key} ${way.in ?? ''} ${sig.id} ${lumaOnly ? 'y' : ''} ${join.volts.join()}`
-    const known = this.takenBy.get(key)
-    if (known) return known
-    const made = accept(
-      way.variant.device,
-      way.fn,
-      way.in ?? '',
-      { sig, lumaOnly, volts: join.volts },
-      (from, carrier) => this.sigs.intern({ ...from, carrier }),
+    const volts =
+      (join.volts.includes('av-select') ? 2 : 0) + (join.volts.includes('rgb-select') ? 4 : 0)
+    return remember(this.takenBy, way.takeId, sig.id * 8 + volts + (lumaOnly ? 1 : 0), () =>
+      accept(
+        way.variant.device,
+        way.fn,
+        way.in ?? '',
+        { sig, lumaOnly, volts: join.volts },
+        (from, carrier) => this.sigs.intern({ ...from, carrier }),
+      ),
     )
-    this.takenBy.set(key, made)
-    return made
   }
 
   /** The labels that leave a unit by a way, after an entry. */
@@ -156,6 +159,7 @@ export class Expander {
         sig: leaving.sig,
         stand,
         sound: entry.left,
+        aerial: label.aerial,
         depth: label.depth + 1,
         prev: label,
         step: entry.step,
@@ -169,8 +173,52 @@ export class Expander {
       } else if (way.soundTo === 'picture' && leaving.sig.sound === 'none') {
         continue
       }
-      add(made)
+      if (made.aerial && !this.passesOn(way)) continue
+      for (const variant of this.withAerial(label, made)) add(variant)
     }
+  }
+
+  /** A label as it is, and once for each way in which an aerial can join at its last unit. */
+  withAerial(before: Label | null, made: Label): Label[] {
+    if (!this.aerials || made.aerial) return [made]
+    const uses = [...this.aerials.atBox(before, made.way), ...this.atOwnTuner(made)]
+    return [made, ...uses.flatMap((use) => this.joined(made, use))]
+  }
+
+  private atOwnTuner(made: Label): AerialUse[] {
+    const taken = [...(made.way.into?.ports ?? []), ...(made.way.from?.ports ?? [])]
+    return this.aerials?.atTuner(made.way, taken) ?? []
+  }
+
+  private joined(made: Label, use: AerialUse): Label[] {
+    const sig = use.together
+      ? this.aerials!.narrowed(made.sig, this.sigs, levelOf(made) ?? 0)
+      : made.sig
+    if (!sig) return []
+    const copy: Omit<Label, 'sound'> & { sound: SoundState } = {
+      ...made,
+      sig,
+      aerial: use,
+      boxes: made.boxes + use.boxes,
+      pieces: made.pieces + use.pieces,
+      doubt: made.doubt + use.doubt,
+    }
+    if (copy.sound.kind === 'waits' && copy.sound.at === made)
+      copy.sound = { ...copy.sound, at: copy }
+    return [copy]
+  }
+
+  /** An aerial that has joined before goes on to the next unit, or is received there. */
+  private passesOn(way: Way): boolean {
+    if (way.fn.tunedBy !== undefined) return this.aerials?.canWatch(way.fn) ?? false
+    const { device } = way.variant
+    return device.functions.some(
+      (fn) =>
+        fn.tunedBy === undefined &&
+        way.in !== null &&
+        [...fn.needs, ...(fn.oneOf ?? [])].includes(way.in) &&
+        fn.gives.some((g) => g.jack === way.out?.jack && g.rf === undefined),
+    )
   }
 
   /** Doubt that one more unit adds; exact where a chain may want more of a sort than there are. */
@@ -185,23 +233,38 @@ export class Expander {
   }
 
   private leaving(way: Way, taken: Taken, lumaOnly: boolean, sound: Sound): readonly Leaving[] {
-    const give = way.out!
-    const key = `${way.id} ${taken.sig.id} ${taken.colour ? 'c' : ''} ${lumaOnly ? 'y' : ''} ${sound}`
-    const known = this.leavingBy.get(key)
-    if (known) return known
-    const made = leave(
-      way.variant.device,
-      way.fn,
-      give,
-      { sig: taken.sig, colour: taken.colour, lumaOnly, sound },
-      this.sigs,
+    const flags = (taken.colour ? 1 : 0) + (lumaOnly ? 2 : 0) + 4 * SOUND_RANK[sound]
+    return remember(this.leavingBy, way.id, taken.sig.id * 16 + flags, () =>
+      leave(
+        way.variant.device,
+        way.fn,
+        way.out!,
+        { sig: taken.sig, colour: taken.colour, lumaOnly, sound },
+        this.sigs,
+      ),
     )
-    this.leavingBy.set(key, made)
-    return made
   }
 }
 
+/** What is worked out once per pair of numbers. */
+function remember<T>(
+  table: Map<number, Map<number, T>>,
+  first: number,
+  second: number,
+  make: () => T,
+): T {
+  let row = table.get(first)
+  if (!row) table.set(first, (row = new Map<number, T>()))
+  const known = row.get(second)
+  if (known !== undefined) return known
+  const made = make()
+  row.set(second, made)
+  return made
+}
+
 const NONE: SoundState = { kind: 'none' }
+
+const PICTURE = { picture: true, sound: false }
 
 /** The positions of a unit once its way, what it takes and what it gives are put together. */
 export function settle(way: Way, ...more: readonly Condition[]): Condition | null {

@@ -9,6 +9,7 @@ import {
   type Sound,
 } from '@coaxwain/signal'
 import type { Way } from '../compile/way'
+import type { Aerials, AerialUse } from './aerial'
 import { settle, type Entry, type Expander } from './expand'
 import { pathOf, type Finished, type Label, type SpeakersUse } from './label'
 import { fromLoudspeakers, pictureScore, qualityAt, soundScore } from './measure'
@@ -22,6 +23,7 @@ export class Finisher {
   constructor(
     private readonly demands: Demands,
     private readonly speakers: readonly Way[],
+    private readonly aerials: Aerials | null,
   ) {}
 
   use(sounds: SoundRoutes, expander: Expander): void {
@@ -34,7 +36,9 @@ export class Finisher {
       const seen = this.see(label, end, entry)
       if (!seen) return []
       return this.hear(end, entry).flatMap(({ sound, use }) =>
-        this.weigh(label, end, entry, seen, sound, use),
+        this.aerialWays(label, end).flatMap((aerial) =>
+          this.weigh(label, end, entry, { picture: seen, sound, speakers: use, aerial }),
+        ),
       )
     })
   }
@@ -88,14 +92,24 @@ export class Finisher {
     )
   }
 
+  /** The aerial as it has joined, or by another input of the display; none where it is not asked for. */
+  private aerialWays(label: Label, end: Way): (AerialUse | null)[] {
+    if (!this.aerials) return [null]
+    if (!label.aerial) return this.aerials.atTuner(end, end.into?.ports ?? [])
+    const received =
+      pathOf(label).some((l) => l.step !== null && l.way.fn.tunedBy !== undefined) ||
+      label.aerial.fn.tunedBy !== undefined
+    return received || this.aerials.canWatch(end.fn) ? [label.aerial] : []
+  }
+
   private weigh(
     label: Label,
     end: Way,
     entry: Entry,
-    picture: Finished['picture'],
-    sound: Sound,
-    speakers: SpeakersUse | null,
+    ways: Pick<Finished, 'picture' | 'sound' | 'speakers' | 'aerial'>,
   ): Finished[] {
+    const { picture, sound, speakers, aerial } = ways
+    const late = aerial && aerial !== label.aerial ? aerial : { boxes: 0, pieces: 0, doubt: 0 }
     if (this.demands.stereo === true && sound !== 'stereo') return []
     const stand = settle(end, entry.step.taken.stand)
     if (!stand) return []
@@ -109,12 +123,12 @@ export class Finisher {
     const axes: Axes = {
       picture: pictureScore(picture.quality, picture.lumaMhz, picture.degradations.length),
       sound: soundScore(sound),
-      boxes: label.boxes + entry.boxes + extra.boxes,
-      pieces: label.pieces + entry.pieces + extra.pieces,
-      doubt: label.doubt + entry.doubt + extra.doubt + (end.offers[0]?.doubt ?? 0),
+      boxes: label.boxes + entry.boxes + extra.boxes + late.boxes,
+      pieces: label.pieces + entry.pieces + extra.pieces + late.pieces,
+      doubt: label.doubt + entry.doubt + extra.doubt + late.doubt + (end.offers[0]?.doubt ?? 0),
       disturbance: 0,
     }
-    return [{ last: label, end, step: entry.step, stand, speakers, picture, sound, axes }]
+    return [{ last: label, end, step: entry.step, stand, speakers, aerial, picture, sound, axes }]
   }
 }
 

@@ -5,6 +5,7 @@ import type { Sig } from '../compile/sig'
 import type { Taken } from '../compile/accept'
 import type { Way } from '../compile/way'
 import type { Join } from '../join/join'
+import type { AerialUse } from './aerial'
 
 /** Sound on its own wires: from where it waits to where it is taken, perhaps through one box. */
 export interface SoundRoute {
@@ -34,6 +35,8 @@ export interface Label extends Cost {
   readonly sig: Sig
   readonly stand: Condition
   readonly sound: SoundState
+  /** Where an aerial has joined; null while none has. */
+  readonly aerial: AerialUse | null
   readonly depth: number
   readonly prev: Label | null
   readonly step: Step | null
@@ -61,6 +64,7 @@ export interface Finished {
   readonly step: Step
   readonly stand: Condition
   readonly speakers: SpeakersUse | null
+  readonly aerial: AerialUse | null
   readonly picture: SeenPicture
   readonly sound: Sound
   readonly axes: Axes

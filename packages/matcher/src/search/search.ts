@@ -4,6 +4,7 @@ import type { Face } from '../compile/face'
 import type { SigTable } from '../compile/sig'
 import type { Way } from '../compile/way'
 import type { JoinTable } from '../join/join'
+import type { Aerials } from './aerial'
 import { assign } from './assign'
 import { reachEnd } from './bounds'
 import { Expander } from './expand'
@@ -22,6 +23,8 @@ export interface SearchSpace {
   readonly joins: JoinTable
   readonly sigs: SigTable
   readonly finisher: Finisher
+  /** Null when nobody asks for the aerial to be kept. */
+  readonly aerials: Aerials | null
   /** Sorts of units of which a chain may want more than there are; their use is kept in the label. */
   readonly scarceUnits: ReadonlySet<string>
 }
@@ -49,12 +52,14 @@ export class Search {
     private readonly budget: number = LIMITS.budget,
   ) {
     const sounds = new SoundRoutes(space.joins, space.soundBoxes)
-    this.expander = new Expander(space.joins, sounds, space.sigs, space.scarceUnits)
+    this.expander = new Expander(space.joins, sounds, space.sigs, space.scarceUnits, space.aerials)
     space.finisher.use(sounds, this.expander)
     this.byFace = groupByFace(space.boxes)
     this.stepsLeft = reachEnd(space, this.byFace)
     this.layer = []
-    for (const start of space.starts) this.add(start)
+    for (const start of space.starts) {
+      for (const label of this.expander.withAerial(null, start)) this.add(label)
+    }
     this.layer = this.next
     this.next = []
   }
@@ -161,7 +166,7 @@ export class Search {
         : sound.at === label
           ? `here ${sound.sound}`
           : `${sound.at.way.from!.face.id} ${sound.sound}`
-    return `${label.way.from!.face.id} ${label.sig.id} ${where} ${this.scarce(label)}`
+    return `${label.way.from!.face.id} ${label.sig.id} ${where} ${label.aerial ? 'aerial' : ''} ${this.scarce(label)}`
   }
 
   /** Takes more of a scarce sort of piece than the drawer holds. */

@@ -7,6 +7,7 @@ import { WayMaker, type Way } from '../compile/way'
 import { compileDrawer, type Drawer } from '../join/drawer'
 import { JoinTable } from '../join/join'
 import { obstaclesBetween } from '../reasons/obstacles'
+import { Aerials } from './aerial'
 import { assign } from './assign'
 import { Finisher } from './finish'
 import type { Finished } from './label'
@@ -40,6 +41,8 @@ export class Solver {
   private readonly speakers: readonly Way[]
   private readonly scarceUnits = new Set<string>()
   private readonly scarcePieces = new Set<number>()
+  private readonly aerialWays: readonly Way[]
+  private readonly faces = new FaceTable()
   private readonly sigs = new SigTable()
   private search: Search
   private joins: JoinTable
@@ -61,7 +64,7 @@ export class Solver {
     const leftOut = new Set([...question.avoid, question.source.unit, question.display.unit])
     const source = variantOf(snapshot, unit(question.source.unit))
     const display = variantOf(snapshot, unit(question.display.unit))
-    const maker = new WayMaker(new FaceTable())
+    const maker = new WayMaker(this.faces)
     const variants = compileVariants(snapshot, leftOut)
     const ways = variants.map((v) => ({
       pictures: maker.waysOf(v).filter(harmless),
@@ -83,6 +86,9 @@ export class Solver {
       w.pictures.filter(
         (x) => x.into !== null && x.from !== null && x.in !== null && x.out !== null,
       ),
+    )
+    this.aerialWays = ways.flatMap((w) =>
+      w.pictures.filter((x) => x.fn.kind === 'receives' && x.from !== null),
     )
     const sounds = ways.flatMap((w) => w.sounds)
     this.soundBoxes = sounds.filter((w) => w.soundTo !== null)
@@ -106,6 +112,11 @@ export class Solver {
   }
 
   private begin(): Search {
+    const { demands, offAir } = this.question
+    const aerials =
+      demands.keepAerial === true
+        ? new Aerials(this.aerialWays, this.boxes, this.joins, this.faces, offAir)
+        : null
     return new Search(
       {
         starts: startLabels(this.starts, this.question.material, this.sigs),
@@ -115,7 +126,8 @@ export class Solver {
         speakers: this.speakers,
         joins: this.joins,
         sigs: this.sigs,
-        finisher: new Finisher(this.question.demands, this.speakers),
+        finisher: new Finisher(demands, this.speakers, aerials),
+        aerials,
         scarceUnits: new Set(this.scarceUnits),
       },
       this.budget - this.spent,

@@ -25,7 +25,7 @@ function played(row: PictureGive, material: Material) {
 }
 
 function soundOf(way: Way, material: Material): Sound {
-  const gives = way.fn.gives.filter((g) => g.sound || g.rf)
+  const gives = way.fn.gives.filter((g) => g.sound ?? g.rf?.some((r) => r.sound !== 'none'))
   const stereo = gives.some((g) => g.sound === 'stereo' || g.rf?.some((r) => r.sound === 'stereo'))
   const own: Sound = gives.length === 0 ? 'none' : stereo ? 'stereo' : 'mono'
   if (material.sound === undefined || own === 'none') return own
@@ -88,6 +88,7 @@ function label(way: Way, sig: Sig, stand: Label['stand'], material: Material): L
     sig,
     stand,
     sound: { kind: 'none' },
+    aerial: null,
     depth: 0,
     prev: null,
     step: null,

@@ -30,11 +30,18 @@ export interface PlanPart {
   readonly names?: string | undefined
 }
 
+const parts = new Map<string, readonly Channel[]>()
+
 /** The channels of a part of a plan, in the order of the table; unknown names are left out. */
 export function channelsIn(part: PlanPart): readonly Channel[] {
   if (part.names === undefined) return PLANS[part.plan]
+  const key = `${part.plan} ${part.names}`
+  const known = parts.get(key)
+  if (known) return known
   const wanted = new Set(part.names.split(',').flatMap((n) => expandNames(n)))
-  return PLANS[part.plan].filter((c) => wanted.has(c.name))
+  const made = PLANS[part.plan].filter((c) => wanted.has(c.name))
+  parts.set(key, made)
+  return made
 }
 
 /**

@@ -7,6 +7,8 @@ export const HOOKUP = {
   'step.fetch.pieces': '{count} of {name}: [leads] drawer',
   'step.check-chassis':
     'Before touching anything: find out whether the chassis of the {name} is joined to the [mains]. If you cannot tell, leave it and ask somebody trained.',
+  'step.check-isolation':
+    'Do not connect yet: find out how well the {name} keeps its signal from the [aerial], or use a transfer switch.',
   'step.check-dc':
     'Before plugging in: find out whether the input stands the voltage that comes up this [lead].',
   'step.join.captive': 'Its own plug: {from} {fromPort} into {to} {toPort}.',
@@ -105,6 +107,20 @@ export const HOOKUP = {
   'caution.scan-too-fast': '{control} of the {name} must stay as said.',
   'caution.scan-too-fast.more':
     'Its other position doubles the line rate: torn lines, and old sets do not like it.',
+  'caution.check-isolation':
+    'Do not connect yet: nobody has noted how much of the modulated signal gets through the {name} to the [aerial].',
+  'caution.check-isolation.more':
+    'What goes up to the [aerial] is sent out. Use a transfer switch or a box whose isolation is known; local rules come first.',
+  'caution.radiation-limit':
+    'At most {limit} dBmV may get up to the [aerial]; here it is {level} dBmV.',
+  'caution.radiation-limit.more':
+    'That holds only for these boxes, joined just so. Do not join the wires in any other way. Limit: 47 CFR 15.115(c)(1); local rules come first.',
+  'caution.level-lost': 'About {db} dB is lost on the way.',
+  'caution.level-lost.more': 'If the picture snows, look here first.',
+  'caution.channel-below':
+    'Keep the {name} on channel {channel}: on others it would spoil a station.',
+  'caution.channel-below.more':
+    'An unfiltered modulator also fouls the channel just below its own.',
   'caution.channel-on-air': 'Something is on the air on channel {channel}.',
   'caution.channel-on-air.more':
     'There is no free channel on the {name}: expect patterns in the picture.',

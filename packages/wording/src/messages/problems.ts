@@ -45,6 +45,8 @@ export const PROBLEMS = {
     'This cannot be answered: it names something that is not on the shelf. Choose again what is marked.',
   'problem.unknown-reference':
     'Nothing was saved: it refers to something that is not in this collection. Choose again what is marked.',
+  'problem.hookup-refused':
+    'The hookup was not saved: it does not pass the check that every answer must pass. Ask again, and save the answer that you get.',
   'problem.version-missing':
     'Nothing was changed: the request must say which version it changes. Send the ETag that was read, in an If-Match header.',
   'problem.too-many-requests':
@@ -80,6 +82,7 @@ export const PROBLEMS = {
   'field.used-before': '{name} was the key of something else before. Choose another key.',
   'field.quantity-of-device':
     'Of a device there is one to a unit; only leads and small parts are counted.',
+  'field.check-failed': 'The check found a fault here: {name}.',
   'field.devices-only': 'A lead or an adapter has no such thing.',
 
   'field.key-repeated': 'The key {name} is used twice. Give one of them another.',
