@@ -859,6 +859,34 @@ function displayFacts(unit: CaseUnit): DisplayFacts | undefined {
   }
 }
 
+/** Games and computers answer to the hand; the words of a unit tell them from players. */
+const kindOfSource = (unit: CaseUnit): DeviceModel['kind'] =>
+  /\b(console|game)/i.test(unit.what)
+    ? 'console'
+    : /computer/i.test(unit.what)
+      ? 'computer'
+      : 'other'
+
+/** Mains of the country whose channels a display receives (common practice, no source). */
+const HOME_VOLTS: readonly (readonly [prefix: string, volts: number])[] = [
+  ['us-', 120],
+  ['jp', 100],
+  ['uk-', 230],
+  ['ccir', 230],
+  ['au', 230],
+  ['fr-', 230],
+]
+
+/** Stated with a unit, or those of the country of a display; anything else takes what there is. */
+function mainsOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceModel['mains'] {
+  const stated = /(\d+)\s*V/.exec(unit.mains ?? '')
+  const plan = unit.ports.find((p) => p.tuner)?.tuner?.plans[0] ?? ''
+  const home =
+    role === 'display' ? HOME_VOLTS.find(([prefix]) => plan.startsWith(prefix)) : undefined
+  const volts = stated ? Number(stated[1]) : home?.[1]
+  return { volts: volts === undefined ? [100, 240] : [volts, volts], hz: [50, 60] }
+}
+
 function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceModel {
   const jacks = jacksOf(unit)
   const display = displayFacts(unit)
@@ -871,7 +899,7 @@ function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMod
   return {
     format: 1,
     type: 'device',
-    kind: role === 'display' ? 'television' : 'other',
+    kind: role === 'display' ? 'television' : kindOfSource(unit),
     maker: '',
     name: unit.what,
     market: 'any',
@@ -884,9 +912,7 @@ function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMod
     functions,
     leaks: leaksOf(unit),
     chassis: unit.liveChassis ? 'live' : 'isolated',
-    ...(unit.powered || role !== 'box'
-      ? { mains: { volts: [100, 240] as const, hz: [50, 60] } }
-      : {}),
+    ...(unit.powered || role !== 'box' ? { mains: mainsOf(unit, role) } : {}),
     remote: 'none',
     ...(display ? { display } : {}),
   }

@@ -1,75 +1,127 @@
-import { controlOf, jackOf } from '@coaxwain/models'
 import type { Obstacle } from '@coaxwain/shelf'
-import {
-  fits,
-  followsField,
-  followsLine,
-  isEncoded,
-  mates,
-  RF_SYSTEMS,
-  SCANS,
-  type Deflection,
-} from '@coaxwain/signal'
-import { accept } from '../compile/accept'
-import { reachedBy } from '../compile/carriers'
+import { fits, mates } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
-import type { SigTable } from '../compile/sig'
 import type { Way } from '../compile/way'
 import type { JoinTable } from '../join/join'
-import { stopsAt } from '../search/expand'
+import type { Expander } from '../search/expand'
 import type { Label } from '../search/label'
+import { breaksAt, gunBreaks, obstacle, type Ends } from './breaks'
 
-interface Tools {
+export interface ReasonTools {
   readonly joins: JoinTable
-  readonly sigs: SigTable
-  /** There is an answer: only what would harm is worth a word. */
-  readonly solved: boolean
+  readonly expander: Expander
+  /** Ways through boxes. */
+  readonly boxes: readonly Way[]
+  readonly lightGun: boolean
+  /** Powered boxes and pieces of the easiest answer; null when there is none. */
+  readonly best: { readonly boxes: number; readonly pieces: number } | null
 }
 
 /** At most so many reasons are given, nearest first. */
-const MOST_REASONS = 4
+const MOST_REASONS = 6
+/** Beside an answer, what looks easier and is not. */
+const MOST_BESIDE = 3
+/** A way that is not taken may break so many rules and still be worth a word. */
+const MOST_BROKEN = 2
 
-const obstacle = (code: string, details: Obstacle['details']): Obstacle => ({
-  code,
-  details,
-  harmful: false,
-  lookalike: false,
+const PICTURE = { picture: true, sound: false }
+
+interface Attempt {
+  readonly broken: readonly Obstacle[]
+  readonly boxes: number
+  readonly pieces: number
+}
+
+const endsOf = (from: Way, to: Way): Ends => ({
+  from: from.variant.device.name,
+  to: to.variant.device.name,
 })
 
-/** What stands between a source and a display when they are put together directly. */
+/**
+ * What stands in the way: every wiring of no box or one that breaks at most two rules. With an answer at hand
+ * only those are worth a word that look easier than it; harmful ones come first in any case.
+ */
 export function obstaclesBetween(
   starts: readonly Label[],
   ends: readonly Way[],
-  tools: Tools,
+  tools: ReasonTools,
 ): Obstacle[] {
-  const pairs = starts.flatMap((label) => ends.map((end) => broken(label, end, tools)))
-  const harmful = pairs.flatMap((rules) => rules.filter((r) => r.harmful))
-  if (tools.solved) return distinct(harmful)
-  const nearest = [...pairs].sort((a, b) => a.length - b.length).flat()
-  return distinct([...harmful, ...nearest.filter((r) => !r.harmful)]).slice(0, MOST_REASONS)
+  const direct = starts.flatMap((label) => ends.map((end) => attempt(label, end, tools)))
+  const throughBox = starts.flatMap((label) =>
+    tools.boxes.flatMap((box) => throughOne(label, box, ends, tools)),
+  )
+  const all = [...direct, ...throughBox].filter(
+    (a): a is Attempt => a !== null && a.broken.length > 0 && a.broken.length <= MOST_BROKEN,
+  )
+  const { best } = tools
+  if (all.length === 0 && !best)
+    return distinct(starts.flatMap((l) => ends.flatMap((e) => apart(l, e))))
+  const worth = best
+    ? all.filter((a) => easier(a, best) && looksRight(a))
+    : all.sort(
+        (a, b) => a.broken.length - b.broken.length || a.boxes - b.boxes || a.pieces - b.pieces,
+      )
+  const found = worth.flatMap((a) => a.broken).filter((o) => !best || o.code !== 'no-lead')
+  const told = best ? found.map((o) => ({ ...o, lookalike: true })) : found
+  const harmFirst = [...told.filter((o) => o.harmful), ...told.filter((o) => !o.harmful)]
+  return distinct(harmFirst, best !== null).slice(0, best ? MOST_BESIDE : MOST_REASONS)
 }
 
-const distinct = (obstacles: readonly Obstacle[]): Obstacle[] => {
+/** Nothing at hand can even be plugged together: the forms differ, and perhaps the rates as well. */
+function apart(label: Label, end: Way): Obstacle[] {
+  const ends = endsOf(label.way, end)
+  const rates = breaksAt(end, label.sig, ends).filter((o) => RATES.includes(o.code))
+  const forms = { from: label.sig.form, to: end.into?.face.form ?? '' }
+  return [...rates, obstacle('no-common-form', { ...ends, fromForm: forms.from, toForm: forms.to })]
+}
+
+const RATES = ['line-rate', 'field-rate']
+
+/** One rule stands in the way; a lead that is not at hand is no rule. */
+const looksRight = ({ broken, boxes }: Attempt): boolean => {
+  const rules = broken.filter((o) => o.code !== 'no-lead')
+  return rules.length === 1 && (rules.length === broken.length || boxes === 0)
+}
+
+const easier = (a: Attempt, best: { boxes: number; pieces: number }): boolean =>
+  a.boxes < best.boxes || (a.boxes === best.boxes && a.pieces <= best.pieces)
+
+/** Each reason once for each unit in which it bites; beside an answer, each sort of reason once. */
+function distinct(obstacles: readonly Obstacle[], bySort = false): Obstacle[] {
   const seen = new Set<string>()
-  return obstacles.filter((o) => !seen.has(o.code) && seen.add(o.code))
+  return obstacles.filter((o) => {
+    const key = bySort ? o.code : `${o.code} ${o.details.to ?? ''}`
+    return !seen.has(key) && seen.add(key)
+  })
 }
 
-/** Every rule that a direct join of one output and one input would break. */
-function broken(label: Label, end: Way, tools: Tools): Obstacle[] {
+/** What breaks when one output goes into one input; null when nothing joins them and they have no form in common. */
+function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
   const out = label.way.from?.face
-  const into = end.into?.face
-  if (!out || !into) return []
-  const names = { source: label.way.variant.device.name, display: end.variant.device.name }
-  const lookalike = wrongWiring(out, into)
-  if (lookalike) return [{ ...obstacle('japanese-21-pin', names), harmful: true, lookalike: true }]
-  const signals = signalRules(label, end, tools)
-  const joined = tools.joins.between(out, into, { picture: true, sound: false }).length > 0
-  const [join] = joined ? [] : [unjoined(out, into, names)]
-  const found = [...(join ? [join] : []), ...signals]
-  if (end.harm && joined && signals.length === 0) {
-    return [{ ...obstacle('added-socket', { ...names, port: end.harm.label }), harmful: true }]
+  const into = way.into?.face
+  if (!out || !into) return null
+  const ends = endsOf(label.way, way)
+  const cost = { boxes: label.boxes, pieces: label.pieces }
+  if (wrongWiring(out, into)) {
+    const flags = { harmful: true, lookalike: true }
+    return { ...cost, broken: [obstacle('japanese-21-pin', { ...ends }, flags)] }
   }
-  return found
+  const [join] = tools.joins.between(out, into, PICTURE)
+  if (!join && out.form !== into.form) return null
+  const noLead = join ? [] : [obstacle('no-lead', { ...ends, form: out.form ?? '' })]
+  const grey =
+    join?.picture === 'luma-only'
+      ? [obstacle('luma-only', { ...ends }, { lookalike: true })]
+      : breaksAt(way, label.sig, ends)
+  const gun = tools.lightGun && way.fn.kind === 'shows' ? gunBreaks(way.variant.device, ends) : []
+  const harm = way.harm
+    ? [obstacle('added-socket', { ...ends, port: way.harm.label }, { harmful: true })]
+    : []
+  return {
+    ...cost,
+    pieces: cost.pieces + (join?.pieces ?? 1),
+    broken: [...harm, ...noLead, ...grey, ...gun],
+  }
 }
 
 /** A plug that goes in and is wired differently inside. */
@@ -78,79 +130,29 @@ const wrongWiring = (out: Face, into: Face): boolean =>
     into.ports.some((b) => fits(a.connector, b.connector) && !mates(a.connector, b.connector)),
   )
 
-const unjoined = (out: Face, into: Face, names: Record<string, string>): Obstacle =>
-  out.form === into.form
-    ? obstacle('no-lead', { ...names, form: out.form ?? '' })
-    : obstacle('no-common-form', { ...names, from: out.form ?? '', to: into.form ?? '' })
-
-function signalRules(label: Label, end: Way, tools: Tools): Obstacle[] {
-  const { sig } = label
-  const { device } = end.variant
-  const names = { source: label.way.variant.device.name, display: device.name }
-  const deflection = device.display?.deflection
-  const found: Obstacle[] = []
-  if (deflection && !followsLine(deflection, sig.scan)) {
-    found.push({
-      ...obstacle('line-rate', {
-        ...names,
-        sourceKhz: SCANS[sig.scan].lineKhz,
-        displayKhz: nearestEdge(deflection, SCANS[sig.scan].lineKhz),
-      }),
-      harmful: false,
-    })
-  } else if (deflection && !followsField(deflection, sig.scan)) {
-    found.push(
-      obstacle('field-rate', {
-        ...names,
-        sourceHz: Math.round(SCANS[sig.scan].fieldHz),
-        displayHz: Math.round(deflection.fieldHz[0]?.[0] ?? 0),
-      }),
-    )
+/** Into a box, breaking a rule there or not, and out of it into the display. */
+function throughOne(
+  label: Label,
+  box: Way,
+  ends: readonly Way[],
+  tools: ReasonTools,
+): (Attempt | null)[] {
+  const first = attempt(label, box, tools)
+  if (!first || first.broken.length > MOST_BROKEN) return []
+  if (first.broken.length === 0) {
+    const made: Label[] = []
+    for (const entry of tools.expander.entries(label, box)) {
+      tools.expander.leave(label, box, entry, (l) => made.push(l))
+    }
+    return made.flatMap((l) => ends.map((end) => attempt(l, end, tools)))
   }
-  if (stopsAt(device, end, sig.protection)) found.push(obstacle('protection', names))
-  if (sig.carrier) found.push(...carrierRules(label, end))
-  else if (found.length === 0) found.push(...rowRules(label, end, tools))
-  return found
-}
-
-/** The edge of what a display follows that lies nearest to a line rate. */
-const nearestEdge = (deflection: Deflection, lineKhz: number): number =>
-  deflection.lineKhz
-    .flat()
-    .reduce((best, edge) => (Math.abs(edge - lineKhz) < Math.abs(best - lineKhz) ? edge : best))
-
-function carrierRules(label: Label, end: Way): Obstacle[] {
-  const carrier = label.sig.carrier
-  if (!carrier || end.fn.tunedBy === undefined) return []
-  const names = { source: label.way.variant.device.name, display: end.variant.device.name }
-  const systems = end.fn.accepts.flatMap((row) => row.systems ?? [])
-  if (systems.length === 0) return [obstacle('digital-only', names)]
-  const control = controlOf(end.variant.device, end.fn.tunedBy)
-  if (control.kind === 'tuned-to' && reachedBy(control, carrier).length === 0) {
-    return [
-      obstacle('band', {
-        ...names,
-        channel: carrier.names[0] ?? '',
-        mhz: carrier.visionMhz[0] ?? 0,
-      }),
-    ]
-  }
-  const positive = RF_SYSTEMS[carrier.system].polarity
-  return systems.some((s) => RF_SYSTEMS[s].polarity === positive)
-    ? []
-    : [obstacle('vision-polarity', { ...names, system: carrier.system })]
-}
-
-function rowRules(label: Label, end: Way, tools: Tools): Obstacle[] {
-  const { sig } = label
-  const arriving = { sig, lumaOnly: false, volts: ['av-select', 'rgb-select'] as const }
-  const taken = accept(end.variant.device, end.fn, end.in ?? '', arriving, (from, carrier) =>
-    tools.sigs.intern({ ...from, carrier }),
+  // Whether the display would take what comes out cannot be known; that it fails here is the reason.
+  const leadsOn = ends.some(
+    (end) =>
+      box.from && end.into && tools.joins.between(box.from.face, end.into.face, PICTURE).length > 0,
   )
-  if (taken.length > 0) return []
-  const names = { source: label.way.variant.device.name, display: end.variant.device.name }
-  const form = jackOf(end.variant.device, end.in ?? '').form
-  return isEncoded(sig.colour)
-    ? [obstacle('standard', { ...names, colour: sig.colour, scan: sig.scan })]
-    : [obstacle('not-taken', { ...names, form, scan: sig.scan })]
+  const powered = box.variant.powered ? 1 : 0
+  return leadsOn
+    ? [{ ...first, boxes: first.boxes + powered, pieces: first.pieces + 2 - powered }]
+    : []
 }

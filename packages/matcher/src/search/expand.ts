@@ -1,5 +1,5 @@
-import { jackOf, together, type Condition, type DeviceModel } from '@coaxwain/models'
-import { SOUND_RANK, type Protection, type Sound } from '@coaxwain/signal'
+import { together, type Condition } from '@coaxwain/models'
+import { SOUND_RANK, type Sound } from '@coaxwain/signal'
 import { accept, type Taken } from '../compile/accept'
 import { leave, type Leaving } from '../compile/leave'
 import type { Sig, SigTable } from '../compile/sig'
@@ -8,6 +8,7 @@ import type { Join, JoinTable } from '../join/join'
 import { levelOf, type Aerials, type AerialUse } from './aerial'
 import { leastApart } from './assign'
 import { pathOf, type Label, type SoundRoute, type SoundState, type Step } from './label'
+import { handshakeUnknown, stopsAt } from './protection'
 import { met, toMono, type SoundRoutes } from './sound-route'
 
 /** One way of getting from a label into a unit: what is plugged, what is taken, what sound came along. */
@@ -21,22 +22,6 @@ export interface Entry {
 }
 
 const isEnd = (place: Way['soundFrom']): place is SoundEnd => place !== null && place !== 'picture'
-
-/** Protection that a function does not stand: a recorder's level control, a box without the handshake. */
-export function stopsAt(device: DeviceModel, way: Way, protection: Protection): boolean {
-  const { fn } = way
-  if (protection === 'agc-pulses') return fn.inputAgc === true
-  if (protection !== 'hdcp' || way.in === null) return false
-  const form = jackOf(device, way.in).form
-  return (form === 'hdmi' || form === 'dvi') && fn.hdcp === false
-}
-
-/** Nobody has said whether the handshake is completed: the answer may stand, with doubt. */
-export const handshakeUnknown = (way: Way, protection: Protection): boolean =>
-  protection === 'hdcp' &&
-  way.in !== null &&
-  ['hdmi', 'dvi'].includes(jackOf(way.variant.device, way.in).form) &&
-  way.fn.hdcp === undefined
 
 /** Sound shares its socket with the picture, so that one plug takes both or none. */
 function shareSocket(way: Way, side: 'into' | 'from'): boolean {
@@ -58,8 +43,7 @@ export class Expander {
 
   /** Every way of entering a unit from a label. */
   entries(label: Label, way: Way): Entry[] {
-    if (!label.way.from || !way.into || stopsAt(way.variant.device, way, label.sig.protection))
-      return []
+    if (!label.way.from || !way.into || stopsAt(way, label.sig.protection)) return []
     const pictures = this.joins.between(label.way.from.face, way.into.face, PICTURE)
     if (pictures.every((join) => this.taken(way, label.sig, join).length === 0)) return []
     const unknown = handshakeUnknown(way, label.sig.protection) ? 1 : 0

@@ -41,7 +41,7 @@ export class Search {
   private readonly kept = new Map<string, Label[]>()
   private readonly beaten = new WeakSet<Label>()
   private readonly front = new Front()
-  private readonly expander: Expander
+  readonly expander: Expander
   private readonly byFace: ReadonlyMap<Face, readonly Way[]>
   private readonly stepsLeft: ReadonlyMap<number, number>
   work = 0

@@ -1,5 +1,6 @@
 import type { Obstacle, Question, Snapshot, Uid, Unit } from '@coaxwain/shelf'
-import { TIER, type Quality } from '@coaxwain/signal'
+import { channelsIn, TIER, type Channel, type Quality } from '@coaxwain/signal'
+import { carriersOf } from '../compile/carriers'
 import { FaceTable } from '../compile/face'
 import { SigTable } from '../compile/sig'
 import { compileVariants, variantOf, type Variant } from '../compile/variant'
@@ -26,6 +27,8 @@ export interface Solving {
   readonly source: Variant
   readonly display: Variant
   readonly drawer: Drawer
+  /** Boxes on the shelf whose own carrier is on whenever they are. */
+  readonly idle: readonly { readonly variant: Variant; readonly channels: readonly Channel[] }[]
   readonly best: { readonly source: Quality; readonly display: Quality; readonly sound: boolean }
 }
 
@@ -99,6 +102,7 @@ export class Solver {
       source,
       display,
       drawer,
+      idle: variants.flatMap((variant) => idleCarriers(variant)),
       best: {
         source: played.quality,
         display: bestShown(this.ends),
@@ -181,10 +185,15 @@ export class Solver {
   /** Why the shelf does not do it, or what looks right and would harm. */
   obstacles(): Obstacle[] {
     const starts = startLabels(this.starts, this.question.material, this.sigs)
+    const efforts = (this.solved ?? []).map((s) => s.found.axes)
+    const boxes = Math.min(...efforts.map((a) => a.boxes))
+    const pieces = Math.min(...efforts.filter((a) => a.boxes === boxes).map((a) => a.pieces))
     return obstaclesBetween(starts, this.allEnds, {
       joins: this.joins,
-      sigs: this.sigs,
-      solved: (this.solved?.length ?? 0) > 0,
+      expander: this.search.expander,
+      boxes: this.boxes,
+      lightGun: this.question.demands.aim === 'light-gun',
+      best: efforts.length > 0 ? { boxes, pieces } : null,
     })
   }
 
@@ -197,6 +206,20 @@ export class Solver {
       return 'units' in result ? [{ found, units: result.units }] : []
     })
   }
+}
+
+/** The channels of a carrier that is always on, beside a loop that passes the aerial. */
+function idleCarriers(variant: Variant): Solving['idle'] {
+  const { device } = variant
+  const loops = device.functions.some(
+    (f) => f.kind === 'loop-through' && (f.while ?? []).length === 0,
+  )
+  const always = device.functions
+    .flatMap((f) => f.gives.flatMap((g) => g.rf ?? []))
+    .find((r) => r.always)
+  if (!loops || !always) return []
+  const { part, names } = carriersOf(device, always)
+  return [{ variant, channels: channelsIn(part).filter((c) => names.includes(c.name)) }]
 }
 
 const harmless = (way: Way): boolean => way.harm === null

@@ -35,6 +35,7 @@ export const APP = {
   'rail.sign-out': 'Sign out',
   'rail.signed-in-as': 'Signed in as {name}',
   'rail.search': 'Search',
+  'rail.search-model': 'model: {kind}',
   'rail.search-label': 'Search units and models',
   'saving.saved': 'all saved',
   'saving.saving': 'saving ...',

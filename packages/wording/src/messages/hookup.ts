@@ -115,6 +115,58 @@ export const HOOKUP = {
     'At most {limit} dBmV may get up to the [aerial]; here it is {level} dBmV.',
   'caution.radiation-limit.more':
     'That holds only for these boxes, joined just so. Do not join the wires in any other way. Limit: 47 CFR 15.115(c)(1); local rules come first.',
+  'caution.both-plugs': 'Both sound plugs must be in the Y adapter.',
+  'caution.both-plugs.more': 'With one alone, whatever is on the other side is lost.',
+  'caution.no-loudspeaker': 'The {name} has no loudspeaker: the sound goes its own way.',
+  'caution.no-loudspeaker.more': 'Switch the loudspeakers on as well.',
+  'caution.sound-apart': 'The picture [lead] carries no sound.',
+  'caution.sound-apart.more': 'The sound has a [lead] of its own.',
+  'caution.wide-picture': 'Wide pictures look tall, or get black bars, on this screen.',
+  'caution.wide-picture.more': 'Tell the source that the screen is 4:3, if it can be told.',
+  'caution.few-lines': 'The source draws 240 or 288 lines without interlace.',
+  'caution.few-lines.more':
+    'Picture tubes take it; converters and flat sets may flicker, treat it as interlaced or refuse it.',
+  'caution.interlaced-only': 'The converter makes interlaced pictures, and no true 240-line ones.',
+  'caution.interlaced-only.more': 'Lines flicker where the old picture had gaps.',
+  'caution.delay': 'The picture comes a little late.',
+  'caution.delay.more': 'For quick games a picture tube without processing is better.',
+  'caution.cross-colour': 'Fine patterns get false [colours].',
+  'caution.cross-colour.more':
+    'Adding [colour] to brightness is simple; taking them apart again is not.',
+  'caution.sync-needed': 'RGB needs its sync wire: it travels on the composite pin.',
+  'caution.sync-needed.more': 'Without it the picture does not stand still.',
+  'caution.sixty-fields':
+    'Sixty pictures a second: a set that cannot follow would roll on any setting.',
+  'caution.sixty-fields.more': 'This one follows.',
+  'caution.white-buzz': 'White writing buzzes while {control} of the {name} is up too far.',
+  'caution.white-buzz.more':
+    'Peak white drives the carrier to nothing and breaks up the sound. Nothing is broken.',
+  'caution.one-load': 'Load the video of the {name} once only.',
+  'caution.one-load.more':
+    'A second plug on the same output, or none at its end, changes the size of the signal.',
+  'caution.handshake-needed':
+    'The {name} completes the content-protection handshake; others stay black.',
+  'caution.handshake-needed.more': 'A plain cable converts nothing.',
+  'caution.channel-stays-free': 'Channel {channel} must stay free of stations.',
+  'caution.channel-stays-free.more': 'If one comes up there, choose again.',
+  'caution.neighbour-channel': 'Prefer {channel}: {other} lies next to {beside}.',
+  'caution.neighbour-channel.more':
+    'Use {other} only where {channel} is on the air and {beside} is not.',
+  'caution.idle-carrier':
+    'If the {name} hangs on the same [lead], keep its own channel off {channel}.',
+  'caution.idle-carrier.more':
+    'Its carrier is on even when it plays nothing, and two on one channel beat together.',
+  'caution.idle-sideband': 'Nor set the {name} just above or just below it.',
+  'caution.idle-sideband.more': 'An unfiltered output also fouls the channel below its own.',
+  'caution.band-switch': '{control} of the {name} on {position}.',
+  'caution.band-switch.more': 'On another band the tuner does not reach this channel.',
+  'caution.aerial-to-box': 'The [aerial] goes to the {name}, and not to the {set}.',
+  'caution.aerial-to-box.more': 'An old set finds no digital station by itself.',
+  'caution.sound-carrier-socket': 'One socket of the {name} says RF and is no [aerial] output.',
+  'caution.sound-carrier-socket.more': 'It carries digital sound for a decoder.',
+  'caution.shared-socket':
+    '{port} of the {name} takes composite only while its AV input is chosen.',
+  'caution.shared-socket.more': 'On the component input the same plug shows [grey].',
   'caution.level-lost': 'About {db} dB is lost on the way.',
   'caution.level-lost.more': 'If the picture snows, look here first.',
   'caution.channel-below':
@@ -142,26 +194,39 @@ export const HOOKUP = {
 /** Why the shelf does not do it: each names the two facts that clash. */
 export const OBSTACLES = {
   'obstacle.japanese-21-pin':
-    'Do not plug the 21-pin plug of the {source} into the {display}: it goes in, and its pins are wired in the Japanese way. Sound and supply would land on picture pins.',
+    'Do not plug the 21-pin plug of the {from} into the {to}: it goes in, and its pins are wired in the Japanese way. Sound and supply would land on picture pins.',
   'obstacle.added-socket':
-    'Do not use {port} of the {display}. It was added later to a set whose chassis is or may be joined to the [mains]: everything plugged in there, and whoever touches it, may be live.',
+    'Do not use {port} of the {to}. It was added later to a set whose chassis is or may be joined to the [mains]: everything plugged in there, and whoever touches it, may be live.',
   'obstacle.line-rate':
-    'The {source} draws {sourceKhz} thousand lines a second; the {display} follows {displayKhz} thousand. No [lead] changes that, and some sets are harmed by it: a scan converter is needed.',
+    'The {from} draws {fromKhz} thousand lines a second; the {to} follows {toKhz} thousand. No [lead] changes that, and some sets are harmed by it: a scan converter is needed.',
   'obstacle.field-rate':
-    'The {source} gives {sourceHz} pictures a second; the {display} follows {displayHz}. The picture would roll: a standards converter is needed.',
-  'obstacle.protection':
-    'What is played is protected, and the {display} does not complete what the {source} asks for.',
+    'The {from} gives {fromHz} pictures a second; the {to} follows {toHz}. The picture would roll: a standards converter is needed.',
+  'obstacle.level-control':
+    'What is played is protected against copying, and the input level control of the {to} is thrown off by its pulses: the picture goes dark and bright.',
+  'obstacle.no-handshake':
+    'What is played is protected, and the {to} does not complete the handshake that the {from} asks for: the screen stays black.',
+  'obstacle.light-gun':
+    'A light gun looks for a bright spot on a picture tube drawn at the speed of the {from}; the {to} stores or redraws the picture. No [lead] changes that.',
+  'obstacle.switching-voltage':
+    'The {to} takes RGB only when a voltage on the plug tells it to, and nothing from the {from} gives it.',
+  'obstacle.scan': 'The {from} gives {scan}; the {to} does not take it.',
+  'obstacle.colour':
+    'The {from} gives {colour} [colour]; the {to} decodes {listed}. The picture would be [grey].',
+  'obstacle.sound-spacing':
+    'The {from} sends its sound {fromMhz} MHz from the picture; the {to} listens at {toMhz} MHz. There would be a picture and no sound.',
+  'obstacle.luma-only':
+    'From the {from} into the {to} only the brightness part would arrive: a steady [grey] picture.',
+  'obstacle.not-a-channel':
+    'What the {from} gives is no television channel, although the plug fits the {to}.',
   'obstacle.digital-only':
-    'The {source} sends an analogue channel; the tuner of the {display} receives digital stations only.',
+    'The {from} sends an analogue channel; the tuner of the {to} receives digital stations only.',
   'obstacle.band':
-    'The {source} puts out channel {channel} at {mhz} MHz; the tuner of the {display} does not reach it.',
+    'The {from} puts out channel {channel} at {mhz} MHz; the tuner of the {to} does not reach it.',
   'obstacle.vision-polarity':
-    'The {source} sends system {system}; the tuner of the {display} works the other way round and would show a negative picture.',
-  'obstacle.standard':
-    'The input of the {display} does not take the standard that the {source} gives.',
-  'obstacle.not-taken': 'The input of the {display} does not take what the {source} gives.',
+    'The {from} sends system {system}; the tuner of the {to} works the other way round and would show a negative picture.',
+  'obstacle.not-taken': 'The input of the {to} does not take what the {from} gives.',
   'obstacle.no-lead':
-    'Both have a fitting output and input, but no [lead] at hand joins the {source} to the {display}.',
+    'Both have a fitting output and input, but no [lead] at hand joins the {from} to the {to}.',
   'obstacle.no-common-form':
-    'The {source} and the {display} have no form of picture in common, and nothing at hand turns one into the other.',
+    'The {from} and the {to} have no form of picture in common, and nothing at hand turns one into the other.',
 } as const

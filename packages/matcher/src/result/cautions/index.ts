@@ -1,0 +1,18 @@
+import type { Caution } from '@coaxwain/shelf'
+import { CARRIERS } from './carriers'
+import { QUALITY } from './quality'
+import type { CautionInput } from './rule'
+import { SAFETY } from './safety'
+import { SWITCHES } from './switches'
+
+/** Danger first, then what is lost, then what decides. */
+const RULES = [...SAFETY, ...QUALITY, ...CARRIERS, ...SWITCHES]
+
+/** Everything about a hookup that a person must know before the first step. */
+export function cautionsOf(c: CautionInput): Caution[] {
+  const seen = new Set<string>()
+  return RULES.flatMap((rule) => rule(c)).filter((found) => {
+    const key = JSON.stringify(found)
+    return !seen.has(key) && seen.add(key)
+  })
+}

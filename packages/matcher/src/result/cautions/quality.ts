@@ -1,0 +1,144 @@
+import { SCANS, TIER, type ScanId } from '@coaxwain/signal'
+import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
+
+const playsStereo = (c: CautionInput): boolean =>
+  source(c).way.fn.gives.some((g) => g.sound === 'stereo')
+
+const mixed = (c: CautionInput): boolean =>
+  c.hookup.links.some((l) =>
+    l.pieces.some((p) =>
+      c.input.frame.drawer.pieces.some(
+        (d) => d.piece.mixes && d.models.some((m) => m.model === p.model),
+      ),
+    ),
+  )
+
+const sound: Rule = (c) => {
+  const { sound: heard } = c.hookup.sound
+  if (heard === 'half') return [caution('sound-half')]
+  if (heard === 'none') return c.input.frame.best.sound ? [caution('silent')] : []
+  if (heard === 'stereo' || !playsStereo(c)) return []
+  return [caution('sound-folded'), ...(mixed(c) ? [caution('both-plugs')] : [])]
+}
+
+const picture: Rule = (c) => {
+  const { degradations, quality } = c.hookup.picture
+  return [
+    ...(quality === 'luma-only' ? [caution('luma-only')] : []),
+    ...(degradations.includes('monochrome') && quality !== 'luma-only'
+      ? [caution('colour-not-decoded', { colour: display(c).sig.colour })]
+      : []),
+    ...(degradations.includes('reduced-height') ? [caution('reduced-height')] : []),
+    ...(degradations.includes('squeezed') ? [caution('squeezed')] : []),
+  ]
+}
+
+const isHighDefinition = (scan: ScanId): boolean => SCANS[scan].lineKhz > 31
+
+const lessDetail: Rule = (c) => {
+  const first = source(c).sig
+  const shown = display(c).sig
+  return isHighDefinition(first.scan) && SCANS[shown.scan].lineKhz < 20 && TIER[first.poorest] >= 5
+    ? [caution('less-detail')]
+    : []
+}
+
+/** What comes by a digital socket is wide; an old tube is not. */
+const wide: Rule = (c) =>
+  source(c).sig.form === 'hdmi' && display(c).variant.device.display?.shape === '4:3'
+    ? [caution('wide-picture')]
+    : []
+
+const FEW_LINES: readonly ScanId[] = ['262p60', '312p50']
+
+/** Pictures of 262 or 312 lines are not what a flat set or a converter expects (common practice, no source). */
+const fewLines: Rule = (c) => {
+  const flat = display(c).variant.device.display?.screen === 'flat'
+  const turned = boxes(c).some(
+    (s) =>
+      s.way.in !== null &&
+      s.way.into?.face.form !== s.way.from?.face.form &&
+      s.sig.form !== 'rf' &&
+      s.way.into?.face.form !== 'rf',
+  )
+  const few = FEW_LINES.includes(source(c).sig.scan)
+  return few && (flat || turned) ? [caution('few-lines')] : []
+}
+
+/** Games answer to the hand: delay and lines matter. */
+const isGame = (c: CautionInput): boolean =>
+  ['console', 'computer'].includes(source(c).variant.device.kind) ||
+  FEW_LINES.includes(source(c).sig.scan)
+
+const delay: Rule = (c) => {
+  const facts = display(c).variant.device.display
+  const late = facts?.screen === 'flat' || facts?.storesFields === true || !display(c).sig.direct
+  return late && isGame(c) ? [caution('delay')] : []
+}
+
+/** A converter that makes interlaced pictures makes no true 240-line ones. */
+const interlacedOnly: Rule = (c) =>
+  isGame(c) && isHighDefinition(source(c).sig.scan) && SCANS[display(c).sig.scan].interlaced
+    ? [caution('interlaced-only')]
+    : []
+
+/** Adding chroma to luma brings false colours on fine detail (common practice, no source). */
+const crossColour: Rule = (c) =>
+  boxes(c).some((s) => s.way.into?.face.form === 's-video' && s.sig.form === 'composite')
+    ? [caution('cross-colour')]
+    : []
+
+/** The picture's own lead carries no sound. */
+const soundApart: Rule = (c) => {
+  const ownSpeakers = display(c).variant.device.display?.loudspeakers !== 'none'
+  if (c.hookup.sound.sound === 'none') return []
+  if (!ownSpeakers) return [caution('no-loudspeaker', { name: named(display(c)) })]
+  const first = c.hookup.links[c.hookup.legs[0]?.links[0] ?? 0]
+  const multi =
+    first && first.circuits.length > 1 && first.circuits.every((x) => !x.from.startsWith('audio'))
+  return multi ? [caution('sound-apart')] : []
+}
+
+/** RGB must bring its sync along; component takes it from the luma wire. */
+const sync: Rule = (c) =>
+  boxes(c).some((s) => s.way.into?.face.form?.startsWith('rgb') && s.sig.form === 'component')
+    ? [caution('sync-needed')]
+    : []
+
+/** A playback mode made for sets that follow 60 fields. */
+const sixtyFields: Rule = (c) =>
+  ['pal-60', 'ntsc-443'].includes(display(c).sig.colour) ? [caution('sixty-fields')] : []
+
+/** White that drives the carrier to nothing breaks up the sound (47 CFR 73.682(a)(13) for the white level). */
+const whiteBuzz: Rule = (c) =>
+  boxes(c).flatMap((s) =>
+    s.variant.device.controls
+      .filter(
+        (k) =>
+          k.kind === 'trim' &&
+          k.quantity === 'video-level' &&
+          k.stands !== undefined &&
+          k.aim !== undefined &&
+          k.stands > k.aim,
+      )
+      .flatMap((k) => [
+        caution('white-buzz', { name: named(s), control: k.label }),
+        caution('one-load', { name: named(s) }),
+      ]),
+  )
+
+/** What will be seen and heard that is less than it might be. */
+export const QUALITY: readonly Rule[] = [
+  picture,
+  sound,
+  soundApart,
+  lessDetail,
+  wide,
+  fewLines,
+  interlacedOnly,
+  delay,
+  crossColour,
+  sync,
+  sixtyFields,
+  whiteBuzz,
+]
