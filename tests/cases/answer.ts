@@ -1,9 +1,11 @@
-import type { Answer, Hookup, Link } from '@coaxwain/shelf'
+import { partUid, type Parts } from '@coaxwain/matcher'
+import type { Answer, Hookup, Link, Purchase } from '@coaxwain/shelf'
 import { isSoundCircuit, type Circuit, type Quality } from '@coaxwain/signal'
 import { sentence } from '@coaxwain/wording'
 import type {
   CaseAnswer,
   CaseHop,
+  CasePiece,
   CasePath,
   CasePort,
   CaseQuestion,
@@ -12,27 +14,28 @@ import type {
   CaseWarning,
   HookupAnswer,
 } from './form'
-import { DISPLAY, SOURCE, type Translated } from './translate'
+import { pieceInCaseForm, unitInCaseForm } from './parts-form'
+import { controlKey, DISPLAY, SOURCE, type Translated } from './translate'
 
 /** The product's answer in the words of the case form. */
 export function toCaseAnswer(
   question: CaseQuestion,
   translated: Translated,
   answer: Answer,
+  parts: Parts,
 ): HookupAnswer {
   const [best] = answer.hookups
-  const possible =
-    best && isWhole(best)
-      ? 'yes'
-      : answer.purchases.length > 0
-        ? 'with-purchase'
-        : best
-          ? 'yes'
-          : 'no'
+  const possible = verdictOf(best, answer.purchases)
+  const bought = possible === 'with-purchase' ? answer.purchases : []
   // Once something works in full, what is seen in grey only is no answer to the question.
   const worth = best && isWhole(best) ? answer.hookups.filter(isWhole) : answer.hookups
   const answers =
-    possible === 'no' ? [] : worth.slice(0, 3).map((h, i) => oneAnswer(question, translated, h, i))
+    bought.length > 0
+      ? bought.map((p, i) => boughtAnswer(withBought(question, p, parts), translated, p, parts, i))
+      : possible === 'no'
+        ? []
+        : worth.slice(0, 3).map((h, i) => oneAnswer(question, translated, h, i))
+
   return {
     id: question.id,
     possible,
@@ -47,6 +50,83 @@ export function toCaseAnswer(
     })),
     warnings: answer.obstacles.map((o) => warning(`obstacle.${o.code}`, o.details)),
     claims: [],
+  }
+}
+
+/**
+ * Half of the sound counts as a yes where one adapter would bring the rest, and as a purchase where more is
+ * missing: the form leaves that open.
+ */
+function verdictOf(
+  best: Hookup | undefined,
+  purchases: readonly Purchase[],
+): HookupAnswer['possible'] {
+  const [purchase] = purchases
+  if (!best) return purchase ? 'with-purchase' : 'no'
+  if (!isWhole(best)) return purchase ? 'with-purchase' : 'yes'
+  const half = best.sound.sound === 'half'
+  return half && purchase && purchase.parts.length > 1 ? 'with-purchase' : 'yes'
+}
+
+/** Ids of parts as the answer names them. */
+const boughtId = (key: string): string => `buy-${key}`
+
+/** The question with the things bought on its shelf, so that their sockets and controls are known. */
+function withBought(question: CaseQuestion, purchase: Purchase, parts: Parts): CaseQuestion {
+  const items = [...new Set(purchase.parts)].flatMap((key) => itemOf(key, parts) ?? [])
+  return { ...question, shelf: [...question.shelf, ...items] }
+}
+
+function itemOf(key: string, parts: Parts): CaseUnit | CasePiece | null {
+  const model = parts[key]
+  if (!model) return null
+  return model.type === 'piece'
+    ? pieceInCaseForm(boughtId(key), model)
+    : unitInCaseForm(boughtId(key), model)
+}
+
+/** Several pieces of one sort are bought one by one, each under an id of its own. */
+function boughtAnswer(
+  question: CaseQuestion,
+  translated: Translated,
+  purchase: Purchase,
+  parts: Parts,
+  rank: number,
+): CaseAnswer {
+  const hookup = numbered(purchase.hookup)
+  const answer = oneAnswer(question, translated, hookup, rank)
+  const counts = new Map<string, number>()
+  const missing = purchase.parts.flatMap((key) => {
+    const item = itemOf(key, parts)
+    if (!item) return []
+    const nth = (counts.get(key) ?? 0) + 1
+    counts.set(key, nth)
+    return [
+      {
+        code: key,
+        words: item.what,
+        item: { ...item, id: nth === 1 ? boughtId(key) : `${boughtId(key)}-${nth}` },
+      },
+    ]
+  })
+  return { ...answer, missing }
+}
+
+/** Ids of parts in the words of the form, and copies of a bought piece after the first under ids of their own. */
+function numbered(hookup: Hookup): Hookup {
+  const renamed = JSON.parse(
+    JSON.stringify(hookup).replaceAll(`"${partUid('')}`, `"${boughtId('')}`),
+  ) as Hookup
+  return {
+    ...renamed,
+    links: renamed.links.map((l) => ({
+      ...l,
+      pieces: l.pieces.map((p) =>
+        p.model.startsWith(boughtId('')) && p.copy > 1
+          ? { ...p, model: `${p.model}-${p.copy}` }
+          : p,
+      ),
+    })),
   }
 }
 
@@ -113,6 +193,9 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'obstacle.field-rate': 'W-NO-LOCK',
   'obstacle.digital-only': 'W-DIGITAL-TUNER',
   'obstacle.band': 'W-BAND',
+  'obstacle.socket-dead': 'W-BROKEN-SOCKET',
+  'obstacle.one-way': 'W-DIRECTION',
+  'obstacle.wrong-circuits': 'W-PINOUT',
   'obstacle.no-handshake': 'W-HDCP',
   'obstacle.level-control': 'W-AGC',
   'obstacle.colour': 'W-COLOUR-LOST',
@@ -184,8 +267,12 @@ function settingOf(
   hookup: Hookup,
   s: Hookup['settings'][number],
 ): CaseSetting {
-  const control = unitOf(question, s.unit)?.settings?.find((c) => c.name === s.control)
-  const base = { on: s.unit, set: s.control, ...(control ? { class: control.class } : {}) }
+  const control = unitOf(question, s.unit)?.settings?.find((c) => controlKey(c.name) === s.control)
+  const base = {
+    on: s.unit,
+    set: control?.name ?? s.control,
+    ...(control ? { class: control.class } : {}),
+  }
   if (s.why === 'tunes-to') {
     const sender = hookup.settings.find(
       (o) => o.why === 'picks-channel' && o.visionMhz === s.visionMhz,

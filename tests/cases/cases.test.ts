@@ -2,6 +2,7 @@ import { readFileSync } from 'node:fs'
 import { checkHookup } from '@coaxwain/checker'
 import { findHookups } from '@coaxwain/matcher'
 import { checkModel } from '@coaxwain/models'
+import { ORDINARY_PARTS } from '@coaxwain/patterns'
 import { describe, expect, it } from 'vitest'
 import { toCaseAnswer } from './answer'
 import type { CaseFile, HookupCase } from './form'
@@ -15,7 +16,10 @@ const cases = file.hookupCases ?? []
 
 const solve = (c: HookupCase) => {
   const translated = translate(c)
-  return { translated, answer: findHookups(translated.snapshot, translated.question) }
+  return {
+    translated,
+    answer: findHookups(translated.snapshot, translated.question, { parts: ORDINARY_PARTS }),
+  }
 }
 
 describe('questions of the trade', () => {
@@ -39,7 +43,7 @@ describe('questions of the trade', () => {
   it('are right in verdict, chain, quality and settings in at least half of the cases', () => {
     const right = cases.filter((c) => {
       const { translated, answer } = solve(c)
-      const { failures } = judge(c, toCaseAnswer(c, translated, answer))
+      const { failures } = judge(c, toCaseAnswer(c, translated, answer, ORDINARY_PARTS))
       return failures.every((f) => f.startsWith('warning missing'))
     })
     expect(right.length).toBeGreaterThanOrEqual(cases.length / 2)

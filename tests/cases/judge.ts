@@ -90,7 +90,8 @@ function mustSettings(c: HookupCase, answer: CaseAnswer, rig: Rig): string[] {
   return (c.expected.settings ?? [])
     .filter((s) => s.need === 'must')
     .flatMap((s): string[] => {
-      if (!rig.sameSockets(s.on)) return []
+      // A setting that follows another unit's holds only where that unit is in the chain.
+      if (!rig.sameSockets(s.on) || !rig.has(s.to)) return []
       const control = rig.unit(s.on)?.settings?.find((k) => k.name === s.set)
       const given = answer.settings.find(
         (a) => a.on === s.on && (a.set === s.set || (control && a.set === control.class)),
@@ -149,6 +150,12 @@ class Rig {
   port(ref: string): CasePort | undefined {
     const [unit = '', port] = ref.split(':')
     return this.units.get(unit)?.ports.find((p) => p.id === port)
+  }
+
+  /** Whether the unit that a setting follows is on this bench at all. */
+  has(to: string): boolean {
+    const as = /^as (.+)$/.exec(to)?.[1]
+    return as === undefined || this.units.has(as)
   }
 
   onlyChannel(unit: string): string | null {

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs'
 import { findHookups } from '@coaxwain/matcher'
+import { ORDINARY_PARTS } from '@coaxwain/patterns'
 import { toCaseAnswer } from './answer'
 import type { CaseFile, HookupAnswer } from './form'
 import { judge } from './judge'
@@ -33,7 +34,8 @@ function answerOf(file: CaseFile): HookupAnswer[] {
       ...(aim === undefined ? {} : { aim }),
     }
     const translated = translate(question)
-    return toCaseAnswer(question, translated, findHookups(translated.snapshot, translated.question))
+    const answer = findHookups(translated.snapshot, translated.question, { parts: ORDINARY_PARTS })
+    return toCaseAnswer(question, translated, answer, ORDINARY_PARTS)
   })
 }
 

@@ -18,6 +18,7 @@ import type {
   RfGive,
   Wire,
 } from '@coaxwain/models'
+import { POWER_KEY } from '@coaxwain/models'
 import type { OffAir, Question, Snapshot, Unit } from '@coaxwain/shelf'
 import {
   CONNECTOR_FACTS,
@@ -161,8 +162,14 @@ const DIGITAL: Readonly<Record<string, DigitalSystem>> = {
   'isdb-t': 'isdb-t',
 }
 
+/** `power` is the implicit control of every unit; one that a case lists itself goes by another key. */
+export const controlKey = (name: string): string => (name === POWER_KEY ? 'power switch' : name)
+
 const condition = (when: When | undefined): Condition =>
-  Object.entries(when ?? {}).map(([control, positions]) => ({ control, in: positions }))
+  Object.entries(when ?? {}).map(([control, positions]) => ({
+    control: controlKey(control),
+    in: positions,
+  }))
 
 const both = (...all: (When | undefined)[]): Condition => all.flatMap((w) => condition(w))
 
@@ -349,7 +356,7 @@ const isShape = (control: CaseControl): boolean =>
 
 function controlOf(unit: CaseUnit, control: CaseControl): Control[] {
   const base = {
-    key: control.name,
+    key: controlKey(control.name),
     label: control.name,
     access: 'front' as const,
     look: 'slide' as const,

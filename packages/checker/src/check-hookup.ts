@@ -1,7 +1,7 @@
 import { isSoundCircuit, TIER, SOUND_RANK, type Sound } from '@coaxwain/signal'
 import { doubtOf, formState, functionState, LIMITS, mayLend } from '@coaxwain/shelf'
 import type { Hookup, Leg, Question, SeenPicture, Snapshot, Uid } from '@coaxwain/shelf'
-import type { DeviceModel, Key } from '@coaxwain/models'
+import { POWER_KEY, POWER_STATES, type DeviceModel, type Key } from '@coaxwain/models'
 import { checkAerial } from './aerial'
 import { Ears, soundOf, type Pair } from './ears'
 import { finding, type Finding } from './finding'
@@ -79,6 +79,10 @@ function checkSettings({ hookup, view }: Bench): Finding[] {
   return hookup.settings.flatMap((s): Finding[] => {
     const at = { unit: s.unit, control: s.control }
     const device = view.device(s.unit)
+    if (device && s.control === POWER_KEY) {
+      const known = (POWER_STATES as readonly string[]).includes(s.position)
+      return known ? [] : [finding('position-unknown', at)]
+    }
     const control = device?.controls.find((c) => c.key === s.control)
     if (!device || !control) return [finding('control-unknown', at)]
     if (control.kind !== 'positions' && control.kind !== 'auto') return []

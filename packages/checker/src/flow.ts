@@ -10,6 +10,7 @@ import type {
   PictureGive,
   RfGive,
 } from '@coaxwain/models'
+import { POWER_KEY } from '@coaxwain/models'
 import type { Hookup, Link, Material, Uid } from '@coaxwain/shelf'
 import {
   arrivalAt,
@@ -47,7 +48,7 @@ export interface Bench {
 export function settled(bench: Bench, unit: Uid, condition: Condition | undefined): boolean {
   return (condition ?? []).every(({ control: key, in: wanted }) => {
     const control = bench.view.device(unit)?.controls.find((c) => c.key === key)
-    const at = bench.positions.of(unit, key)
+    const at = bench.positions.of(unit, key) ?? (key === POWER_KEY ? 'on' : null)
     if (at !== null) return wanted.includes(at)
     if (!control || (control.kind !== 'positions' && control.kind !== 'auto')) return false
     const all = control.positions.every((p) => wanted.includes(p.key))

@@ -1,5 +1,6 @@
 import { LIMITS } from '@coaxwain/shelf'
-import type { Answer, Question, Snapshot } from '@coaxwain/shelf'
+import type { Answer, Hookup, Question, Snapshot } from '@coaxwain/shelf'
+import { Shopping, type Parts } from './reasons/purchases'
 import { buildHookup } from './result/build'
 import { choose, withSound } from './result/rank'
 import { Solver } from './search/solve'
@@ -14,6 +15,13 @@ export interface HookupSearch {
   best(): Answer
 }
 
+export interface SearchOptions {
+  /** Label expansions, for the shelf and for purchases apart. */
+  readonly budget?: number | undefined
+  /** Ordinary parts that may be bought where the shelf does not do it. */
+  readonly parts?: Parts | undefined
+}
+
 /**
  * A search for hookups that its caller runs in slices, so that it can be watched and stopped.
  * Deterministic: no clock, no randomness; the budget counts label expansions.
@@ -22,41 +30,63 @@ export interface HookupSearch {
 export function createSearch(
   snapshot: Snapshot,
   question: Question,
-  budget: number = LIMITS.budget,
+  options: SearchOptions = {},
 ): HookupSearch {
+  const { budget = LIMITS.budget, parts } = options
   const solver = new Solver(snapshot, question, budget)
+  let shopping: Shopping | null = null
+  let hookups: readonly Hookup[] | null = null
+
+  const built = (): readonly Hookup[] =>
+    hookups ??
+    solver
+      .soFar()
+      .map((solved) => buildHookup({ solved, frame: solver.frame, offAir: question.offAir }))
+
+  const settle = (): void => {
+    if (!solver.done || hookups) return
+    hookups = built()
+    if (parts && !hookups.some((h) => h.worksFully)) {
+      shopping = new Shopping(snapshot, question, parts, budget)
+    }
+  }
+
   return {
-    step: (expansions) => solver.step(expansions),
+    step(expansions) {
+      if (shopping) shopping.step(expansions)
+      else solver.step(expansions)
+      settle()
+    },
     get done() {
-      return solver.done
+      return solver.done && (shopping === null || shopping.done)
     },
     get work() {
-      return solver.work
+      return solver.work + (shopping?.work ?? 0)
     },
-    best: () => answerOf(solver, question),
-  }
-}
-
-function answerOf(solver: Solver, question: Question): Answer {
-  const hookups = solver
-    .soFar()
-    .map((solved) => buildHookup({ solved, frame: solver.frame, offAir: question.offAir }))
-  const { shown, more } = choose(withSound(hookups), LIMITS.hookupsShown)
-  return {
-    format: 1,
-    verdict: shown.length > 0 ? 'yes' : 'none',
-    complete: solver.done && solver.complete,
-    work: solver.work,
-    hookups: shown,
-    moreCount: more,
-    obstacles: solver.done ? solver.obstacles() : [],
-    purchases: [],
+    best() {
+      const { shown, more } = choose(withSound(built()), LIMITS.hookupsShown)
+      const complete = solver.complete && (shopping?.complete ?? true)
+      return {
+        format: 1,
+        verdict: shown.length > 0 ? 'yes' : 'none',
+        complete: solver.done && (shopping?.done ?? true) && complete,
+        work: solver.work + (shopping?.work ?? 0),
+        hookups: shown,
+        moreCount: more,
+        obstacles: solver.done ? solver.obstacles() : [],
+        purchases: shopping?.done ? shopping.purchases(shown[0] ?? null) : [],
+      }
+    },
   }
 }
 
 /** Runs a search to its end in one go. */
-export function findHookups(snapshot: Snapshot, question: Question, budget?: number): Answer {
-  const search = createSearch(snapshot, question, budget)
+export function findHookups(
+  snapshot: Snapshot,
+  question: Question,
+  options?: SearchOptions,
+): Answer {
+  const search = createSearch(snapshot, question, options)
   while (!search.done) search.step(1000)
   return search.best()
 }

@@ -1,1 +1,2 @@
-export { createSearch, findHookups, type HookupSearch } from './create-search'
+export { createSearch, findHookups, type HookupSearch, type SearchOptions } from './create-search'
+export { partUid, withParts, type Parts } from './reasons/purchases'

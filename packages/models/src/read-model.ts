@@ -48,3 +48,7 @@ export function together(a: Condition | undefined, b: Condition | undefined): Co
   }
   return [...merged].map(([control, positions]) => ({ control, in: positions }))
 }
+
+/** All conditions at once, or null when they cannot be. */
+export const allTogether = (...all: readonly (Condition | undefined)[]): Condition | null =>
+  all.reduce<Condition | null>((sum, next) => sum && together(sum, next), [])

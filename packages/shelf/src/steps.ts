@@ -1,5 +1,6 @@
 import {
   controlOf,
+  POWER_KEY,
   portOf,
   type DeviceModel,
   type PieceModel,
@@ -251,6 +252,7 @@ function settings(hookup: Hookup, look: Lookup): Draft[] {
 
 /** A setting in words: control and position as the device itself calls them. */
 export function settingSentence(setting: Setting, look: { device(uid: Uid): DeviceModel }): Say {
+  if (setting.control === POWER_KEY) return plain(`setting.power.${setting.position}`)
   const control = controlOf(look.device(setting.unit), setting.control)
   const label =
     control.kind === 'positions' || control.kind === 'auto'

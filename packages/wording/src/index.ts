@@ -3,7 +3,7 @@ import type { Locale } from './locale'
 import { APP } from './messages/app'
 import { ASK } from './messages/ask'
 import { GENERAL } from './messages/general'
-import { HOOKUP, OBSTACLES } from './messages/hookup'
+import { HOOKUP, OBSTACLES, PURCHASES } from './messages/hookup'
 import { MODELS } from './messages/models'
 import { PROBLEMS } from './messages/problems'
 import { SCREENS } from './messages/screens'
@@ -19,6 +19,7 @@ export const MESSAGES = {
   ...ASK,
   ...HOOKUP,
   ...OBSTACLES,
+  ...PURCHASES,
   ...MODELS,
   ...SHELF,
   ...SCREENS,

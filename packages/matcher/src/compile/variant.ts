@@ -12,6 +12,8 @@ export interface Variant {
   readonly device: DeviceModel
   readonly units: readonly Unit[]
   readonly powered: boolean
+  /** Not on the shelf: one to be bought. */
+  readonly bought: boolean
 }
 
 /** Controls that a missing remote leaves standing where they are. */
@@ -39,8 +41,17 @@ const needsPower = (device: DeviceModel): boolean =>
   device.pack !== undefined ||
   device.functions.some((f) => f.power !== 'none')
 
+/** Without prices a box with power counts as so many leads (common practice, no source). */
+const BOX_IN_LEADS = 4
+
+/** What a variant adds to a purchase; nothing when it is on the shelf. */
+export function priceOf(variant: Variant): number {
+  if (!variant.bought) return 0
+  return variant.powered ? BOX_IN_LEADS : 1
+}
+
 /** The variant of one unit alone, for a source or a display. Throws when the unit is a lead. */
-export function variantOf(snapshot: Snapshot, unit: Unit): Variant {
+export function variantOf(snapshot: Snapshot, unit: Unit, bought = false): Variant {
   const model = snapshot.models[unit.model]
   if (model?.type !== 'device') throw new Error(`unit ${unit.uid} is not a device`)
   const device = withStuck(fitted(model, unit.modifications), stuckControls(model, unit))
@@ -50,11 +61,16 @@ export function variantOf(snapshot: Snapshot, unit: Unit): Variant {
     device,
     units: [unit],
     powered: needsPower(device),
+    bought,
   }
 }
 
 /** All units that may be lent, put together by what they can do. */
-export function compileVariants(snapshot: Snapshot, leftOut: ReadonlySet<Uid>): Variant[] {
+export function compileVariants(
+  snapshot: Snapshot,
+  leftOut: ReadonlySet<Uid>,
+  bought: ReadonlySet<Uid>,
+): Variant[] {
   const groups = new Map<string, Unit[]>()
   for (const unit of snapshot.units) {
     const model = snapshot.models[unit.model]
@@ -64,7 +80,11 @@ export function compileVariants(snapshot: Snapshot, leftOut: ReadonlySet<Uid>): 
     if (group) group.push(unit)
     else groups.set(key, [unit])
   }
-  return [...groups].map(([id, units]) => ({ ...variantOf(snapshot, units[0] as Unit), id, units }))
+  return [...groups].map(([id, units]) => ({
+    ...variantOf(snapshot, units[0] as Unit, bought.has(units[0]!.uid)),
+    id,
+    units,
+  }))
 }
 
 /** What one way through a unit leans on: forms on ports, and functions. */

@@ -1,5 +1,7 @@
 import {
+  allTogether,
   inputsOf,
+  POWER_KEY,
   jackOf,
   together,
   type AutoCause,
@@ -11,6 +13,7 @@ import {
   type ModelFunction,
   type Port,
 } from '@coaxwain/models'
+import { formState } from '@coaxwain/shelf'
 import type { Unit } from '@coaxwain/shelf'
 import { isPictureForm, type Circuit, type PictureForm } from '@coaxwain/signal'
 import type { FaceTable, Placed } from './face'
@@ -45,6 +48,8 @@ export interface Way {
   readonly from: Placed | null
   /** The socket by which this way would harm somebody. */
   readonly harm: Port | null
+  /** The socket that is recorded as dead, so that no unit offers this way. */
+  readonly dead: Port | null
   /** Least doubt first; units in which something needed is dead are left out. */
   readonly offers: readonly Offer[]
 }
@@ -166,6 +171,12 @@ function soundOnlyParts(device: DeviceModel, fn: ModelFunction): SoundPart[] {
   )
 }
 
+/** The power states in which a function acts. */
+function powerFor(fn: ModelFunction): Condition {
+  if (fn.power === 'none') return []
+  return [{ control: POWER_KEY, in: fn.power === 'on' ? ['on'] : ['on', 'standby'] }]
+}
+
 function draftsOf(device: DeviceModel, fn: ModelFunction): Draft[] {
   const inputs = [...fn.needs, ...(fn.oneOf ?? [])].filter((k) => isPictureJack(device, k))
   const outputs = fn.gives.filter((g) => isPictureJack(device, g.jack))
@@ -174,7 +185,7 @@ function draftsOf(device: DeviceModel, fn: ModelFunction): Draft[] {
   return ins.flatMap((input) =>
     outs.flatMap((out) =>
       soundParts(device, fn, input, out).flatMap((part): Draft[] => {
-        const own = together(fn.while, out?.while)
+        const own = allTogether(fn.while, out?.while, powerFor(fn))
         const other = part.fn === fn ? part.stand : together(part.fn.while, part.stand)
         const stand = own && other ? together(own, other) : null
         if (!stand) return []
@@ -257,6 +268,17 @@ function toBeChecked(device: DeviceModel, leans: Leans): number {
     : 0
 }
 
+/** The socket for which no unit of a variant offers a way. */
+function deadPort(variant: Variant, leans: Leans): Port | null {
+  const dead = leans.contacts.find(({ jack, port }) =>
+    variant.units.every((u) => formState(u, jack, port) === 'dead'),
+  )
+  return variant.device.ports.find((p) => p.key === dead?.port) ?? null
+}
+
+/** May be part of an answer: harms nobody, and some unit offers it. */
+export const isUsable = (way: Way): boolean => way.harm === null && way.dead === null
+
 /** What moves an automatic control while this way is in use, or null when nothing moves it there. */
 function causes(device: DeviceModel, draft: Draft): { dcAt: Key[] } | null {
   const fed = new Set([
@@ -333,7 +355,7 @@ export class WayMaker {
               }))
             : []
         return [...through, ...into].flatMap((part) => {
-          const stand = together(fn.while, part.stand)
+          const stand = allTogether(fn.while, part.stand, powerFor(fn))
           if (!stand) return []
           return this.make(variant, {
             fn,
@@ -361,7 +383,8 @@ export class WayMaker {
       .map((unit) => ({ unit, doubt: unitDoubt(unit, leans, toBeChecked(device, leans)) }))
       .filter((o): o is Offer => o.doubt !== null)
       .sort((a, b) => a.doubt - b.doubt)
-    if (offers.length === 0) return []
+    const dead = offers.length === 0 ? deadPort(variant, leans) : null
+    if (offers.length === 0 && dead === null) return []
     const wired = withDc(device, moved.dcAt)
     return [
       {
@@ -373,6 +396,7 @@ export class WayMaker {
         from: this.face(wired, draft.out?.jack ?? null, draft.soundTo, draft.out?.volts ?? []),
         offers,
         harm: harmOf(device, draft),
+        dead,
       },
     ]
   }

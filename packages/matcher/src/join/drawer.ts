@@ -37,6 +37,8 @@ export interface DrawerPiece {
   /** How many there are; Infinity for the usual leads that are taken as being there. */
   readonly stock: number
   readonly passesVolts: boolean
+  /** Not in the drawer: one to be bought. */
+  readonly bought: boolean
 }
 
 /** Leads and adapters at hand, each in both ways round. */
@@ -50,6 +52,8 @@ export interface Drawer {
   readonly mixers: boolean
   /** The piece is made for such a circuit. */
   suits(piece: number, circuit: Circuit): boolean
+  /** The same drawer without what would have to be bought. */
+  readonly owned: Drawer
   /** Pieces that can be pushed onto a connector, by that connector. */
   onto(connector: Connector): readonly { readonly turned: Turned; readonly plug: number }[]
 }
@@ -93,6 +97,7 @@ export function compileDrawer(
   snapshot: Snapshot,
   leftOut: ReadonlySet<Uid>,
   assumed: readonly Uid[],
+  bought: ReadonlySet<Uid>,
 ): Drawer {
   const stock = new Map<Uid, number>()
   for (const unit of snapshot.units) {
@@ -101,20 +106,32 @@ export function compileDrawer(
     stock.set(unit.model, (stock.get(unit.model) ?? 0) + unit.quantity)
   }
   for (const uid of assumed) stock.set(uid, Infinity)
-  const pieces = classes(snapshot, stock)
-  const turned = pieces.flatMap(({ piece }, i) =>
-    symmetric(piece)
+  const pieces = classes(snapshot, stock, bought)
+  const all = view(pieces, () => true)
+  return pieces.some((p) => p.bought) ? { ...all, owned: view(pieces, (p) => !p.bought) } : all
+}
+
+/** A drawer of some of the pieces; their numbers stay the same. */
+function view(pieces: readonly DrawerPiece[], among: (piece: DrawerPiece) => boolean): Drawer {
+  const turned = pieces.flatMap((drawn, i) => {
+    if (!among(drawn)) return []
+    const { piece } = drawn
+    return symmetric(piece)
       ? [turn(piece, i, 'forward')]
-      : [turn(piece, i, 'forward'), turn(piece, i, 'reverse')],
-  )
+      : [turn(piece, i, 'forward'), turn(piece, i, 'reverse')]
+  })
   const byConnector = new Map<Connector, { turned: Turned; plug: number }[]>()
-  return {
+  const present = pieces.filter(among)
+  const made: Drawer = {
     pieces,
     turned,
     connectors: CONNECTORS,
-    mixers: pieces.some((p) => p.piece.mixes),
+    mixers: present.some((p) => p.piece.mixes),
     suits: (piece, circuit) => meantFor(pieces[piece]?.piece.meantFor, circuit),
-    total: pieces.reduce((sum, p) => sum + p.stock, 0),
+    total: present.reduce((sum, p) => sum + p.stock, 0),
+    get owned() {
+      return made
+    },
     onto(connector) {
       const known = byConnector.get(connector)
       if (known) return known
@@ -127,6 +144,7 @@ export function compileDrawer(
       return fitting
     },
   }
+  return made
 }
 
 /** Cores of a lead that differ in nothing need to be tried only once. */
@@ -173,19 +191,26 @@ const content = (piece: PieceModel): string =>
   })
 
 /** Puts pieces that do the same together, those with the fewest plugs first: none is left hanging. */
-function classes(snapshot: Snapshot, stock: ReadonlyMap<Uid, number>): DrawerPiece[] {
+function classes(
+  snapshot: Snapshot,
+  stock: ReadonlyMap<Uid, number>,
+  bought: ReadonlySet<Uid>,
+): DrawerPiece[] {
   const groups = new Map<string, { model: Uid; stock: number; piece: PieceModel }[]>()
   for (const [model, count] of stock) {
     const piece = snapshot.models[model]
     if (piece?.type !== 'piece' || piece.kind === 'terminator' || count <= 0) continue
-    const key = content(piece)
+    const key = `${bought.has(model) ? 1 : 0} ${content(piece)}`
     groups.set(key, [...(groups.get(key) ?? []), { model, stock: count, piece }])
   }
   // By content, so that neither names nor the order on the shelf decide between equals.
   return [...groups.entries()]
     .sort(
       ([x, [a]], [y, [b]]) =>
-        ofAll(a!.piece) - ofAll(b!.piece) || leadFirst(a!.piece, b!.piece) || (x < y ? -1 : 1),
+        Number(bought.has(a!.model)) - Number(bought.has(b!.model)) ||
+        ofAll(a!.piece) - ofAll(b!.piece) ||
+        leadFirst(a!.piece, b!.piece) ||
+        (x < y ? -1 : 1),
     )
     .map(([, members]) => ({
       models: members
@@ -198,6 +223,7 @@ function classes(snapshot: Snapshot, stock: ReadonlyMap<Uid, number>): DrawerPie
       piece: members[0]!.piece,
       stock: members.reduce((sum, m) => sum + m.stock, 0),
       passesVolts: passesVolts(members[0]!.piece),
+      bought: bought.has(members[0]!.model),
     }))
 }
 

@@ -3,9 +3,10 @@ import type { SwitchVolt } from '@coaxwain/signal'
 import type { Face, FacePort } from '../compile/face'
 import { Distances } from './distance'
 import type { Drawer } from './drawer'
-import { Router, usageOf, type Routing, type WantedWire } from './route'
+import { Router, usageOf, type Routing, type Supply, type WantedWire } from './route'
 import {
   lumaOnly,
+  mismatched,
   soundWires,
   wholePicture,
   type PictureMeeting,
@@ -19,6 +20,8 @@ export interface Join {
   readonly wires: readonly WantedWire[]
   readonly routing: Routing
   readonly pieces: number
+  /** How many of them have to be bought. */
+  readonly bought: number
   /** Pieces of scarce sorts that it takes, by sort. */
   readonly scarce: ReadonlyMap<number, number>
   readonly picture: PictureMeeting | null
@@ -39,11 +42,25 @@ const MOST_PIECES = 2 * LIMITS.piecesInLink
 /** Ways that need so many pieces more than the shortest are not sought in a well-filled drawer. */
 const SPARE_PIECES = 2
 
+interface Wish {
+  readonly out: Face
+  readonly into: Face
+  readonly wires: readonly WantedWire[]
+  readonly picture: PictureMeeting | null
+  readonly sound: SoundMeeting | null
+}
+
+const supplyOf = (drawer: Drawer): Supply => ({
+  drawer,
+  distances: new Distances(drawer),
+  single: new Map(),
+})
+
 /** Works out once per pair of faces what can be plugged between them. */
 export class JoinTable {
   private readonly known = new Map<string, readonly Join[]>()
-  private readonly single = new Map<string, number>()
-  private readonly distances: Distances
+  private readonly all: Supply
+  private readonly owned: Supply
   /** True once a longer way round a scarce piece was not sought. */
   capped = false
 
@@ -52,7 +69,8 @@ export class JoinTable {
     readonly drawer: Drawer,
     private readonly scarce: ReadonlySet<number>,
   ) {
-    this.distances = new Distances(drawer)
+    this.all = supplyOf(drawer)
+    this.owned = drawer.owned === drawer ? this.all : supplyOf(drawer.owned)
   }
 
   get hasScarce(): boolean {
@@ -67,6 +85,15 @@ export class JoinTable {
     const made = this.work(out, into, wanted)
     this.known.set(key, made)
     return made
+  }
+
+  /** Leads at hand join the two, contact to contact, although the circuits are not the same. */
+  wrongWires(out: Face, into: Face): boolean {
+    const wires = mismatched(out, into)
+    return (
+      wires !== null &&
+      this.layFrom(this.owned, { out, into, wires, picture: 'whole', sound: null }).length > 0
+    )
   }
 
   private work(out: Face, into: Face, wanted: Wanted): readonly Join[] {
@@ -84,6 +111,7 @@ export class JoinTable {
     )
   }
 
+  /** With what is there if that does it; else with something bought. */
   private lay(
     out: Face,
     into: Face,
@@ -91,8 +119,16 @@ export class JoinTable {
     picture: PictureMeeting | null,
     sound: SoundMeeting | null,
   ): Join[] {
-    if (sound === 'fold' && !this.drawer.mixers) return []
-    const each = wires.map((w) => this.leastFor(out, into, w))
+    const wish = { out, into, wires, picture, sound }
+    const own = this.layFrom(this.owned, wish)
+    const enough = this.owned === this.all || own.some((j) => j.scarce.size === 0)
+    return enough ? own : [...own, ...this.layFrom(this.all, wish).filter((j) => j.bought > 0)]
+  }
+
+  private layFrom(supply: Supply, wish: Wish): Join[] {
+    const { out, into, wires, sound } = wish
+    if (sound === 'fold' && !supply.drawer.mixers) return []
+    const each = wires.map((w) => this.leastFor(supply, wish, w))
     const least = Math.max(...each)
     if (least === Infinity) return []
     // Every wire by pieces of its own is the most that can be needed; a mixing piece is one more.
@@ -100,15 +136,18 @@ export class JoinTable {
       MOST_PIECES,
       each.reduce((sum, n) => sum + n, sound === 'fold' ? 1 : 0),
     )
-    const kept: Join[] = []
+    const shopping = supply !== this.owned
+    let kept: Join[] = []
     for (let pieces = least; pieces <= Math.max(most, least) + this.slack(kept); pieces++) {
-      if (kept[0] && pieces > kept[0].pieces + SPARE_PIECES && this.drawer.total > MOST_PIECES) {
-        this.capped ||= this.scarce.size > 0
-        break
+      if (kept[0] && (shopping || pieces > kept[0].pieces + SPARE_PIECES)) {
+        this.capped ||= !shopping && this.scarce.size > 0 && supply.drawer.total > MOST_PIECES
+        if (shopping || supply.drawer.total > MOST_PIECES) break
       }
-      new Router(this.drawer, this.distances, out, into, wires, pieces, (routing) => {
-        const join = this.judge(out, into, wires, routing, picture, sound)
-        if (join && !kept.some((k) => noWorse(k, join))) kept.push(join)
+      new Router(supply, out, into, wires, pieces, (routing) => {
+        const join = this.judge(wish, routing)
+        if (join && !kept.some((k) => noWorse(k, join))) {
+          kept = [...kept.filter((k) => !noWorse(join, k)), join]
+        }
         return settled(kept, out)
       }).run()
       if (settled(kept, out)) break
@@ -122,31 +161,24 @@ export class JoinTable {
   }
 
   /** The fewest pieces by which one wire alone can come about. */
-  private leastFor(out: Face, into: Face, wire: WantedWire): number {
+  private leastFor(supply: Supply, { out, into }: Wish, wire: WantedWire): number {
     const from = out.ports[wire.fromPort] as FacePort
     const to = into.ports[wire.toPort] as FacePort
     const key = JSON.stringify([from, to, wire.circuit, wire.fromContact, wire.toContact])
-    const known = this.single.get(key)
+    const known = supply.single.get(key)
     if (known !== undefined) return known
     let least = Infinity
     for (let pieces = 0; pieces <= LIMITS.piecesInLink && least === Infinity; pieces++) {
-      new Router(this.drawer, this.distances, out, into, [wire], pieces, () => {
+      new Router(supply, out, into, [wire], pieces, () => {
         least = pieces
         return true
       }).run()
     }
-    this.single.set(key, least)
+    supply.single.set(key, least)
     return least
   }
 
-  private judge(
-    out: Face,
-    into: Face,
-    wires: readonly WantedWire[],
-    routing: Routing,
-    picture: PictureMeeting | null,
-    sound: SoundMeeting | null,
-  ): Join | null {
+  private judge({ out, into, wires, picture, sound }: Wish, routing: Routing): Join | null {
     const dc = this.directCurrent(out, into, wires, routing)
     if (dc === 'harm') return null
     const usage = usageOf(routing)
@@ -156,6 +188,7 @@ export class JoinTable {
       wires,
       routing,
       pieces: routing.instances.length,
+      bought: routing.instances.filter((i) => this.drawer.pieces[i.piece]?.bought).length,
       scarce: new Map([...usage].filter(([piece]) => this.scarce.has(piece))),
       picture,
       sound,
@@ -201,6 +234,7 @@ export class JoinTable {
 
 const noWorse = (a: Join, b: Join): boolean =>
   a.pieces <= b.pieces &&
+  a.bought <= b.bought &&
   b.volts.every((v) => a.volts.includes(v)) &&
   (!a.dcUnknown || b.dcUnknown) &&
   [...a.scarce].every(([piece, n]) => n <= (b.scarce.get(piece) ?? 0))
@@ -208,5 +242,9 @@ const noWorse = (a: Join, b: Join): boolean =>
 /** Nothing better can come: no scarce piece used, all voltages across, no doubt. */
 const settled = (kept: readonly Join[], out: Face): boolean =>
   kept.some(
-    (j) => j.scarce.size === 0 && !j.dcUnknown && out.volts.every((v) => j.volts.includes(v)),
+    (j) =>
+      j.bought === 0 &&
+      j.scarce.size === 0 &&
+      !j.dcUnknown &&
+      out.volts.every((v) => j.volts.includes(v)),
   )

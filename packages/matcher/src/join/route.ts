@@ -49,6 +49,13 @@ export function usageOf(routing: Routing): Map<number, number> {
   return usage
 }
 
+/** A drawer, and what has been worked out about it. */
+export interface Supply {
+  readonly drawer: Drawer
+  readonly distances: Distances
+  readonly single: Map<string, number>
+}
+
 interface Open {
   readonly connector: Connector
   readonly mount: 'chassis' | 'lead'
@@ -68,16 +75,20 @@ export class Router {
   private readonly inMates: (End | undefined)[] = []
   private readonly hops: (readonly Hop[])[] = []
   private done = false
+  private readonly drawer: Drawer
+  private readonly distances: Distances
 
   constructor(
-    private readonly drawer: Drawer,
-    private readonly distances: Distances,
+    supply: Supply,
     private readonly out: Face,
     private readonly into: Face,
     private readonly wires: readonly WantedWire[],
     private readonly pieces: number,
     private readonly found: (routing: Routing) => boolean,
-  ) {}
+  ) {
+    this.drawer = supply.drawer
+    this.distances = supply.distances
+  }
 
   run(): void {
     this.wire(0)

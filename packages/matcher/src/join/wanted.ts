@@ -1,4 +1,4 @@
-import { arrivalAt, type Circuit, type SoundCircuit } from '@coaxwain/signal'
+import { arrivalAt, isSingle, mates, type Circuit, type SoundCircuit } from '@coaxwain/signal'
 import type { Face, FaceContact } from '../compile/face'
 import type { WantedWire } from './route'
 
@@ -66,6 +66,34 @@ export function lumaOnly(out: Face, into: Face): WantedWire[] | null {
     }
   }
   return null
+}
+
+/** Where a person would put a plug by its colour: green on green, blue on blue, red on red. */
+const BY_COLOUR: Partial<Record<Circuit, Circuit>> = {
+  g: 'y',
+  b: 'pb',
+  r: 'pr',
+  y: 'g',
+  pb: 'b',
+  pr: 'r',
+}
+
+/**
+ * Wires that a person may lay because the plugs fit: RGB and component by colour, or a multi-way plug in its
+ * own socket whose wanted circuits are not there. Null where nothing invites it.
+ */
+export function mismatched(out: Face, into: Face): WantedWire[] | null {
+  const coloured = into.picture.flatMap((want) => {
+    const from = out.picture.find((c) => BY_COLOUR[c.circuit] === want.circuit)
+    return from ? [wire(from, want)] : []
+  })
+  if (coloured.length === 3) return coloured
+  const [from] = out.picture
+  const [want] = into.picture
+  const a = from && out.ports[from.port]
+  const b = want && into.ports[want.port]
+  if (!a || !b || isSingle(a.connector) || !mates(a.connector, b.connector)) return null
+  return [{ ...wire(from, want), toContact: from.contact }]
 }
 
 export interface WantedSound {

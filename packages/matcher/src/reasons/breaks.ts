@@ -38,14 +38,20 @@ export function breaksAt(way: Way, sig: Sig, ends: Ends): Obstacle[] {
   const deflection = device.display?.deflection
   if (way.fn.kind === 'shows' && deflection) found.push(...deflectionBreaks(deflection, sig, ends))
   if (found.some((o) => o.code === 'line-rate')) return found
-  if (way.fn.tunedBy !== undefined) return [...found, ...tunerBreaks(way, sig, ends)]
+  if (way.fn.tunedBy !== undefined) return onceEach([...found, ...tunerBreaks(way, sig, ends)])
   if (sig.form !== way.into?.face.form) return found
-  return [...found, ...rowBreaks(way, sig, ends)]
+  return onceEach([...found, ...rowBreaks(way, sig, ends)])
 }
+
+const onceEach = (found: readonly Obstacle[]): Obstacle[] =>
+  found.filter((o, i) => found.findIndex((x) => x.code === o.code) === i)
 
 function deflectionBreaks(deflection: Deflection, sig: Sig, ends: Ends): Obstacle[] {
   const { lineKhz, fieldHz } = SCANS[sig.scan]
-  if (!followsLine(deflection, sig.scan)) {
+  const near = nearest(deflection.lineKhz.flat(), lineKhz)
+  // The two television rates differ by 0.7 %: what stops such a picture is its field rate.
+  const television = Math.abs(near - lineKhz) / lineKhz < 0.02
+  if (!followsLine(deflection, sig.scan) && !(television && !followsField(deflection, sig.scan))) {
     return [
       obstacle(
         'line-rate',

@@ -13,6 +13,10 @@ export interface ReasonTools {
   /** Ways through boxes. */
   readonly boxes: readonly Way[]
   readonly lightGun: boolean
+  /** Some answer works in full, so that second-best ways need no explaining. */
+  readonly whole: boolean
+  /** An answer joins these two: a rate that is too fast there is a matter of settings. */
+  readonly joined: (out: Face, into: Face) => boolean
   /** Powered boxes and pieces of the easiest answer; null when there is none. */
   readonly best: { readonly boxes: number; readonly pieces: number } | null
 }
@@ -50,8 +54,11 @@ export function obstaclesBetween(
   const throughBox = starts.flatMap((label) =>
     tools.boxes.flatMap((box) => throughOne(label, box, ends, tools)),
   )
-  const all = [...direct, ...throughBox].filter(
-    (a): a is Attempt => a !== null && a.broken.length > 0 && a.broken.length <= MOST_BROKEN,
+  const backwards = tools.whole
+    ? []
+    : starts.flatMap((label) => tools.boxes.flatMap((box) => turnedRound(label, box, ends, tools)))
+  const all = [...direct, ...throughBox, ...backwards].filter(
+    (a): a is Attempt => a !== null && a.broken.length > 0 && rulesOf(a).length <= MOST_BROKEN,
   )
   const { best } = tools
   if (all.length === 0 && !best)
@@ -70,18 +77,23 @@ export function obstaclesBetween(
 /** Nothing at hand can even be plugged together: the forms differ, and perhaps the rates as well. */
 function apart(label: Label, end: Way): Obstacle[] {
   const ends = endsOf(label.way, end)
-  const rates = breaksAt(end, label.sig, ends).filter((o) => RATES.includes(o.code))
+  const rates = ratesAt(end, label, ends)
   const forms = { from: label.sig.form, to: end.into?.face.form ?? '' }
   return [...rates, obstacle('no-common-form', { ...ends, fromForm: forms.from, toForm: forms.to })]
 }
 
 const RATES = ['line-rate', 'field-rate']
 
+const ratesAt = (end: Way, label: Label, ends: Ends): Obstacle[] =>
+  breaksAt(end, label.sig, ends).filter((o) => RATES.includes(o.code))
+
 /** One rule stands in the way; a lead that is not at hand is no rule. */
-const looksRight = ({ broken, boxes }: Attempt): boolean => {
-  const rules = broken.filter((o) => o.code !== 'no-lead')
-  return rules.length === 1 && (rules.length === broken.length || boxes === 0)
+const looksRight = (a: Attempt): boolean => {
+  const rules = rulesOf(a)
+  return rules.length === 1 && (rules.length === a.broken.length || a.boxes === 0)
 }
+
+const rulesOf = ({ broken }: Attempt): Obstacle[] => broken.filter((o) => o.code !== 'no-lead')
 
 const easier = (a: Attempt, best: { boxes: number; pieces: number }): boolean =>
   a.boxes < best.boxes || (a.boxes === best.boxes && a.pieces <= best.pieces)
@@ -107,20 +119,33 @@ function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
     return { ...cost, broken: [obstacle('japanese-21-pin', { ...ends }, flags)] }
   }
   const [join] = tools.joins.between(out, into, PICTURE)
-  if (!join && out.form !== into.form) return null
+  if (!join && out.form !== into.form) {
+    if (!tools.joins.wrongWires(out, into)) return null
+    const forms = { fromForm: out.form ?? '', toForm: into.form ?? '' }
+    return {
+      ...cost,
+      broken: [
+        obstacle('wrong-circuits', { ...ends, ...forms }, { lookalike: true }),
+        ...ratesAt(way, label, ends),
+      ],
+    }
+  }
   const noLead = join ? [] : [obstacle('no-lead', { ...ends, form: out.form ?? '' })]
   const grey =
     join?.picture === 'luma-only'
       ? [obstacle('luma-only', { ...ends }, { lookalike: true })]
-      : breaksAt(way, label.sig, ends)
+      : breaksAt(way, label.sig, ends).filter(
+          (o) => !RATES.includes(o.code) || !tools.joined(out, into),
+        )
   const gun = tools.lightGun && way.fn.kind === 'shows' ? gunBreaks(way.variant.device, ends) : []
+  const dead = way.dead ? [obstacle('socket-dead', { ...ends, port: way.dead.label })] : []
   const harm = way.harm
     ? [obstacle('added-socket', { ...ends, port: way.harm.label }, { harmful: true })]
     : []
   return {
     ...cost,
     pieces: cost.pieces + (join?.pieces ?? 1),
-    broken: [...harm, ...noLead, ...grey, ...gun],
+    broken: [...dead, ...harm, ...noLead, ...grey, ...gun],
   }
 }
 
@@ -130,6 +155,34 @@ const wrongWiring = (out: Face, into: Face): boolean =>
     into.ports.some((b) => fits(a.connector, b.connector) && !mates(a.connector, b.connector)),
   )
 
+/** A passive box that is made for the other direction. */
+function turnedRound(
+  label: Label,
+  box: Way,
+  ends: readonly Way[],
+  tools: ReasonTools,
+): (Attempt | null)[] {
+  if (box.fn.power !== 'none' || !label.way.from || !box.from || !box.into) return []
+  const { from, into } = box
+  if (tools.joins.between(label.way.from.face, from.face, PICTURE).length === 0) return []
+  return ends.map((end) => {
+    if (!end.into || tools.joins.between(into.face, end.into.face, PICTURE).length === 0)
+      return null
+    const details = { ...endsOf(label.way, end), to: box.variant.device.name }
+    const grey = into.face.form === 's-video' && label.sig.form === 'composite'
+    return {
+      boxes: label.boxes,
+      pieces: label.pieces + 1,
+      broken: [
+        obstacle('one-way', details, { lookalike: true }),
+        ...(grey
+          ? [obstacle('luma-only', { ...endsOf(label.way, end) }, { lookalike: true })]
+          : []),
+      ],
+    }
+  })
+}
+
 /** Into a box, breaking a rule there or not, and out of it into the display. */
 function throughOne(
   label: Label,
@@ -138,7 +191,7 @@ function throughOne(
   tools: ReasonTools,
 ): (Attempt | null)[] {
   const first = attempt(label, box, tools)
-  if (!first || first.broken.length > MOST_BROKEN) return []
+  if (!first || rulesOf(first).length > MOST_BROKEN) return []
   if (first.broken.length === 0) {
     const made: Label[] = []
     for (const entry of tools.expander.entries(label, box)) {

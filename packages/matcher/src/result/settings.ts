@@ -1,5 +1,6 @@
 import {
   controlOf,
+  POWER_KEY,
   type Condition,
   type Control,
   type ControlRole,
@@ -40,6 +41,7 @@ const REASONS: Readonly<Record<ControlRole, SettingReason>> = {
 export function settingsOf(placing: Placing): Setting[] {
   const wanted = new Map(placing.stand.map((c) => [c.control, c.in]))
   return [
+    ...power(placing, wanted),
     ...switches(placing, wanted),
     ...lineEnds(placing),
     ...sending(placing),
@@ -54,6 +56,24 @@ const base = ({ unit }: Placing, control: Control) => ({
   control: control.key,
   access: control.access,
 })
+
+/** A unit that must be off to pass its signal on; on is taken for granted. */
+function power(placing: Placing, wanted: ReadonlyMap<Key, readonly string[]>): Setting[] {
+  const states = wanted.get(POWER_KEY)
+  const [first] = states ?? []
+  if (!states || first === undefined || states.includes('on')) return []
+  return [
+    {
+      unit: placing.unit.uid,
+      control: POWER_KEY,
+      position: first,
+      orElse: states.slice(1),
+      access: 'front',
+      why: 'powers',
+      must: true,
+    },
+  ]
+}
 
 function switches(placing: Placing, wanted: ReadonlyMap<Key, readonly string[]>): Setting[] {
   return [...wanted].flatMap(([key, positions]): Setting[] => {

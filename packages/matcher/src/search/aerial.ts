@@ -10,7 +10,7 @@ import type { OffAir } from '@coaxwain/shelf'
 import { channelsIn, findChannel, leastMargin, type Occupant } from '@coaxwain/signal'
 import type { FaceTable, Placed } from '../compile/face'
 import type { CarrierSet, Sig, SigTable } from '../compile/sig'
-import type { Variant } from '../compile/variant'
+import { priceOf, type Variant } from '../compile/variant'
 import type { Way } from '../compile/way'
 import type { Join, JoinTable } from '../join/join'
 import { pathOf, type Cost, type Label } from './label'
@@ -53,6 +53,7 @@ const noWorse = (a: AerialRoute, b: AerialRoute): boolean =>
   a.boxes <= b.boxes &&
   a.pieces <= b.pieces &&
   a.doubt <= b.doubt &&
+  a.bought <= b.bought &&
   (a.reverseDb ?? -1) >= (b.reverseDb ?? -1)
 
 /** Isolation from one port to another on a way that is not meant; null where it is not recorded. */
@@ -109,6 +110,7 @@ export class Aerials {
       boxes: 0,
       pieces: 0,
       doubt: way.offers[0]?.doubt ?? 0,
+      bought: 0,
       reverseDb: 0,
     }))
     const all = [...layer]
@@ -130,6 +132,7 @@ export class Aerials {
       boxes: route.boxes + (way.variant.powered ? 1 : 0),
       pieces: route.pieces + join.pieces + (way.variant.powered ? 0 : 1),
       doubt: route.doubt + (way.offers[0]?.doubt ?? 0) + (join.dcUnknown ? 1 : 0),
+      bought: route.bought + join.bought + priceOf(way.variant),
       reverseDb: route.reverseDb === null || back === null ? null : route.reverseDb + back,
     }))
   }
@@ -148,6 +151,7 @@ export class Aerials {
           joins: [...route.joins, join],
           pieces: route.pieces + join.pieces,
           doubt: route.doubt + (join.dcUnknown ? 1 : 0),
+          bought: route.bought + join.bought,
         }
         if (!kept.some((k) => noWorse(k, whole))) kept.push(whole)
       }
@@ -231,6 +235,7 @@ export class Aerials {
           boxes: route.boxes,
           pieces: route.pieces,
           doubt: route.doubt + (radiates === null ? 1 : 0),
+          bought: route.bought,
         },
       ]
     })

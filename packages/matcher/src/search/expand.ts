@@ -3,6 +3,7 @@ import { SOUND_RANK, type Sound } from '@coaxwain/signal'
 import { accept, type Taken } from '../compile/accept'
 import { leave, type Leaving } from '../compile/leave'
 import type { Sig, SigTable } from '../compile/sig'
+import { priceOf } from '../compile/variant'
 import type { SoundEnd, Way } from '../compile/way'
 import type { Join, JoinTable } from '../join/join'
 import { levelOf, type Aerials, type AerialUse } from './aerial'
@@ -19,6 +20,7 @@ export interface Entry {
   readonly boxes: number
   readonly pieces: number
   readonly doubt: number
+  readonly bought: number
 }
 
 const isEnd = (place: Way['soundFrom']): place is SoundEnd => place !== null && place !== 'picture'
@@ -56,6 +58,7 @@ export class Expander {
           boxes: route?.boxes ?? 0,
           pieces: join.pieces + (route?.pieces ?? 0),
           doubt: unknown + (join.dcUnknown ? 1 : 0) + (route?.doubt ?? 0),
+          bought: join.bought + (route?.bought ?? 0),
         }
       }),
     )
@@ -150,6 +153,7 @@ export class Expander {
         boxes: label.boxes + entry.boxes + (way.variant.powered ? 1 : 0),
         pieces: label.pieces + entry.pieces + (way.variant.powered ? 0 : 1),
         doubt: label.doubt + entry.doubt + unitDoubt,
+        bought: label.bought + entry.bought + priceOf(way.variant),
       }
       if (isEnd(way.soundTo)) {
         if (inside === 'none') continue
@@ -186,6 +190,7 @@ export class Expander {
       boxes: made.boxes + use.boxes,
       pieces: made.pieces + use.pieces,
       doubt: made.doubt + use.doubt,
+      bought: made.bought + use.bought,
     }
     if (copy.sound.kind === 'waits' && copy.sound.at === made)
       copy.sound = { ...copy.sound, at: copy }

@@ -8,6 +8,7 @@ import {
   type Quality,
   type Sound,
 } from '@coaxwain/signal'
+import { priceOf } from '../compile/variant'
 import type { Way } from '../compile/way'
 import type { Aerials, AerialUse } from './aerial'
 import { settle, type Entry, type Expander } from './expand'
@@ -109,7 +110,7 @@ export class Finisher {
     ways: Pick<Finished, 'picture' | 'sound' | 'speakers' | 'aerial'>,
   ): Finished[] {
     const { picture, sound, speakers, aerial } = ways
-    const late = aerial && aerial !== label.aerial ? aerial : { boxes: 0, pieces: 0, doubt: 0 }
+    const late = aerial && aerial !== label.aerial ? aerial : NOTHING
     if (this.demands.stereo === true && sound !== 'stereo') return []
     const stand = settle(end, entry.step.taken.stand)
     if (!stand) return []
@@ -118,8 +119,10 @@ export class Finisher {
           boxes: speakers.route.boxes + 1,
           pieces: speakers.route.pieces,
           doubt: speakers.route.doubt + (speakers.way.offers[0]?.doubt ?? 0),
+          bought: speakers.route.bought + priceOf(speakers.way.variant),
         }
-      : { boxes: 0, pieces: 0, doubt: 0 }
+      : NOTHING
+    const bought = label.bought + entry.bought + extra.bought + late.bought
     const axes: Axes = {
       picture: pictureScore(picture.quality, picture.lumaMhz, picture.degradations.length),
       sound: soundScore(sound),
@@ -128,9 +131,13 @@ export class Finisher {
       doubt: label.doubt + entry.doubt + extra.doubt + late.doubt + (end.offers[0]?.doubt ?? 0),
       disturbance: 0,
     }
-    return [{ last: label, end, step: entry.step, stand, speakers, aerial, picture, sound, axes }]
+    return [
+      { last: label, end, step: entry.step, stand, speakers, aerial, picture, sound, axes, bought },
+    ]
   }
 }
+
+const NOTHING = { boxes: 0, pieces: 0, doubt: 0, bought: 0 }
 
 /** A light gun looks for a spot on a tube drawn at the source's own line rate. */
 const fitsGun = (

@@ -1,7 +1,7 @@
 import type { Axes } from '@coaxwain/shelf'
 import type { Finished } from './label'
 
-export type Bound = Omit<Axes, 'disturbance'>
+export type Bound = Omit<Axes, 'disturbance'> & { readonly bought: number }
 
 /** Every axis at least as good: higher for picture and sound, lower for the rest. */
 export const noWorse = (a: Bound, b: Bound): boolean =>
@@ -9,20 +9,24 @@ export const noWorse = (a: Bound, b: Bound): boolean =>
   a.sound >= b.sound &&
   a.boxes <= b.boxes &&
   a.pieces <= b.pieces &&
-  a.doubt <= b.doubt
+  a.doubt <= b.doubt &&
+  a.bought <= b.bought
+
+const boundOf = (f: Finished): Bound => ({ ...f.axes, bought: f.bought })
 
 /** Finished chains of which none beats another; one for each set of axes. */
 export class Front {
   private solutions: Finished[] = []
 
   add(found: Finished): void {
-    if (this.solutions.some((s) => noWorse(s.axes, found.axes))) return
-    this.solutions = this.solutions.filter((s) => !noWorse(found.axes, s.axes))
+    const own = boundOf(found)
+    if (this.solutions.some((s) => noWorse(boundOf(s), own))) return
+    this.solutions = this.solutions.filter((s) => !noWorse(own, boundOf(s)))
     this.solutions.push(found)
   }
 
   matches(bound: Bound): boolean {
-    return this.solutions.some((s) => noWorse(s.axes, bound))
+    return this.solutions.some((s) => noWorse(boundOf(s), bound))
   }
 
   all(): readonly Finished[] {

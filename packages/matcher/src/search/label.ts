@@ -15,6 +15,7 @@ export interface SoundRoute {
   readonly boxes: number
   readonly pieces: number
   readonly doubt: number
+  readonly bought: number
 }
 
 /** Where the sound is that does not ride in the picture signal. */
@@ -27,6 +28,8 @@ export interface Cost {
   readonly boxes: number
   readonly pieces: number
   readonly doubt: number
+  /** Boxes and pieces that are not there and would have to be bought. */
+  readonly bought: number
 }
 
 /** A chain so far: the last unit, what leaves it, where the sound is, and what it cost. */
@@ -68,6 +71,7 @@ export interface Finished {
   readonly picture: SeenPicture
   readonly sound: Sound
   readonly axes: Axes
+  readonly bought: number
 }
 
 export const pathOf = (label: Label): Label[] => {
@@ -77,4 +81,4 @@ export const pathOf = (label: Label): Label[] => {
 }
 
 export const noWorseCost = (a: Cost, b: Cost): boolean =>
-  a.boxes <= b.boxes && a.pieces <= b.pieces && a.doubt <= b.doubt
+  a.boxes <= b.boxes && a.pieces <= b.pieces && a.doubt <= b.doubt && a.bought <= b.bought

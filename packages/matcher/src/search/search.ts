@@ -27,6 +27,8 @@ export interface SearchSpace {
   readonly aerials: Aerials | null
   /** Sorts of units of which a chain may want more than there are; their use is kept in the label. */
   readonly scarceUnits: ReadonlySet<string>
+  /** Chains that need more than so many purchases are not followed. */
+  readonly mostBought: number
 }
 
 /**
@@ -124,7 +126,8 @@ export class Search {
   private add(label: Label): void {
     const left = this.stepsLeft.get(label.way.from!.face.id)
     if (left === undefined || label.depth + left > LIMITS.boxesInLeg) return
-    if (this.isHopeless(label) || this.overdrawn(label)) return
+    if (label.bought > this.space.mostBought || this.isHopeless(label) || this.overdrawn(label))
+      return
     const key = this.keyOf(label)
     const rivals = this.kept.get(key)
     if (!rivals) {
@@ -155,6 +158,7 @@ export class Search {
       boxes: label.boxes,
       pieces: label.pieces,
       doubt: label.doubt,
+      bought: label.bought,
     })
   }
 

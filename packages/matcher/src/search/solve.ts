@@ -4,16 +4,19 @@ import { carriersOf } from '../compile/carriers'
 import { FaceTable } from '../compile/face'
 import { SigTable } from '../compile/sig'
 import { compileVariants, variantOf, type Variant } from '../compile/variant'
-import { WayMaker, type Way } from '../compile/way'
+import { isUsable, WayMaker, type Way } from '../compile/way'
 import { compileDrawer, type Drawer } from '../join/drawer'
 import { JoinTable } from '../join/join'
 import { obstaclesBetween } from '../reasons/obstacles'
 import { Aerials } from './aerial'
 import { assign } from './assign'
-import { Finisher } from './finish'
-import type { Finished } from './label'
+import { Finisher, worksFully } from './finish'
+import { pathOf, type Finished } from './label'
 import { Search } from './search'
 import { bestOf, startLabels } from './start'
+
+/** A purchase of more things than this is no answer. */
+const MOST_BOUGHT = 12
 
 /** How often the search may be run again because units or pieces ran short. */
 const MOST_ROUNDS = 6
@@ -58,6 +61,7 @@ export class Solver {
     snapshot: Snapshot,
     private readonly question: Question,
     private readonly budget: number,
+    private readonly bought: ReadonlySet<Uid> = new Set(),
   ) {
     const unit = (uid: Uid): Unit => {
       const found = snapshot.units.find((u) => u.uid === uid)
@@ -68,14 +72,14 @@ export class Solver {
     const source = variantOf(snapshot, unit(question.source.unit))
     const display = variantOf(snapshot, unit(question.display.unit))
     const maker = new WayMaker(this.faces)
-    const variants = compileVariants(snapshot, leftOut)
+    const variants = compileVariants(snapshot, leftOut, bought)
     const ways = variants.map((v) => ({
-      pictures: maker.waysOf(v).filter(harmless),
-      sounds: maker.soundWaysOf(v).filter(harmless),
+      pictures: maker.waysOf(v).filter(isUsable),
+      sounds: maker.soundWaysOf(v).filter(isUsable),
     }))
     this.starts = maker
       .waysOf(source)
-      .filter((w) => w.fn.key === question.source.playing && harmless(w))
+      .filter((w) => w.fn.key === question.source.playing && isUsable(w))
     this.allEnds = maker
       .waysOf(display)
       .filter(
@@ -84,7 +88,7 @@ export class Solver {
           w.in !== null &&
           (question.display.input ?? w.fn.key) === w.fn.key,
       )
-    this.ends = this.allEnds.filter(harmless)
+    this.ends = this.allEnds.filter(isUsable)
     this.boxes = ways.flatMap((w) =>
       w.pictures.filter(
         (x) => x.into !== null && x.from !== null && x.in !== null && x.out !== null,
@@ -96,7 +100,7 @@ export class Solver {
     const sounds = ways.flatMap((w) => w.sounds)
     this.soundBoxes = sounds.filter((w) => w.soundTo !== null)
     this.speakers = sounds.filter((w) => w.soundTo === null)
-    const drawer = compileDrawer(snapshot, leftOut, question.assumedLeads)
+    const drawer = compileDrawer(snapshot, leftOut, question.assumedLeads, bought)
     const played = bestOf(this.starts, question.material)
     this.frame = {
       source,
@@ -133,6 +137,7 @@ export class Solver {
         finisher: new Finisher(demands, this.speakers, aerials),
         aerials,
         scarceUnits: new Set(this.scarceUnits),
+        mostBought: this.bought.size > 0 ? MOST_BOUGHT : 0,
       },
       this.budget - this.spent,
     )
@@ -186,6 +191,7 @@ export class Solver {
   obstacles(): Obstacle[] {
     const starts = startLabels(this.starts, this.question.material, this.sigs)
     const efforts = (this.solved ?? []).map((s) => s.found.axes)
+    const joined = new Set((this.solved ?? []).flatMap((s) => joinsOf(s.found)))
     const boxes = Math.min(...efforts.map((a) => a.boxes))
     const pieces = Math.min(...efforts.filter((a) => a.boxes === boxes).map((a) => a.pieces))
     return obstaclesBetween(starts, this.allEnds, {
@@ -193,7 +199,9 @@ export class Solver {
       expander: this.search.expander,
       boxes: this.boxes,
       lightGun: this.question.demands.aim === 'light-gun',
+      joined: (out, into) => joined.has(`${out.id} ${into.id}`),
       best: efforts.length > 0 ? { boxes, pieces } : null,
+      whole: (this.solved ?? []).some((s) => worksFully(s.found, this.frame.best)),
     })
   }
 
@@ -206,6 +214,13 @@ export class Solver {
       return 'units' in result ? [{ found, units: result.units }] : []
     })
   }
+}
+
+/** The faces that a chain joins, as pairs. */
+function joinsOf(found: Finished): string[] {
+  const path = pathOf(found.last)
+  const ways = [...path.map((l) => l.way), found.end]
+  return path.map((l, i) => `${l.way.from?.face.id} ${ways[i + 1]?.into?.face.id}`)
 }
 
 /** The channels of a carrier that is always on, beside a loop that passes the aerial. */
@@ -221,8 +236,6 @@ function idleCarriers(variant: Variant): Solving['idle'] {
   const { part, names } = carriersOf(device, always)
   return [{ variant, channels: channelsIn(part).filter((c) => names.includes(c.name)) }]
 }
-
-const harmless = (way: Way): boolean => way.harm === null
 
 const bestShown = (ends: readonly Way[]): Quality =>
   ends.reduce<Quality>((best, way) => {

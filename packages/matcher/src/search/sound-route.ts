@@ -1,5 +1,6 @@
 import { SOUND_RANK, type Sound } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
+import { priceOf } from '../compile/variant'
 import type { Way } from '../compile/way'
 import type { JoinTable } from '../join/join'
 import type { SoundMeeting } from '../join/wanted'
@@ -18,7 +19,8 @@ const better = (a: SoundRoute, b: SoundRoute): boolean =>
   SOUND_RANK[a.sound] >= SOUND_RANK[b.sound] &&
   a.boxes <= b.boxes &&
   a.pieces <= b.pieces &&
-  a.doubt <= b.doubt
+  a.doubt <= b.doubt &&
+  a.bought <= b.bought
 
 /** Keeps what no other route beats. */
 function pareto(routes: readonly SoundRoute[]): SoundRoute[] {
@@ -58,6 +60,7 @@ export class SoundRoutes {
       boxes: 0,
       pieces: join.pieces,
       doubt: join.dcUnknown ? 1 : 0,
+      bought: join.bought,
     }))
   }
 
@@ -74,6 +77,7 @@ export class SoundRoutes {
           boxes: way.variant.powered ? 1 : 0,
           pieces: a.pieces + b.pieces + (way.variant.powered ? 0 : 1),
           doubt: a.doubt + b.doubt + (way.offers[0]?.doubt ?? 0),
+          bought: a.bought + b.bought + priceOf(way.variant),
         }))
       })
     })

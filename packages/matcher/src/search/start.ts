@@ -94,6 +94,7 @@ function label(way: Way, sig: Sig, stand: Label['stand'], material: Material): L
     step: null,
     boxes: 0,
     pieces: 0,
+    bought: 0,
     doubt: way.offers[0]?.doubt ?? 0,
   }
   if (way.soundTo !== null && way.soundTo !== 'picture') {

@@ -38,6 +38,9 @@ export const HOOKUP = {
   'setting.tune.knob': '{control}: turn to channel {position}',
   'setting.tune.turret': '{control} to {position}',
   'setting.tune.search': '{control}: let it search until it finds channel {position}',
+  'setting.power.on': 'switch it on',
+  'setting.power.standby': 'switch it to standby',
+  'setting.power.unplugged': 'pull its [mains] plug',
   'setting.trim.up': 'Turn {control} up until the picture is full',
   'setting.trim.down': 'Turn {control} down until white no longer buzzes',
   'setting.trim.by-eye': '{control} by eye: until the colour holds and the sound is clean',
@@ -201,6 +204,10 @@ export const OBSTACLES = {
     'The {from} draws {fromKhz} thousand lines a second; the {to} follows {toKhz} thousand. No [lead] changes that, and some sets are harmed by it: a scan converter is needed.',
   'obstacle.field-rate':
     'The {from} gives {fromHz} pictures a second; the {to} follows {toHz}. The picture would roll: a standards converter is needed.',
+  'obstacle.socket-dead': '{port} of the {to} is marked as dead.',
+  'obstacle.one-way': 'The {to} is made for the other direction. Turned round it converts nothing.',
+  'obstacle.wrong-circuits':
+    'A [lead] goes into both, but the {from} gives {fromForm} there and the {to} takes {toForm}. A fitting plug promises nothing: look in the book of the set. Wires cannot convert.',
   'obstacle.level-control':
     'What is played is protected against copying, and the input level control of the {to} is thrown off by its pulses: the picture goes dark and bright.',
   'obstacle.no-handshake':
@@ -229,4 +236,14 @@ export const OBSTACLES = {
     'Both have a fitting output and input, but no [lead] at hand joins the {from} to the {to}.',
   'obstacle.no-common-form':
     'The {from} and the {to} have no form of picture in common, and nothing at hand turns one into the other.',
+} as const
+
+/** What a purchase brings and what it does not. */
+export const PURCHASES = {
+  'brings.opens-way': 'It opens a way where there is none.',
+  'brings.better-picture': 'A better picture.',
+  'brings.colour': '[Colour].',
+  'brings.more-sound': 'Sound, or more of it.',
+  'does-not.stays-mono': 'The sound stays in one channel.',
+  'does-not.no-more-detail': 'It brings back no detail that was lost before.',
 } as const

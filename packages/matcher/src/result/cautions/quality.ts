@@ -1,4 +1,4 @@
-import { SCANS, TIER, type ScanId } from '@coaxwain/signal'
+import { SCANS, type ScanId } from '@coaxwain/signal'
 import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
 
 const playsStereo = (c: CautionInput): boolean =>
@@ -17,7 +17,9 @@ const sound: Rule = (c) => {
   const { sound: heard } = c.hookup.sound
   if (heard === 'half') return [caution('sound-half')]
   if (heard === 'none') return c.input.frame.best.sound ? [caution('silent')] : []
-  if (heard === 'stereo' || !playsStereo(c)) return []
+  // A set with one loudspeaker that takes both channels loses nothing that it could have played.
+  const arrives = c.input.solved.found.step.soundIn
+  if (heard === 'stereo' || arrives === 'stereo' || !playsStereo(c)) return []
   return [caution('sound-folded'), ...(mixed(c) ? [caution('both-plugs')] : [])]
 }
 
@@ -33,15 +35,15 @@ const picture: Rule = (c) => {
   ]
 }
 
-const isHighDefinition = (scan: ScanId): boolean => SCANS[scan].lineKhz > 31
+/** 720 lines and more; 480 lines drawn twice as fast are no high definition. */
+const isHighDefinition = (scan: ScanId): boolean => SCANS[scan].lineKhz > 33
 
-const lessDetail: Rule = (c) => {
-  const first = source(c).sig
-  const shown = display(c).sig
-  return isHighDefinition(first.scan) && SCANS[shown.scan].lineKhz < 20 && TIER[first.poorest] >= 5
-    ? [caution('less-detail')]
-    : []
-}
+/** Whether the output that is used can give high definition, however it is set now. */
+const playsHighDefinition = (c: CautionInput): boolean =>
+  (source(c).way.out?.picture ?? []).some((r) => r.scan !== 'same' && isHighDefinition(r.scan))
+
+const lessDetail: Rule = (c) =>
+  playsHighDefinition(c) && SCANS[display(c).sig.scan].lineKhz < 20 ? [caution('less-detail')] : []
 
 /** What comes by a digital socket is wide; an old tube is not. */
 const wide: Rule = (c) =>
@@ -78,7 +80,7 @@ const delay: Rule = (c) => {
 
 /** A converter that makes interlaced pictures makes no true 240-line ones. */
 const interlacedOnly: Rule = (c) =>
-  isGame(c) && isHighDefinition(source(c).sig.scan) && SCANS[display(c).sig.scan].interlaced
+  isGame(c) && playsHighDefinition(c) && SCANS[display(c).sig.scan].interlaced
     ? [caution('interlaced-only')]
     : []
 

@@ -1,0 +1,201 @@
+import type { DemoUnit } from '../../demo-data'
+import { INES, MAREN, TOBIN } from '../people'
+import { dead, intermittent, on, works } from '../unit-maker'
+import { unit } from './maker'
+
+export const SOURCES: readonly DemoUnit[] = [
+  unit(142, 'tarnbeck-dp-62', {
+    place: 'front-shelf-2',
+    addedOn: '2026-03-30',
+    working: 'works',
+    serial: '300417',
+    note: 'Saltmere swap meet, one lot of three.',
+    stands: { 'tv-shape': 'letterbox', progressive: 'off', 'digital-sound': 'two-channels' },
+    remotePresent: true,
+    tests: [
+      works(on('2026-05-02', INES, 'disc played through, colour'), 'video-out'),
+      works(on('2026-05-02', INES, 'on the Jorvane M-21'), 'component'),
+      works(on('2026-05-02', INES, 'both sides'), 'sound-out'),
+      intermittent(on('2026-04-12', INES, 'drops when the plug is moved'), 'optical'),
+      works(on('2026-05-02', INES, 'one disc end to end'), 'does:disc'),
+    ],
+  }),
+  unit(116, 'tarnbeck-dp-62', {
+    place: 'loft-5',
+    addedOn: '2026-03-30',
+    holding: 'spare',
+    stands: { 'tv-shape': 'wide' },
+    note: 'Same lot as 142; no remote.',
+  }),
+  unit(117, 'selvane-dp-7', {
+    place: 'bedroom',
+    addedOn: '2026-01-15',
+    working: 'works',
+    stands: { 'tv-shape': 'pan-scan' },
+    remotePresent: true,
+    tests: [works(on('2026-01-15', TOBIN, 'disc played, colour and both sides'), '*')],
+  }),
+  unit(118, 'selvane-dp-7', {
+    place: 'loft-5',
+    addedOn: '2026-05-23',
+    working: 'parts-only',
+    note: 'Laser gone; power board good.',
+    tests: [dead(on('2026-05-24', INES, 'does not read any disc'), 'does:disc')],
+  }),
+  unit(119, 'tarnbeck-ld-8', {
+    place: 'front-shelf-3',
+    addedOn: '2026-01-11',
+    working: 'works',
+    tests: [
+      works(
+        on('2026-01-18', INES, 'both sides of one disc'),
+        'video-out',
+        's-video-out',
+        'sound-out/sound-out-l',
+        'does:disc',
+      ),
+      intermittent(on('2026-01-18', INES, 'crackles when touched'), 'sound-out/sound-out-r'),
+      works(on('2026-01-18', INES, 'channel 3 on the 13-R'), 'rf-out'),
+    ],
+  }),
+  unit(120, 'brindlow-cx-1', {
+    place: 'loft-5',
+    addedOn: '2026-04-25',
+    note: 'Needle not looked at yet.',
+  }),
+  unit(121, 'quillmark-vr-90', {
+    place: 'bench',
+    addedOn: '2026-01-09',
+    working: 'works',
+    stands: { input: 'tuner', 'tv-vcr': 'tv', 'tuner-plan': 'air' },
+    remotePresent: true,
+    tests: [
+      works(
+        on('2026-04-19', INES, 'line input to the CT-20'),
+        'video-in',
+        'sound-in/sound-in-l',
+        'video-out',
+        'sound-out/sound-out-l',
+        'does:line',
+      ),
+      dead(on('2026-04-19', INES, 'no right channel from the line input'), 'sound-in/sound-in-r'),
+      works(on('2026-04-19', INES, 'aerial through to the 13-R'), 'rf-in', 'does:aerial-loop'),
+      works(on('2026-04-20', INES, 'one tape end to end'), 'does:tape'),
+    ],
+  }),
+  unit(122, 'quillmark-vr-70', {
+    place: 'garage-b',
+    addedOn: '2026-01-09',
+    working: 'works',
+    stands: { input: 'line', 'tv-vcr': 'vcr' },
+    tests: [
+      works(on('2026-02-08', TOBIN, 'tape and line on channel 4'), '*'),
+      intermittent(on('2026-02-08', TOBIN, 'presets drift'), 'does:tuner'),
+    ],
+  }),
+  unit(123, 'quillmark-vr-70', {
+    place: 'garage-b',
+    addedOn: '2026-05-16',
+    working: 'parts-only',
+    note: 'Kept for its loading gears.',
+  }),
+  unit(124, 'lindrake-vx-5', {
+    place: 'loft-3',
+    addedOn: '2026-05-30',
+    working: 'untested',
+    note: 'Came with a 230 V lead: needs a step-up transformer that is rated for it.',
+  }),
+  unit(125, 'varnhope-gx', {
+    place: 'loft-1',
+    addedOn: '2026-02-15',
+    working: 'works',
+    holding: 'listed',
+    tests: [works(on('2026-02-16', TOBIN, 'two cartridges on channel 3'), '*')],
+  }),
+  unit(126, 'varnhope-gx', {
+    place: null,
+    addedOn: '2026-02-15',
+    working: 'works',
+    holding: 'sold',
+    tests: [works(on('2026-02-16', TOBIN, 'one cartridge'), 'rf-lead', 'does:cartridge')],
+  }),
+  unit(127, 'oakhithe-gs-16-m', {
+    place: 'front-shelf-1',
+    addedOn: '2026-01-20',
+    working: 'works',
+    tests: [
+      works(on('2026-01-20', TOBIN, 'on the CT-20'), 'video-out', 'sound-out', 'does:cartridge'),
+    ],
+  }),
+  unit(128, 'mistrand-mc-8', { place: 'under-desk', addedOn: '2026-02-22' }),
+  unit(129, 'mistrand-md-1', {
+    place: 'garage-a',
+    addedOn: '2026-03-21',
+    working: 'works',
+    tests: [
+      works(on('2026-03-22', INES, 'starts, colour on the MT-12'), 'rgbi-out', 'does:program'),
+    ],
+  }),
+  unit(130, 'mistrand-md-4', {
+    place: 'under-desk',
+    addedOn: '2026-03-21',
+    working: 'works',
+    stands: { 'screen-mode': 'graphics' },
+    tests: [works(on('2026-03-28', INES, 'on a borrowed monitor'), 'monitor-out', 'does:program')],
+  }),
+  unit(131, 'brindlow-hc-8', {
+    place: 'desk-2',
+    addedOn: '2026-01-13',
+    working: 'works',
+    stands: { way: 'tape' },
+    tests: [
+      works(on('2026-01-14', MAREN, 'family tapes'), 'video-out', 'sound-out', 'does:tape'),
+      dead(on('2026-01-14', MAREN, 'black picture from the lens'), 'does:camera'),
+    ],
+  }),
+  unit(132, 'lindrake-q1', {
+    place: 'bedroom',
+    addedOn: '2026-02-02',
+    working: 'works',
+    stands: { resolution: '1125p60' },
+    remotePresent: true,
+    tests: [works(on('2026-02-02', MAREN, 'on the FP-32'), 'hdmi-out', 'does:film')],
+  }),
+  unit(133, 'selvane-cb-3', {
+    place: 'front-shelf-1',
+    addedOn: '2026-01-07',
+    working: 'works',
+    stands: { 'tv-shape': 'letterbox' },
+    remotePresent: true,
+    tests: [works(on('2026-03-08', TOBIN, 'channel 3 on the PV-9, seven stations'), '*')],
+  }),
+  unit(134, 'selvane-cb-3', {
+    place: 'loft-3',
+    addedOn: '2026-05-09',
+    holding: 'spare',
+    note: 'No pack, no remote.',
+  }),
+  unit(135, 'jorvane-tc-5', {
+    place: 'garage-b',
+    addedOn: '2026-04-04',
+    working: 'works',
+    holding: 'held',
+    stands: { 'av-form': 'rgb' },
+    remotePresent: true,
+    tests: [
+      works(on('2026-04-11', INES, 'menu only, no station here'), 'tv-rgb-out', 'tv-composite-out'),
+      works(
+        on('2026-04-11', INES, 'aerial straight through'),
+        'aerial-in',
+        'aerial-out',
+        'does:aerial-loop',
+      ),
+    ],
+  }),
+  unit(136, 'pellmere-td-1', {
+    place: 'garage-b',
+    addedOn: '2026-05-17',
+    stands: { 'tuner-plan': 'cable' },
+    note: 'Clock lights; nothing else tried.',
+  }),
+]

@@ -1,0 +1,309 @@
+import type {
+  AcceptRow,
+  Condition,
+  Control,
+  DeviceModel,
+  Give,
+  Jack,
+  ModelFunction,
+  PictureGive,
+  PieceModel,
+  Port,
+} from '@coaxwain/models'
+import { channelsIn, isSingle, type Circuit, type PlanPart, type ScanId } from '@coaxwain/signal'
+import type {
+  CaseControl,
+  CaseDoes,
+  CaseMode,
+  CasePiece,
+  CasePort,
+  CaseRf,
+  CaseTuner,
+  CaseUnit,
+  When,
+} from './form'
+
+/** A thing that is bought, in the shelf form of a case. */
+export function pieceInCaseForm(id: string, model: PieceModel): CasePiece {
+  const [a] = model.a
+  const [b] = model.b
+  const base = {
+    id,
+    kind: model.kind === 'adapter' ? ('adapter' as const) : ('lead' as const),
+    what: model.name,
+    ends: [a!.connector, b!.connector] as [string, string],
+  }
+  if (model.mixes) {
+    return { ...base, cores: model.a.length, joins: ['audio-l', 'audio-r'], gives: 'audio-mono' }
+  }
+  const cores = Math.max(model.a.length, model.b.length)
+  const multi = !isSingle(a!.connector) && !isSingle(b!.connector)
+  if (multi) return { ...base, cores: 1 }
+  return { ...base, cores, ...(model.meantFor ? { carries: [...model.meantFor] } : {}) }
+}
+
+export function unitInCaseForm(id: string, model: DeviceModel): CaseUnit {
+  return {
+    id,
+    kind: 'unit',
+    what: model.name,
+    ...(model.mains || model.pack ? { powered: true } : {}),
+    ...(model.functions.some((f) => f.hdcp) ? { hdcp: true } : {}),
+    ports: model.ports.map((p) => portInCaseForm(model, p)).filter((p) => p.signals.length > 0),
+    does: model.functions.flatMap((fn) => doesOf(model, fn)),
+    settings: model.controls.flatMap(controlInCaseForm),
+    leaks: model.leaks.map((l) => ({ ...l })),
+  }
+}
+
+const when = (...conditions: (Condition | undefined)[]): When | undefined => {
+  const all = conditions.flatMap((c) => c ?? []).filter((c) => c.control !== 'power')
+  return all.length > 0 ? Object.fromEntries(all.map((c) => [c.control, [...c.in]])) : undefined
+}
+
+const withWhen = <T extends object>(value: T, ...conditions: (Condition | undefined)[]): T => {
+  const found = when(...conditions)
+  return found ? { ...value, when: found } : value
+}
+
+const jacksAt = (model: DeviceModel, port: string): Jack[] =>
+  model.jacks.filter((j) => j.contacts.some((c) => c.port === port))
+
+const SPLIT: Partial<Record<Circuit, string>> = {
+  y: 'ypbpr-y',
+  pb: 'ypbpr-pb',
+  pr: 'ypbpr-pr',
+  'audio-l': 'audio-l',
+  'audio-r': 'audio-r',
+  'audio-mono': 'audio-mono',
+  spdif: 'digital-audio',
+}
+
+const WHOLE: Partial<Record<Jack['form'], string>> = {
+  composite: 'composite',
+  's-video': 's-video',
+  rgbs: 'rgb-cs',
+  rgsb: 'rgb-sog',
+  rgbhv: 'rgb-hv',
+  rgbi: 'rgbi',
+  hdmi: 'hdmi',
+  dvi: 'dvi',
+  rf: 'rf',
+}
+
+function signalsAt(model: DeviceModel, port: string): string[] {
+  const signals = jacksAt(model, port).flatMap((jack) => {
+    const whole = WHOLE[jack.form]
+    if (whole) return [whole]
+    return jack.contacts.filter((c) => c.port === port).flatMap((c) => SPLIT[c.circuit] ?? [])
+  })
+  return [...new Set(signals)]
+}
+
+function portInCaseForm(model: DeviceModel, port: Port): CasePort {
+  const jacks = jacksAt(model, port.key)
+  const dirs = new Set(jacks.map((j) => j.dir))
+  const pictures = jacks.filter((j) => !['sound', 'digital-sound'].includes(j.form))
+  const modes = pictures.flatMap((j) => (j.form === 'rf' ? [] : modesOf(model, j)))
+  const rf = pictures.find((j) => j.form === 'rf')
+  const made: CasePort = {
+    id: port.key,
+    label: port.label,
+    dir: dirs.size > 1 ? 'both' : dirs.has('in') ? 'in' : 'out',
+    connector: port.connector,
+    mount: port.mount,
+    signals: signalsAt(model, port.key),
+    works: true,
+    ...(modes.length > 0 ? { modes } : {}),
+    ...(port.impedanceOhm === undefined ? {} : { ohm: port.impedanceOhm }),
+  }
+  if (!rf) return made
+  return rf.dir === 'out'
+    ? { ...made, ...optional('rf', rfOf(model, rf)) }
+    : { ...made, ...optional('tuner', tunerOf(model, rf)) }
+}
+
+const optional = <K extends string, V>(key: K, value: V | undefined): Partial<Record<K, V>> =>
+  value === undefined ? {} : ({ [key]: value } as Record<K, V>)
+
+const takers = (model: DeviceModel, jack: Jack): ModelFunction[] =>
+  model.functions.filter((f) => [...f.needs, ...(f.oneOf ?? [])].includes(jack.key))
+
+const givers = (model: DeviceModel, jack: Jack): { fn: ModelFunction; give: Give }[] =>
+  model.functions.flatMap((fn) =>
+    fn.gives.filter((g) => g.jack === jack.key).map((give) => ({ fn, give })),
+  )
+
+function modesOf(model: DeviceModel, jack: Jack): CaseMode[] {
+  if (jack.dir === 'in')
+    return takers(model, jack).flatMap((fn) => fn.accepts.flatMap((r) => rowModes(fn, r)))
+  return givers(model, jack).flatMap(({ fn, give }) =>
+    (give.picture ?? []).flatMap((row) => giveModes(fn, give, row)),
+  )
+}
+
+function rowModes(fn: ModelFunction, row: AcceptRow): CaseMode[] {
+  if (row.scans === 'any' || row.colours === 'any') return []
+  const colours = row.colours.filter((c) => c !== 'mono' && c !== 'ntsc-j')
+  return row.scans.flatMap((scan) =>
+    colours.map((colour) => withWhen({ scan, colour }, fn.while, row.while)),
+  )
+}
+
+/** A row that keeps the lines is a mode for each scan that the function takes. */
+function giveModes(fn: ModelFunction, give: Give, row: PictureGive): CaseMode[] {
+  if (row.scan === 'same' && row.colour === 'same') return []
+  const taken = fn.accepts.flatMap((r) => (r.scans === 'any' ? [] : r.scans))
+  const scans: readonly ScanId[] = row.scan === 'same' ? [...new Set(taken)] : [row.scan]
+  const colour = row.colour
+  return scans.map((scan) => withWhen({ scan, colour }, fn.while, give.while, row.while))
+}
+
+const PLANS: readonly (readonly [
+  plan: PlanPart['plan'],
+  names: string | undefined,
+  code: string,
+])[] = [
+  ['us-broadcast', undefined, 'us-air'],
+  ['us-cable-std', undefined, 'us-cable'],
+  ['uk-uhf', undefined, 'uk-uhf'],
+  ['ccir-west-europe', '21..69', 'ccir-uhf'],
+  ['australia', '0,1', 'au-vhf'],
+  ['australia', undefined, 'au'],
+  ['japan-broadcast', undefined, 'jp'],
+]
+
+function planCodes(part: PlanPart): string[] {
+  if (part.plan === 'ccir-west-europe' && part.names === undefined) return ['ccir-vhf', 'ccir-uhf']
+  const found =
+    PLANS.find(([plan, names]) => plan === part.plan && names === part.names) ??
+    PLANS.find(([plan, names]) => plan === part.plan && names === undefined)
+  return found ? [found[2]] : []
+}
+
+function rfOf(model: DeviceModel, jack: Jack): CaseRf | undefined {
+  const rows = givers(model, jack).flatMap(({ fn, give }) =>
+    (give.rf ?? []).map((rf) => ({ rf, when: when(fn.while, give.while, rf.while) })),
+  )
+  const [first] = rows
+  if (!first) return undefined
+  const { channel } = first.rf
+  const control =
+    'control' in channel ? model.controls.find((c) => c.key === channel.control) : undefined
+  const part =
+    'part' in channel
+      ? channel.part
+      : control?.kind === 'channel'
+        ? control.carriers.part
+        : undefined
+  if (!part) return undefined
+  const made: CaseRf = {
+    plan: planCodes(part)[0] ?? 'us-air',
+    channels: channelsIn(part).map((c) => c.name),
+    system: first.rf.system,
+    colour: first.rf.colours.filter((c) => c !== 'mono' && c !== 'ntsc-j'),
+    sideband: first.rf.sideband === 'double' ? 'dsb' : 'vsb',
+    levelDbmv: first.rf.levelDbmv,
+    sound: first.rf.sound,
+    ...(control ? { control: control.key } : {}),
+  }
+  if (rows.length === 1) return made
+  return {
+    ...made,
+    variants: rows.map(({ rf, when: condition }) => ({ when: condition ?? {}, system: rf.system })),
+  }
+}
+
+function tunerOf(model: DeviceModel, jack: Jack): CaseTuner | undefined {
+  const fn = takers(model, jack).find((f) => f.tunedBy !== undefined)
+  const control = model.controls.find((c) => c.key === fn?.tunedBy)
+  if (!fn || control?.kind !== 'tuned-to') return undefined
+  const plans = control.reaches.flatMap((r) => planCodes(r.part))
+  const list = <T>(of: (row: AcceptRow) => readonly T[] | 'any'): T[] => [
+    ...new Set(
+      fn.accepts.flatMap((r) => {
+        const got = of(r)
+        return got === 'any' ? [] : got
+      }),
+    ),
+  ]
+  return {
+    plans,
+    systems: list((r) => r.systems ?? []),
+    colours: list<string>((r) => r.colours).filter((c) => c !== 'mono' && c !== 'ntsc-j'),
+    scans: list<string>((r) => r.scans),
+    digital: list<string>((r) => r.digital ?? []).map((d) => (d === 'atsc' ? '8vsb' : d)),
+    control: control.key,
+    variants: fn.accepts.flatMap((r) => {
+      const condition = when(r.while)
+      return condition ? [{ when: condition, systems: [...(r.systems ?? [])] }] : []
+    }),
+  }
+}
+
+function doesOf(model: DeviceModel, fn: ModelFunction): CaseDoes[] {
+  const ports = (key: string): string[] =>
+    model.jacks.filter((j) => j.key === key).flatMap((j) => j.contacts.map((c) => c.port))
+  const isSound = (key: string): boolean =>
+    model.jacks.some((j) => j.key === key && j.form === 'sound')
+  const edge = (from: string, to: string, give: Give, extra?: Condition): CaseDoes =>
+    withWhen(
+      { from, to, ...(fn.kind === 'tunes' && give.rf ? { how: 'tuned' as const } : {}) },
+      fn.while,
+      give.while,
+      extra,
+    )
+  const pictures = [...fn.needs, ...(fn.oneOf ?? [])]
+  const embedded = pictures.some((k) =>
+    model.jacks.some((j) => j.key === k && (j.form === 'rf' || j.form === 'hdmi')),
+  )
+  const fromPicture = fn.gives
+    .filter((g) => !isSound(g.jack) || embedded)
+    .flatMap((g) => pictures.flatMap(ports).flatMap((a) => ports(g.jack).map((b) => edge(a, b, g))))
+  const fromSound = fn.gives
+    .filter((g) => isSound(g.jack) || g.rf !== undefined || g.sound !== undefined)
+    .flatMap((g) =>
+      (fn.optional ?? []).flatMap((o) =>
+        ports(o.jack).flatMap((a) => ports(g.jack).map((b) => edge(a, b, g, o.while))),
+      ),
+    )
+  const seen = new Set<string>()
+  return [...fromPicture, ...fromSound].filter((d) => {
+    const key = JSON.stringify(d)
+    return !seen.has(key) && seen.add(key)
+  })
+}
+
+const CLASSES: Readonly<Record<string, string>> = { 'tuner-plan': 'antenna-plan', shape: 'mode' }
+
+function controlInCaseForm(control: Control): CaseControl[] {
+  switch (control.kind) {
+    case 'positions':
+      return [
+        {
+          name: control.key,
+          class: CLASSES[control.role] ?? control.role,
+          choices: control.positions.map((p) => p.key),
+        },
+      ]
+    case 'channel':
+      return [
+        {
+          name: control.key,
+          class: 'channel',
+          choices: channelsIn(control.carriers.part).map((c) => c.name),
+        },
+      ]
+    case 'tuned-to':
+      return [
+        {
+          name: control.key,
+          class: 'tuned-to',
+          way: 'presets',
+          range: { plans: control.reaches.flatMap((r) => planCodes(r.part)) },
+        },
+      ]
+    default:
+      return []
+  }
+}
