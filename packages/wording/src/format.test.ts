@@ -21,6 +21,15 @@ describe('filling a message', () => {
     expect(format('[Aerial] and [leads]', {}, 'en-GB')).toBe('Aerial and leads')
   })
 
+  it('names what a code stands for', () => {
+    const text = sentence(
+      'obstacle.colour',
+      { from: 'A', to: 'B', colour: 'secam', listed: 'pal, ntsc-443' },
+      'en-US',
+    )
+    expect(text).toContain('gives SECAM color; the B decodes PAL, NTSC 4.43.')
+  })
+
   it('writes a true minus sign', () => {
     expect(format('{level} dBmV', { level: -7.5 }, 'en-GB')).toBe('\u22127.5 dBmV')
   })

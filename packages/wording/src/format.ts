@@ -4,16 +4,26 @@ import { localWord } from './words'
 export type Details = Readonly<Record<string, string | number>>
 
 /**
- * Fills a message. `{name}` is a detail; `{n|# socket|# sockets}` chooses by number, `#` being the number;
- * `[aerial]` is a word of the language. Nothing is ever evaluated, and details are never looked into again.
+ * Fills a message. `{name}` is a detail; `{colour:name}` is one that holds a code, or a list of codes, of the
+ * family `colour`; `{n|# socket|# sockets}` chooses by number, `#` being the number; `[aerial]` is a word of
+ * the language. Nothing is ever evaluated, and details are never looked into again.
  */
-export function format(template: string, details: Details, locale: Locale): string {
+export function format(
+  template: string,
+  details: Details,
+  locale: Locale,
+  term: (code: string) => string = (code) => code,
+): string {
   const worded = template.replace(/\[([A-Za-z]+)\]/g, (_, word: string) => localWord(word, locale))
   return worded.replace(
-    /\{(\w+)(?:\|([^|{}]*)\|([^|{}]*))?\}/g,
-    (whole, name: string, one, many) => {
+    /\{(?:([a-z]+):)?(\w+)(?:\|([^|{}]*)\|([^|{}]*))?\}/g,
+    (whole, family: string | undefined, name: string, one, many) => {
       const value = details[name]
       if (value === undefined) return whole
+      if (family !== undefined) {
+        const codes = String(value).split(', ')
+        return codes.map((code) => term(`${family}.${code}`)).join(', ')
+      }
       if (one === undefined) return shown(value, locale)
       const form = String(value === 1 ? one : many)
       return form.replaceAll('#', shown(value, locale))

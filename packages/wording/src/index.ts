@@ -33,5 +33,5 @@ export const hasSentence = (code: string): code is MessageCode => Object.hasOwn(
 /** The sentence for a code; a code without one gets the general sentence, never a bare code. */
 export const sentence = (code: string, details: Details, locale: Locale): string =>
   hasSentence(code)
-    ? format(MESSAGES[code], details, locale)
+    ? format(MESSAGES[code], details, locale, (term) => sentence(term, {}, locale))
     : format(MESSAGES['general.unknown'], { code }, locale)

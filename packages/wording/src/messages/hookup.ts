@@ -207,7 +207,7 @@ export const OBSTACLES = {
   'obstacle.socket-dead': '{port} of the {to} is marked as dead.',
   'obstacle.one-way': 'The {to} is made for the other direction. Turned round it converts nothing.',
   'obstacle.wrong-circuits':
-    'A [lead] goes into both, but the {from} gives {fromForm} there and the {to} takes {toForm}. A fitting plug promises nothing: look in the book of the set. Wires cannot convert.',
+    'A [lead] goes into both, but the {from} gives {form:fromForm} there and the {to} takes {form:toForm}. A fitting plug promises nothing: look in the book of the set. Wires cannot convert.',
   'obstacle.level-control':
     'What is played is protected against copying, and the input level control of the {to} is thrown off by its pulses: the picture goes dark and bright.',
   'obstacle.no-handshake':
@@ -216,9 +216,9 @@ export const OBSTACLES = {
     'A light gun looks for a bright spot on a picture tube drawn at the speed of the {from}; the {to} stores or redraws the picture. No [lead] changes that.',
   'obstacle.switching-voltage':
     'The {to} takes RGB only when a voltage on the plug tells it to, and nothing from the {from} gives it.',
-  'obstacle.scan': 'The {from} gives {scan}; the {to} does not take it.',
+  'obstacle.scan': 'The {from} gives {scan:scan}; the {to} does not take it.',
   'obstacle.colour':
-    'The {from} gives {colour} [colour]; the {to} decodes {listed}. The picture would be [grey].',
+    'The {from} gives {colour:colour} [colour]; the {to} decodes {colour:listed}. The picture would be [grey].',
   'obstacle.sound-spacing':
     'The {from} sends its sound {fromMhz} MHz from the picture; the {to} listens at {toMhz} MHz. There would be a picture and no sound.',
   'obstacle.luma-only':
