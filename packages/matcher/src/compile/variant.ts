@@ -1,4 +1,4 @@
-import type { DeviceModel, Key } from '@coaxwain/models'
+import type { Condition, Control, DeviceModel, Key } from '@coaxwain/models'
 import { doubtOf, fitted, formState, functionState, mayLend } from '@coaxwain/shelf'
 import type { Snapshot, Uid, Unit } from '@coaxwain/shelf'
 
@@ -16,18 +16,44 @@ export interface Variant {
   readonly bought: boolean
 }
 
-/** Controls that a missing remote leaves standing where they are. */
-function stuckControls(device: DeviceModel, unit: Unit): Readonly<Record<Key, string>> {
-  if (unit.remotePresent || device.remote !== 'needed') return {}
-  const stuck = device.controls.filter((c) => c.access === 'remote' || c.access === 'menu')
-  return Object.fromEntries(stuck.map((c) => [c.key, unit.stands[c.key] ?? '']))
-}
+/** Only the remote reaches this control, and the unit has none. */
+export const outOfReach = (device: DeviceModel, control: Control, unit: Unit): boolean =>
+  !unit.remotePresent &&
+  device.remote === 'needed' &&
+  (control.access === 'remote' || control.access === 'menu')
 
-/** A control out of reach keeps the one position in which it stands; none when that is not known. */
+/** Where controls out of reach were left; an empty position when nobody has noted it. */
+const stuckControls = (device: DeviceModel, unit: Unit): Readonly<Record<Key, string>> =>
+  Object.fromEntries(
+    device.controls
+      .filter((c) => outOfReach(device, c, unit))
+      .map((c) => [c.key, unit.stands[c.key] ?? '']),
+  )
+
+/**
+ * A control out of reach keeps the one position in which it stands, none when that is not known; and what a
+ * function does in other positions it does not do.
+ */
 function withStuck(device: DeviceModel, stuck: Readonly<Record<Key, string>>): DeviceModel {
   if (Object.keys(stuck).length === 0) return device
+  const canBe = (row: { readonly while?: Condition | undefined }): boolean =>
+    (row.while ?? []).every(({ control, in: wanted }) => {
+      const at = stuck[control]
+      return at === undefined || wanted.includes(at)
+    })
   return {
     ...device,
+    functions: device.functions
+      .filter((fn) => canBe(fn) && (fn.accepts.length === 0 || fn.accepts.some(canBe)))
+      .map((fn) => ({
+        ...fn,
+        accepts: fn.accepts.filter(canBe),
+        gives: fn.gives.filter(canBe).map((give) => ({
+          ...give,
+          ...(give.picture ? { picture: give.picture.filter(canBe) } : {}),
+          ...(give.rf ? { rf: give.rf.filter(canBe) } : {}),
+        })),
+      })),
     controls: device.controls.map((c) =>
       c.key in stuck && (c.kind === 'positions' || c.kind === 'auto')
         ? { ...c, positions: c.positions.filter((p) => p.key === stuck[c.key]) }

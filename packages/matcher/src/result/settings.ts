@@ -7,7 +7,7 @@ import {
   type Key,
 } from '@coaxwain/models'
 import type { Setting, SettingReason, Unit } from '@coaxwain/shelf'
-import type { Variant } from '../compile/variant'
+import { outOfReach, type Variant } from '../compile/variant'
 import type { Way } from '../compile/way'
 import { tunedAs, type ChosenChannel } from './channels'
 
@@ -81,7 +81,8 @@ function switches(placing: Placing, wanted: ReadonlyMap<Key, readonly string[]>)
     if (control?.kind !== 'positions' && control?.kind !== 'auto') return []
     const all = control.positions.map((p) => p.key)
     const fine = all.filter((p) => positions.includes(p))
-    if (fine.length === all.length) return []
+    const stuck = outOfReach(placing.variant.device, control, placing.unit)
+    if (fine.length === all.length && !stuck) return []
     const stands = placing.unit.stands[key]
     const first = stands !== undefined && fine.includes(stands) ? stands : fine[0]
     if (first === undefined) return []

@@ -14,11 +14,11 @@ import {
  * Named degradations take off 30 each, which keeps them inside their tier (an ordering, common practice, no source).
  */
 export const pictureScore = (quality: Quality, lumaMhz: number, degradations: number): number =>
-  TIER[quality] * 100 + Math.round(lumaMhz * 10) - 30 * degradations
+  bestScore(TIER[quality], lumaMhz) - 30 * degradations
 
-/** The best score that a signal can still have: nothing lost is regained. */
-export const bestScore = (quality: Quality, lumaMhz: number): number =>
-  pictureScore(quality, lumaMhz, 0)
+/** The score of a picture without degradations, by its tier. */
+export const bestScore = (tier: number, lumaMhz: number): number =>
+  tier * 100 + Math.round(lumaMhz * 10)
 
 export const qualityAt = (poorest: Quality, form: PictureForm): Quality => poorer(poorest, form)
 

@@ -1,12 +1,12 @@
 import { LIMITS } from '@coaxwain/shelf'
-import { SOUND_RANK, type Sound } from '@coaxwain/signal'
+import { SOUND_RANK, TIER, type Sound } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
 import type { SigTable } from '../compile/sig'
 import type { Way } from '../compile/way'
 import type { JoinTable } from '../join/join'
 import type { Aerials } from './aerial'
 import { assign } from './assign'
-import { reachEnd } from './bounds'
+import { outlooks, type Outlook } from './bounds'
 import { Expander } from './expand'
 import type { Finisher } from './finish'
 import { Front } from './front'
@@ -45,7 +45,7 @@ export class Search {
   private readonly front = new Front()
   readonly expander: Expander
   private readonly byFace: ReadonlyMap<Face, readonly Way[]>
-  private readonly stepsLeft: ReadonlyMap<number, number>
+  private readonly outlooks: ReadonlyMap<number, Outlook>
   work = 0
   cut = false
 
@@ -57,7 +57,7 @@ export class Search {
     this.expander = new Expander(space.joins, sounds, space.sigs, space.scarceUnits, space.aerials)
     space.finisher.use(sounds, this.expander)
     this.byFace = groupByFace(space.boxes)
-    this.stepsLeft = reachEnd(space, this.byFace)
+    this.outlooks = outlooks(space)
     this.layer = []
     for (const start of space.starts) {
       for (const label of this.expander.withAerial(null, start)) this.add(label)
@@ -124,9 +124,13 @@ export class Search {
   }
 
   private add(label: Label): void {
-    const left = this.stepsLeft.get(label.way.from!.face.id)
-    if (left === undefined || label.depth + left > LIMITS.boxesInLeg) return
-    if (label.bought > this.space.mostBought || this.isHopeless(label) || this.overdrawn(label))
+    const outlook = this.outlooks.get(label.way.from!.face.id)
+    if (!outlook || label.depth + outlook.units > LIMITS.boxesInLeg) return
+    if (
+      label.bought + outlook.bought > this.space.mostBought ||
+      this.isHopeless(label) ||
+      this.overdrawn(label)
+    )
       return
     const key = this.keyOf(label)
     const rivals = this.kept.get(key)
@@ -152,14 +156,15 @@ export class Search {
   /** A finished chain is already as good as the best that this one could become. */
   private isHopeless(label: Label): boolean {
     const { sig } = label
-    return this.front.matches({
-      picture: bestScore(sig.poorest, sig.lumaMhz),
-      sound: SOUND_RANK[soundStillThere(label)],
-      boxes: label.boxes,
-      pieces: label.pieces,
-      doubt: label.doubt,
-      bought: label.bought,
-    })
+    const ahead = this.outlooks.get(label.way.from!.face.id)!
+    return this.front.matches(
+      bestScore(Math.min(TIER[sig.poorest], ahead.tier), Math.min(sig.lumaMhz, ahead.lumaMhz)),
+      Math.min(SOUND_RANK[soundStillThere(label)], ahead.sound),
+      label.boxes + ahead.boxes,
+      label.pieces + ahead.pieces,
+      label.doubt + ahead.doubt,
+      label.bought + ahead.bought,
+    )
   }
 
   private keyOf(label: Label): string {

@@ -3,10 +3,11 @@ import { channelsIn, TIER, type Channel, type Quality } from '@coaxwain/signal'
 import { carriersOf } from '../compile/carriers'
 import { FaceTable } from '../compile/face'
 import { SigTable } from '../compile/sig'
-import { compileVariants, variantOf, type Variant } from '../compile/variant'
+import { compileVariants, outOfReach, variantOf, type Variant } from '../compile/variant'
 import { isUsable, WayMaker, type Way } from '../compile/way'
 import { compileDrawer, type Drawer } from '../join/drawer'
 import { JoinTable } from '../join/join'
+import { obstacle } from '../reasons/breaks'
 import { obstaclesBetween } from '../reasons/obstacles'
 import { Aerials } from './aerial'
 import { assign } from './assign'
@@ -194,7 +195,7 @@ export class Solver {
     const joined = new Set((this.solved ?? []).flatMap((s) => joinsOf(s.found)))
     const boxes = Math.min(...efforts.map((a) => a.boxes))
     const pieces = Math.min(...efforts.filter((a) => a.boxes === boxes).map((a) => a.pieces))
-    return obstaclesBetween(starts, this.allEnds, {
+    const found = obstaclesBetween(starts, this.allEnds, {
       joins: this.joins,
       expander: this.search.expander,
       boxes: this.boxes,
@@ -202,6 +203,18 @@ export class Solver {
       joined: (out, into) => joined.has(`${out.id} ${into.id}`),
       best: efforts.length > 0 ? { boxes, pieces } : null,
       whole: (this.solved ?? []).some((s) => worksFully(s.found, this.frame.best)),
+    })
+    return efforts.length > 0 ? found : [...this.stuck(), ...found]
+  }
+
+  /** Controls of the two ends that nobody can move, and of which nobody has noted where they stand. */
+  private stuck(): Obstacle[] {
+    return [this.frame.source, this.frame.display].flatMap(({ device, units }) => {
+      const [unit] = units
+      const unknown = device.controls.filter(
+        (c) => unit && outOfReach(device, c, unit) && unit.stands[c.key] === undefined,
+      )
+      return unknown.map((c) => obstacle('out-of-reach', { to: device.name, control: c.label }))
     })
   }
 

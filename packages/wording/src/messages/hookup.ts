@@ -232,6 +232,8 @@ export const OBSTACLES = {
   'obstacle.vision-polarity':
     'The {from} sends system {system}; the tuner of the {to} works the other way round and would show a negative picture.',
   'obstacle.not-taken': 'The input of the {to} does not take what the {from} gives.',
+  'obstacle.out-of-reach':
+    'The remote of the {to} is missing, and nobody has noted where {control} stands. Look on its screen and note it on the unit’s page.',
   'obstacle.no-lead':
     'Both have a fitting output and input, but no [lead] at hand joins the {from} to the {to}.',
   'obstacle.no-common-form':
