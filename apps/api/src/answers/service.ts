@@ -1,0 +1,113 @@
+import type { AnswerReply } from '@coaxwain/contract'
+import { fitted, type Answer, type Hookup, type Question, type Snapshot } from '@coaxwain/shelf'
+import { AppError, type FieldTrouble } from '../app-error'
+import type { Scope } from '../http/call'
+import type { SnapshotService } from '../snapshot/service'
+
+/** Finds hookups. Gives way to other requests at least every 50 ms. */
+export type Matcher = (snapshot: Snapshot, question: Question) => Promise<Answer> | Answer
+
+/** Judges a hookup without knowing how it was found. */
+export type Checker = (
+  snapshot: Snapshot,
+  question: Question,
+  hookup: Hookup,
+) => { readonly ok: boolean; readonly findings: readonly { readonly code: string }[] }
+
+/** Tells the people who run the server that the engine contradicts itself. */
+export type OnRefusal = (refused: {
+  readonly question: Question
+  readonly snapshot: Snapshot
+  readonly hookup: Hookup
+  readonly findings: readonly unknown[]
+}) => void
+
+export type AnswersService = ReturnType<typeof createAnswersService>
+
+const fault = (path: string, code: string, name: string): FieldTrouble => ({
+  path: `question.${path}`,
+  code,
+  details: { name },
+})
+
+function unitFaults(
+  snapshot: Snapshot,
+  end: 'source' | 'display',
+  uid: string,
+  part: {
+    readonly list: 'functions' | 'jacks'
+    readonly field: string
+    readonly key: string
+  } | null,
+): FieldTrouble[] {
+  const unit = snapshot.units.find((u) => u.uid === uid)
+  const model = unit && snapshot.models[unit.model]
+  if (!unit || model?.type !== 'device') return [fault(`${end}.unit`, 'unknown-reference', uid)]
+  if (!part) return []
+  const code = part.list === 'functions' ? 'unknown-function' : 'unknown-jack'
+  return fitted(model, unit.modifications)[part.list].some((p) => p.key === part.key)
+    ? []
+    : [fault(`${end}.${part.field}`, code, part.key)]
+}
+
+/** Everything that a question names must be on this shelf. */
+export function questionMustFit(snapshot: Snapshot, question: Question): void {
+  const { source, display } = question
+  const known = new Set(snapshot.units.map((u) => u.uid))
+  const errors = [
+    ...unitFaults(snapshot, 'source', source.unit, {
+      list: 'functions',
+      field: 'playing',
+      key: source.playing,
+    }),
+    ...unitFaults(
+      snapshot,
+      'display',
+      display.unit,
+      display.input === undefined ? null : { list: 'jacks', field: 'input', key: display.input },
+    ),
+    ...question.avoid.flatMap((uid, i) =>
+      known.has(uid) ? [] : [fault(`avoid.${i}`, 'unknown-reference', uid)],
+    ),
+    ...question.assumedLeads.flatMap((uid, i) =>
+      snapshot.models[uid]?.type === 'piece'
+        ? []
+        : [fault(`assumedLeads.${i}`, 'unknown-reference', uid)],
+    ),
+  ]
+  if (errors.length > 0) throw new AppError('question-unsound', { errors })
+}
+
+interface Needs {
+  readonly snapshots: SnapshotService
+  readonly findHookups: Matcher
+  readonly checkHookup: Checker
+  readonly onRefusal: OnRefusal
+}
+
+export function createAnswersService({ snapshots, findHookups, checkHookup, onRefusal }: Needs) {
+  /** What the check refuses is never shown; when nothing else is left, that is said. */
+  const checked = (snapshot: Snapshot, question: Question, answer: Answer): Answer => {
+    const stands = (hookup: Hookup): boolean => {
+      const { ok, findings } = checkHookup(snapshot, question, hookup)
+      if (!ok) onRefusal({ question, snapshot, hookup, findings })
+      return ok
+    }
+    const hookups = answer.hookups.filter(stands)
+    if (answer.hookups.length > 0 && hookups.length === 0) throw new AppError('answer-refused')
+    return { ...answer, hookups }
+  }
+
+  return {
+    async ask(scope: Scope, question: Question): Promise<AnswerReply> {
+      const snapshot = await snapshots.read(scope)
+      questionMustFit(snapshot, question)
+      return {
+        question,
+        answer: checked(snapshot, question, await findHookups(snapshot, question)),
+        shelfVersion: snapshot.shelfVersion,
+        catalogueVersion: snapshot.catalogueVersion,
+      }
+    },
+  }
+}

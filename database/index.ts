@@ -1,0 +1,5 @@
+export { connectDatabase } from './connect'
+export { type DatabaseSettings } from './knexfile'
+export { migrate, pendingMigrations, rollBackAll } from './migrate'
+export { demoIsLoaded, loadDemo, type DemoWriters } from './seeds/load-demo'
+export { completePassPhrases } from './seeds/pass-phrases'

@@ -1,0 +1,82 @@
+import { fileURLToPath } from 'node:url'
+import vue from '@vitejs/plugin-vue'
+import { ElementPlusResolver } from 'unplugin-vue-components/resolvers'
+import Components from 'unplugin-vue-components/vite'
+import { defineConfig } from 'vitest/config'
+
+const root = fileURLToPath(new URL('..', import.meta.url))
+const nothing = fileURLToPath(new URL('./support/nothing.ts', import.meta.url))
+
+/** Styles of the component library are no business of component tests. */
+const withoutStyles = [
+  { find: /^element-plus\/(es|theme-chalk)\/.*(style\/css|\.css)$/, replacement: nothing },
+]
+
+const SLOW_MS = 60_000
+
+const onDatabase = (name: string, include: string[]) => ({
+  test: {
+    name,
+    root,
+    include,
+    environment: 'node' as const,
+    globalSetup: ['tests/support/global-database.ts'],
+    testTimeout: SLOW_MS,
+    hookTimeout: SLOW_MS,
+  },
+})
+
+const plain = (name: string, include: string[]) => ({
+  test: { name, root, include, environment: 'node' as const, testTimeout: SLOW_MS },
+})
+
+export default defineConfig({
+  root,
+  test: {
+    root,
+    allowOnly: false,
+    projects: [
+      plain('unit', [
+        'packages/**/*.test.ts',
+        'apps/api/**/*.test.ts',
+        'database/**/*.test.ts',
+        'scripts/**/*.test.ts',
+      ]),
+      {
+        plugins: [
+          vue(),
+          Components({
+            dts: false,
+            dirs: [],
+            resolvers: [ElementPlusResolver({ importStyle: false })],
+          }),
+        ],
+        resolve: { alias: withoutStyles },
+        test: {
+          name: 'web',
+          root,
+          include: ['apps/catalogue/**/*.test.ts'],
+          environment: 'happy-dom',
+        },
+      },
+      onDatabase('api', ['tests/api/**/*.test.ts']),
+      onDatabase('faults', ['tests/faults/**/*.test.ts']),
+      plain('architecture', ['tests/architecture/**/*.test.ts']),
+      plain('reference', ['tests/reference/**/*.test.ts']),
+      plain('laws', ['tests/laws/**/*.test.ts', 'tests/enumeration/**/*.test.ts']),
+      plain('cases', ['tests/cases/**/*.test.ts']),
+      {
+        test: {
+          name: 'browser',
+          root,
+          include: ['tests/browser/**/*.test.ts'],
+          environment: 'node',
+          globalSetup: ['tests/support/global-site.ts'],
+          testTimeout: SLOW_MS,
+          hookTimeout: SLOW_MS,
+          fileParallelism: false,
+        },
+      },
+    ],
+  },
+})
