@@ -4,6 +4,7 @@ import { isSoundCircuit, type Circuit, type Quality } from '@coaxwain/signal'
 import { sentence } from '@coaxwain/wording'
 import type {
   CaseAnswer,
+  CaseControl,
   CaseHop,
   CasePiece,
   CasePath,
@@ -15,27 +16,13 @@ import type {
   HookupAnswer,
 } from './form'
 import { pieceInCaseForm, unitInCaseForm } from './parts-form'
-import { controlKey, DISPLAY, SOURCE, type Translated } from './translate'
+import { controlKey, DISPLAY, SOURCE } from './translate'
 
 /** The product's answer in the words of the case form. */
-export function toCaseAnswer(
-  question: CaseQuestion,
-  translated: Translated,
-  answer: Answer,
-  parts: Parts,
-): HookupAnswer {
+export function toCaseAnswer(question: CaseQuestion, answer: Answer, parts: Parts): HookupAnswer {
   const [best] = answer.hookups
   const possible = verdictOf(best, answer.purchases)
-  const bought = possible === 'with-purchase' ? answer.purchases : []
-  // Once something works in full, what is seen in grey only is no answer to the question.
-  const worth = best && isWhole(best) ? answer.hookups.filter(isWhole) : answer.hookups
-  const answers =
-    bought.length > 0
-      ? bought.map((p, i) => boughtAnswer(withBought(question, p, parts), translated, p, parts, i))
-      : possible === 'no'
-        ? []
-        : worth.slice(0, 3).map((h, i) => oneAnswer(question, translated, h, i))
-
+  const answers = answersOf(question, answer, { possible, parts })
   return {
     id: question.id,
     possible,
@@ -52,6 +39,29 @@ export function toCaseAnswer(
     claims: [],
   }
 }
+
+function answersOf(
+  question: CaseQuestion,
+  { hookups, purchases }: Answer,
+  { possible, parts }: { possible: HookupAnswer['possible']; parts: Parts },
+): CaseAnswer[] {
+  const hasWhole = hookups[0] !== undefined && isWhole(hookups[0])
+  switch (possible) {
+    case 'no':
+      return []
+    case 'with-purchase':
+      return purchases.map((p, i) => ({ ...boughtAnswer(question, p, parts), ...below(i) }))
+    case 'yes':
+      // Once something works in full, what is seen in grey only is no answer to the question.
+      return hookups
+        .filter((h) => !hasWhole || isWhole(h))
+        .slice(0, 3)
+        .map((h, i) => ({ ...oneAnswer(question, h), ...below(i) }))
+  }
+}
+
+const below = (rank: number): Pick<CaseAnswer, 'below'> =>
+  rank > 0 ? { below: 'it is second best by the order in which answers are ranked' } : {}
 
 /**
  * Half of the sound counts as a yes where one adapter would bring the rest, and as a purchase where more is
@@ -86,30 +96,20 @@ function itemOf(key: string, parts: Parts): CaseUnit | CasePiece | null {
 }
 
 /** Several pieces of one sort are bought one by one, each under an id of its own. */
-function boughtAnswer(
-  question: CaseQuestion,
-  translated: Translated,
-  purchase: Purchase,
-  parts: Parts,
-  rank: number,
-): CaseAnswer {
-  const hookup = numbered(purchase.hookup)
-  const answer = oneAnswer(question, translated, hookup, rank)
+function boughtAnswer(question: CaseQuestion, purchase: Purchase, parts: Parts): CaseAnswer {
   const counts = new Map<string, number>()
   const missing = purchase.parts.flatMap((key) => {
     const item = itemOf(key, parts)
     if (!item) return []
     const nth = (counts.get(key) ?? 0) + 1
     counts.set(key, nth)
-    return [
-      {
-        code: key,
-        words: item.what,
-        item: { ...item, id: nth === 1 ? boughtId(key) : `${boughtId(key)}-${nth}` },
-      },
-    ]
+    const id = nth === 1 ? boughtId(key) : `${boughtId(key)}-${nth}`
+    return [{ code: key, words: item.what, item: { ...item, id } }]
   })
-  return { ...answer, missing }
+  return {
+    ...oneAnswer(withBought(question, purchase, parts), numbered(purchase.hookup)),
+    missing,
+  }
 }
 
 /** Ids of parts in the words of the form, and copies of a bought piece after the first under ids of their own. */
@@ -222,12 +222,7 @@ function warning(code: string, details: Readonly<Record<string, string | number>
   return { ...(known ? { code: known } : {}), words: say(code, details) }
 }
 
-function oneAnswer(
-  question: CaseQuestion,
-  translated: Translated,
-  hookup: Hookup,
-  rank: number,
-): CaseAnswer {
+function oneAnswer(question: CaseQuestion, hookup: Hookup): CaseAnswer {
   const cautions = hookup.cautions.filter((c) => !UNSAID.includes(c.code))
   const seen = new Set<string>()
   return {
@@ -242,7 +237,6 @@ function oneAnswer(
     warnings: cautions
       .map((c) => warning(`caution.${c.code}`, c.details))
       .filter((w) => w.code === undefined || (!seen.has(w.code) && seen.add(w.code))),
-    ...(rank > 0 ? { below: 'it is second best by the order in which answers are ranked' } : {}),
   }
 }
 
@@ -268,25 +262,37 @@ function settingOf(
   s: Hookup['settings'][number],
 ): CaseSetting {
   const control = unitOf(question, s.unit)?.settings?.find((c) => controlKey(c.name) === s.control)
-  const base = {
+  return {
     on: s.unit,
     set: control?.name ?? s.control,
     ...(control ? { class: control.class } : {}),
+    to: positionOf(hookup, s, control),
   }
+}
+
+function positionOf(
+  hookup: Hookup,
+  s: Hookup['settings'][number],
+  control: CaseControl | undefined,
+): string {
   if (s.why === 'tunes-to') {
-    const sender = hookup.settings.find(
-      (o) => o.why === 'picks-channel' && o.visionMhz === s.visionMhz,
-    )
-    const from = sender?.unit ?? carrierFrom(hookup, s.unit)
-    return { ...base, to: from ? `as ${from}` : s.position }
+    const sender = senderTo(hookup, s)
+    return sender === null ? s.position : `as ${sender}`
   }
-  if (control?.class === 'trim')
-    return { ...base, to: s.position === 'by-eye' ? 'by eye' : s.position }
-  return { ...base, to: s.why === 'picks-channel' ? caseChannel(control, s.position) : s.position }
+  if (control?.class === 'trim') return s.position === 'by-eye' ? 'by eye' : s.position
+  return s.why === 'picks-channel' ? caseChannel(control, s.position) : s.position
+}
+
+/** The unit that a tuner follows: one that is set to the same carrier, else the one before it. */
+function senderTo(hookup: Hookup, s: Hookup['settings'][number]): string | null {
+  const sender = hookup.settings.find(
+    (o) => o.why === 'picks-channel' && o.visionMhz === s.visionMhz,
+  )
+  return sender?.unit ?? carrierFrom(hookup, s.unit)
 }
 
 /** Channel names of the product carry the letters of their plan where the case's own have none. */
-const caseChannel = (control: { choices?: string[] } | undefined, name: string): string =>
+const caseChannel = (control: CaseControl | undefined, name: string): string =>
   control?.choices?.includes(name)
     ? name
     : (control?.choices?.find((c) => name.endsWith(c)) ?? name)

@@ -35,11 +35,42 @@ function answerOf(file: CaseFile): HookupAnswer[] {
     }
     const translated = translate(question)
     const answer = findHookups(translated.snapshot, translated.question, { parts: ORDINARY_PARTS })
-    return toCaseAnswer(question, translated, answer, ORDINARY_PARTS)
+    return toCaseAnswer(question, answer, ORDINARY_PARTS)
   })
 }
 
 const write = (line: string): void => void process.stdout.write(`${line}\n`)
+
+interface Score {
+  readonly passed: number
+  readonly failed: number
+  readonly noise: number
+}
+
+const sum = (scores: readonly Score[], of: keyof Score): number =>
+  scores.reduce((total, s) => total + s[of], 0)
+
+function scoreHookups(file: CaseFile): Score[] {
+  if (!wants('hookups')) return []
+  const answers = answerOf(file)
+  return (file.hookupCases ?? []).map((c, i) => {
+    const { failures, noise } = judge(c, answers[i]!)
+    const passed = failures.length === 0
+    write(passed ? `pass ${c.id}` : `FAIL ${c.id}: ${failures.join('; ')}`)
+    return { passed: passed ? 1 : 0, failed: passed ? 0 : 1, noise }
+  })
+}
+
+function scoreUnanswered(file: CaseFile): Score[] {
+  const cases = [
+    ...(wants('channels') ? (file.channelCases ?? []) : []),
+    ...(wants('levels') ? (file.levelCases ?? []) : []),
+  ]
+  return cases.map((c) => {
+    write(`FAIL ${c.id}: not answered`)
+    return { passed: 0, failed: 1, noise: 0 }
+  })
+}
 
 if (json) {
   const hookupAnswers = wants('hookups') ? files.flatMap((f) => answerOf(read(f))) : []
@@ -47,33 +78,8 @@ if (json) {
     JSON.stringify({ form: 'hookup-answers/1', ...(wants('hookups') ? { hookupAnswers } : {}) }),
   )
 } else {
-  let passed = 0
-  let failed = 0
-  let noise = 0
-  for (const path of files) {
-    const file = read(path)
-    if (wants('hookups')) {
-      const answers = answerOf(file)
-      ;(file.hookupCases ?? []).forEach((c, i) => {
-        const result = judge(c, answers[i]!)
-        noise += result.noise
-        if (result.failures.length === 0) passed++
-        else failed++
-        write(
-          `${result.failures.length === 0 ? 'pass' : 'FAIL'} ${c.id}${result.failures.length ? ': ' + result.failures.join('; ') : ''}`,
-        )
-      })
-    }
-    for (const kind of ['channels', 'levels'] as const) {
-      const list = kind === 'channels' ? file.channelCases : file.levelCases
-      if (!wants(kind)) continue
-      for (const c of list ?? []) {
-        failed++
-        write(`FAIL ${c.id}: not answered`)
-      }
-    }
-  }
-  write(`noise: ${noise} warnings that nobody expected`)
-  write(`${passed} passed, ${failed} failed`)
-  process.exitCode = failed > 0 ? 1 : 0
+  const scores = files.map(read).flatMap((f) => [...scoreHookups(f), ...scoreUnanswered(f)])
+  write(`noise: ${sum(scores, 'noise')} warnings that nobody expected`)
+  write(`${sum(scores, 'passed')} passed, ${sum(scores, 'failed')} failed`)
+  process.exitCode = sum(scores, 'failed') > 0 ? 1 : 0
 }

@@ -702,121 +702,146 @@ function turnsInto(
 const samePorts = (a: CaseJack, b: CaseJack): boolean =>
   a.ports.some((p) => b.ports.some((q) => p.id === q.id))
 
+const outsOf = (jacks: readonly CaseJack[]): CaseJack[] => jacks.filter((j) => j.jack.dir === 'out')
+
+const insOf = (jacks: readonly CaseJack[]): CaseJack[] => jacks.filter((j) => j.jack.dir === 'in')
+
+const powerOf = (unit: CaseUnit): ModelFunction['power'] => (unit.powered ? 'on' : 'none')
+
 function boxFunctions(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction[] {
-  const ins = jacks.filter((j) => j.jack.dir === 'in')
-  const outs = jacks.filter((j) => j.jack.dir === 'out')
-  const power = unit.powered ? ('on' as const) : ('none' as const)
-  const made: ModelFunction[] = []
-  for (const from of ins.filter(isPicture)) {
-    for (const how of ['loop', 'tuned', undefined] as const) {
-      made.push(...pictureFunction(unit, jacks, from, how, power))
-    }
-  }
-  const pictured = made.length > 0
-  if (!pictured) {
-    for (const from of ins.filter(isSoundJack)) {
+  const pictures = insOf(jacks)
+    .filter(isPicture)
+    .flatMap((from) => HOWS.flatMap((how) => pictureFunction({ unit, jacks, from, how })))
+  const sounds = pictures.length > 0 ? [] : soundFunctions(unit, jacks)
+  return [...pictures, ...sounds, ...aerialFunctions(jacks)]
+}
+
+/** A box without pictures passes sound on, or makes it heard. */
+function soundFunctions(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction[] {
+  const outs = outsOf(jacks)
+  return insOf(jacks)
+    .filter(isSoundJack)
+    .flatMap((from): ModelFunction[] => {
       const gives = outs
         .filter(isSoundJack)
-        .flatMap((to) =>
-          (feeds(unit, from, to) ?? []).slice(0, 1).map((d): Give => soundGive(to, d.when)),
-        )
-      if (gives.length > 0) {
-        made.push({
-          key: `sound ${from.jack.key}`,
-          kind: 'selects',
+        .flatMap((to) => (feeds(unit, from, to) ?? []).slice(0, 1).map((d) => soundGive(to, d)))
+      if (gives.length === 0 && outs.length > 0) return []
+      const speaks = gives.length === 0
+      return [
+        {
+          key: `${speaks ? 'speaks' : 'sound'} ${from.jack.key}`,
+          kind: speaks ? 'makes-sound' : 'selects',
           needs: [from.jack.key],
           accepts: [],
           gives,
-          power,
-        })
-      } else if (outs.length === 0) {
-        made.push({
-          key: `speaks ${from.jack.key}`,
-          kind: 'makes-sound',
-          needs: [from.jack.key],
-          accepts: [],
-          gives: [],
-          power,
-        })
-      }
-    }
-  }
-  const aerial = ins.length === 0 ? outs.filter((j) => j.jack.form === 'rf') : []
-  for (const out of aerial) {
-    made.push({
-      key: `receives ${out.jack.key}`,
-      kind: 'receives',
-      needs: [],
-      accepts: [],
-      gives: [{ jack: out.jack.key }],
-      power: 'none',
+          power: powerOf(unit),
+        },
+      ]
     })
-  }
-  return made
 }
 
-const soundGive = (to: CaseJack, when: When | undefined): Give => ({
+/** What has RF outputs and no input at all is an aerial. */
+const aerialFunctions = (jacks: readonly CaseJack[]): ModelFunction[] =>
+  insOf(jacks).length > 0
+    ? []
+    : outsOf(jacks)
+        .filter((j) => j.jack.form === 'rf')
+        .map(({ jack }) => ({
+          key: `receives ${jack.key}`,
+          kind: 'receives',
+          needs: [],
+          accepts: [],
+          gives: [{ jack: jack.key }],
+          power: 'none',
+        }))
+
+const soundGive = (to: CaseJack, edge: CaseDoes): Give => ({
   jack: to.jack.key,
-  while: both(to.when, when),
+  while: both(to.when, edge.when),
   sound: to.jack.contacts.some((c) => c.circuit === 'audio-r') ? 'same' : 'mono',
 })
 
-function pictureFunction(
-  unit: CaseUnit,
-  jacks: readonly CaseJack[],
-  from: CaseJack,
-  how: 'loop' | 'tuned' | undefined,
-  power: 'on' | 'none',
-): ModelFunction[] {
-  const outs = jacks.filter((j) => j.jack.dir === 'out')
-  const wanted = (d: CaseDoes): boolean => d.how === how
-  const gives = outs
+const HOWS = ['loop', 'tuned', undefined] as const
+
+/** A picture input of a box, and how the box passes on what comes in there. */
+interface Passing {
+  readonly unit: CaseUnit
+  readonly jacks: readonly CaseJack[]
+  readonly from: CaseJack
+  readonly how: (typeof HOWS)[number]
+}
+
+function pictureFunction(passing: Passing): ModelFunction[] {
+  const { unit, from, how } = passing
+  const gives = pictureGives(passing)
+  if (gives.length === 0) return []
+  const base = {
+    key: `${how ?? 'passes'} ${from.jack.key}`,
+    kind: kindOf(from, gives, how),
+    while: condition(from.when),
+    needs: [from.jack.key],
+    power: powerOf(unit),
+    ...factsOf(unit, from),
+  }
+  if (how === 'loop') return [{ ...base, optional: [], accepts: [], gives }]
+  const tuner = from.jack.form === 'rf' ? from.ports[0]?.tuner : undefined
+  return [
+    {
+      ...base,
+      optional: tuner ? [] : soundsTaken(passing, gives),
+      accepts: acceptRows(from),
+      gives: [...gives, ...soundGives(passing)],
+      ...(tuner?.control ? { tunedBy: tuner.control } : {}),
+    },
+  ]
+}
+
+function pictureGives({ unit, jacks, from, how }: Passing): Give[] {
+  return outsOf(jacks)
     .filter((to) => isPicture(to) && turnsInto(jacks, unit, from, to))
     .flatMap((to): Give[] => {
-      const found = feeds(unit, from, to)?.filter(wanted) ?? []
-      const [edge] = found
-      if (!edge) return []
+      const found = (feeds(unit, from, to) ?? []).filter((d) => d.how === how)
+      if (found.length === 0) return []
       const made = give(to, mergeWhen(found))
       return how === 'loop'
         ? [{ jack: made.jack, while: made.while, picture: [{ scan: 'same', colour: 'same' }] }]
         : [made]
     })
-  if (gives.length === 0) return []
-  const soundOuts = outs.filter(isSoundJack).flatMap((to): Give[] => {
-    const direct = feeds(unit, from, to)?.filter(wanted) ?? []
-    const beside = jacks
-      .filter((j) => isSoundJack(j) && j.jack.dir === 'in')
-      .flatMap((s) => feeds(unit, s, to) ?? [])
-    const [edge] = direct.length > 0 ? direct : beside
-    return edge ? [soundGive(to, edge.when)] : []
-  })
-  const optional = jacks
-    .filter((s) => isSoundJack(s) && s.jack.dir === 'in')
+}
+
+/** Sound that leaves along with a picture: out of the picture input itself, else from a sound input. */
+function soundGives({ unit, jacks, from, how }: Passing): Give[] {
+  const soundIns = insOf(jacks).filter(isSoundJack)
+  return outsOf(jacks)
+    .filter(isSoundJack)
+    .flatMap((to) => {
+      const direct = (feeds(unit, from, to) ?? []).filter((d) => d.how === how)
+      const beside = soundIns.flatMap((s) => feeds(unit, s, to) ?? [])
+      return [...direct, ...beside].slice(0, 1).map((edge) => soundGive(to, edge))
+    })
+}
+
+/** Sound inputs that go on while the picture does. */
+function soundsTaken({ unit, jacks }: Passing, gives: readonly Give[]): OptionalInput[] {
+  return insOf(jacks)
+    .filter(isSoundJack)
     .flatMap((s): OptionalInput[] => {
-      const [edge] = outs.flatMap((to) => edges(unit, s, to))
+      const [edge] = outsOf(jacks).flatMap((to) => edges(unit, s, to))
       const fits = edge && gives.some((g) => compatible(g.while, edge.when))
       return fits ? [{ jack: s.jack.key, ifAbsent: 'silent', while: both(s.when, edge.when) }] : []
     })
-  const tuner = from.jack.form === 'rf' && how !== 'loop' ? from.ports[0]?.tuner : undefined
+}
+
+function factsOf(unit: CaseUnit, from: CaseJack): Partial<ModelFunction> {
+  const { gainDb, lossDb, hdcp } = unit
   const agc = unit.recorderInputAgc === true || from.ports[0]?.recorderInputAgc === true
-  return [
-    {
-      key: `${how ?? 'passes'} ${from.jack.key}`,
-      kind: kindOf(from, gives, how),
-      while: condition(from.when),
-      needs: [from.jack.key],
-      optional: how === 'loop' || tuner ? [] : optional,
-      accepts: how === 'loop' ? [] : acceptRows(from),
-      gives: [...gives, ...(how === 'loop' ? [] : soundOuts)],
-      ...(tuner?.control ? { tunedBy: tuner.control } : {}),
-      power,
-      ...(agc && from.jack.form !== 'rf' ? { inputAgc: true } : {}),
-      ...(unit.hdcp === undefined ? {} : { hdcp: unit.hdcp }),
-      ...(unit.gainDb === undefined && unit.lossDb === undefined
-        ? {}
-        : { gainDb: (unit.gainDb ?? 0) - (unit.lossDb ?? 0) }),
-    },
-  ]
+  return {
+    ...(agc && from.jack.form !== 'rf' ? { inputAgc: true } : {}),
+    ...(hdcp === undefined ? {} : { hdcp }),
+    ...(gainDb === undefined && lossDb === undefined
+      ? {}
+      : { gainDb: (gainDb ?? 0) - (lossDb ?? 0) }),
+  }
 }
 
 const mergeWhen = (found: readonly CaseDoes[]): When =>
@@ -841,28 +866,29 @@ function kindOf(
 
 // ---------------------------------------------------------------- whole units
 
+const isTube = ({ kind }: CaseUnit): boolean => /crt|tube/.test(kind ?? '') || kind === 'monitor'
+
+function screenOf(unit: CaseUnit): DisplayFacts['screen'] {
+  if (unit.kind === 'flat') return 'flat'
+  if (unit.kind === 'crt-mono') return 'tube-mono'
+  return isTube(unit) ? 'tube-colour' : 'projector'
+}
+
 function displayFacts(unit: CaseUnit): DisplayFacts | undefined {
   if (!unit.deflection) return undefined
-  const tube = /crt|tube/.test(unit.kind ?? '') || unit.kind === 'monitor'
+  const { sound } = unit
   return {
-    screen:
-      unit.kind === 'flat'
-        ? 'flat'
-        : unit.kind === 'crt-mono'
-          ? 'tube-mono'
-          : tube
-            ? 'tube-colour'
-            : 'projector',
+    screen: screenOf(unit),
     deflection: {
       lineKhz: unit.deflection.lineKhz,
       fieldHz: unit.deflection.fieldHz.map((hz) => [hz, hz] as const),
-      fixed: tube,
+      fixed: isTube(unit),
     },
     shape: unit.aspect === '16:9' || unit.kind === 'flat' ? '16:9' : '4:3',
-    loudspeakers: unit.sound === 'stereo' ? 'stereo' : unit.sound === 'mono' ? 'mono' : 'none',
+    loudspeakers: sound === 'stereo' || sound === 'mono' ? sound : 'none',
     storesFields: unit.fieldStore === true,
     convertsScan: unit.scanConversion === true,
-    directView: tube && (unit.tube?.view ?? 'direct') === 'direct',
+    directView: isTube(unit) && (unit.tube?.view ?? 'direct') === 'direct',
   }
 }
 

@@ -16,6 +16,7 @@ import { createHookupsRepository } from './hookups/repository'
 import { hookupRoutes } from './hookups/routes'
 import { createHookupsService } from './hookups/service'
 import type { AllHandlers } from './http/call'
+import { withOrdinaryParts } from './matcher'
 import { createModelsRepository } from './models/repository'
 import { modelRoutes } from './models/routes'
 import { createModelsService } from './models/service'
@@ -89,6 +90,7 @@ export async function compose({
   const answers = createAnswersService({
     snapshots,
     findHookups: matcher,
+    withParts: withOrdinaryParts,
     checkHookup: checker,
     onRefusal: (refused) => logger.error({ refused }, 'the check refused an answer'),
   })

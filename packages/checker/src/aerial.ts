@@ -1,27 +1,23 @@
-import type { DeviceModel, Key, ModelFunction } from '@coaxwain/models'
-import type { Leg, Question, Stop, Uid } from '@coaxwain/shelf'
+import type { DeviceModel, Key } from '@coaxwain/models'
+import type { Leg, Stop, Uid } from '@coaxwain/shelf'
+import { takesAt, type Bench } from './bench'
 import { finding, type Finding } from './finding'
-import type { Bench } from './flow'
 
 /** 0.346 sqrt(75) microvolts at the aerial terminal: 47 CFR 15.115(c)(1)(ii). */
 const LIMIT_DBMV = -50.47
 
 /** The aerial is kept as asked, and nothing that is modulated here gets up to it. */
-export function checkAerial(bench: Bench, question: Question): Finding[] {
+export function checkAerial(bench: Bench): Finding[] {
   const leg = bench.hookup.legs.find((l) => l.purpose === 'aerial')
-  const radiation = checkRadiation(bench, leg)
-  if (!leg) return question.demands.keepAerial === true ? [finding('aerial-not-kept')] : []
-  return [...checkWay(bench, question, leg), ...radiation]
+  if (leg) return [...checkWay(bench, leg), ...checkRadiation(bench, leg)]
+  return bench.question.demands.keepAerial === true ? [finding('aerial-not-kept')] : []
 }
 
 const hasRf = (device: DeviceModel, key: Key | null): boolean =>
   device.jacks.some((j) => j.key === key && j.form === 'rf')
 
-const takes = (fn: ModelFunction, key: Key | null): boolean =>
-  key !== null && [...fn.needs, ...(fn.oneOf ?? [])].includes(key)
-
 /** From stop to stop there is a link, and every unit on the way passes the signal on in some position. */
-function checkWay(bench: Bench, question: Question, leg: Leg): Finding[] {
+function checkWay(bench: Bench, leg: Leg): Finding[] {
   const found: Finding[] = []
   const [first] = leg.stops
   const start = first ? bench.view.fn(first.unit, first.function) : null
@@ -35,8 +31,7 @@ function checkWay(bench: Bench, question: Question, leg: Leg): Finding[] {
     if (!joined) found.push(finding('aerial-not-kept', { unit: stop.unit }))
     const last = i === leg.stops.length - 2
     if (!last && !passesOn(bench, stop)) found.push(finding('aerial-not-kept', { unit: stop.unit }))
-    if (last && !receives(bench, question, stop))
-      found.push(finding('aerial-not-kept', { unit: stop.unit }))
+    if (last && !receives(bench, stop)) found.push(finding('aerial-not-kept', { unit: stop.unit }))
   })
   return found
 }
@@ -46,17 +41,17 @@ function passesOn(bench: Bench, stop: Stop): boolean {
   if (!device || !hasRf(device, stop.in)) return false
   return device.functions.some(
     (fn) =>
-      takes(fn, stop.in) &&
+      takesAt(fn, stop.in) &&
       (fn.tunedBy !== undefined || fn.gives.some((g) => g.jack === stop.out && !g.rf)),
   )
 }
 
 /** The last tuner receives the kind of station that there is. */
-function receives(bench: Bench, question: Question, stop: Stop): boolean {
+function receives(bench: Bench, stop: Stop): boolean {
   const device = bench.view.device(stop.unit)
-  const kinds = new Set(question.offAir.map((s) => s.kind))
+  const kinds = new Set(bench.question.offAir.map((s) => s.kind))
   return (device?.functions ?? []).some((fn) => {
-    if (!takes(fn, stop.in) || fn.tunedBy === undefined) return false
+    if (!takesAt(fn, stop.in) || fn.tunedBy === undefined) return false
     const analogue = fn.accepts.some((r) => (r.systems ?? []).length > 0)
     const digital = fn.accepts.some((r) => (r.digital ?? []).length > 0)
     if (kinds.size === 0) return analogue || digital
@@ -74,25 +69,42 @@ interface Edge {
 
 const node = (unit: Uid, port: Key): string => `${unit} ${port}`
 
+/** Something that is modulated here, where it leaves, and its level there. */
+interface Sender {
+  readonly from: string
+  readonly levelDbmv: number
+}
+
 /** Level at an aerial terminal of everything that is modulated in the picture's path, by every way that joins. */
-function checkRadiation(bench: Bench, leg: Leg | undefined): Finding[] {
-  const aerial = leg?.stops[0]
-  const link = aerial && bench.hookup.links.find((l) => l.from.unit === aerial.unit)
-  if (!aerial || !link) return []
-  const graph = rfGraph(bench)
-  const target = node(aerial.unit, link.from.port)
+function checkRadiation(bench: Bench, leg: Leg): Finding[] {
   const warned = bench.hookup.cautions.some((c) => c.code === 'check-isolation')
-  return senders(bench).flatMap(({ from, levelDbmv }): Finding[] => {
-    const known = highest(graph, from, levelDbmv, target, null)
-    const worst = highest(graph, from, levelDbmv, target, 0)
-    const over = known > LIMIT_DBMV || (worst > LIMIT_DBMV && !warned)
-    return over
-      ? [finding('radiates', { level: Math.round((known > LIMIT_DBMV ? known : worst) * 10) / 10 })]
-      : []
+  return levelsAt(bench, leg).flatMap(({ known, worst }): Finding[] => {
+    const level = known > LIMIT_DBMV || warned ? known : worst
+    return level > LIMIT_DBMV ? [finding('radiates', { level: Math.round(level * 10) / 10 })] : []
   })
 }
 
-function senders(bench: Bench): { from: string; levelDbmv: number }[] {
+/** Whether too much might get up to an aerial, and nobody knows. */
+export function isolationUnknown(bench: Bench): boolean {
+  const leg = bench.hookup.legs.find((l) => l.purpose === 'aerial')
+  const levels = leg ? levelsAt(bench, leg) : []
+  return levels.some(({ known, worst }) => known <= LIMIT_DBMV && worst > LIMIT_DBMV)
+}
+
+/** What arrives at the aerial of each carrier: by ways of which the isolation is known, and at worst. */
+function levelsAt(bench: Bench, leg: Leg): { known: number; worst: number }[] {
+  const aerial = leg.stops[0]
+  const link = aerial && bench.hookup.links.find((l) => l.from.unit === aerial.unit)
+  if (!link) return []
+  const graph = rfGraph(bench)
+  const target = node(aerial.unit, link.from.port)
+  return senders(bench).map((sender) => ({
+    known: highest(graph, sender, target, null),
+    worst: highest(graph, sender, target, 0),
+  }))
+}
+
+function senders(bench: Bench): Sender[] {
   const stops = bench.hookup.legs.find((l) => l.purpose === 'picture')?.stops ?? []
   return stops.flatMap((stop) => {
     const fn = bench.view.fn(stop.unit, stop.function)
@@ -126,19 +138,7 @@ function insideOf(device: DeviceModel, uid: Uid): [string, Edge][] {
   const rf = device.ports
     .filter((p) => p.circuits.some((c) => c.circuit === 'rf'))
     .map((p) => p.key)
-  const portsOf = (jack: Key): Key[] =>
-    device.jacks
-      .filter((j) => j.key === jack && j.form === 'rf')
-      .flatMap((j) => j.contacts.map((c) => c.port))
-  const forwards = new Map<string, number>()
-  for (const fn of device.functions) {
-    if (fn.tunedBy !== undefined) continue
-    for (const a of [...fn.needs, ...(fn.oneOf ?? [])].flatMap(portsOf)) {
-      for (const g of fn.gives.filter((x) => x.rf === undefined)) {
-        for (const b of portsOf(g.jack)) forwards.set(`${a} ${b}`, fn.gainDb ?? 0)
-      }
-    }
-  }
+  const forwards = forwardsIn(device)
   return rf.flatMap((a) =>
     rf
       .filter((b) => b !== a)
@@ -151,28 +151,39 @@ function insideOf(device: DeviceModel, uid: Uid): [string, Edge][] {
   )
 }
 
+/** Gain in dB from port to port, of what a device passes on without turning it into something else. */
+function forwardsIn(device: DeviceModel): Map<string, number> {
+  const portsOf = (jack: Key): Key[] =>
+    device.jacks
+      .filter((j) => j.key === jack && j.form === 'rf')
+      .flatMap((j) => j.contacts.map((c) => c.port))
+  const ways = device.functions
+    .filter((fn) => fn.tunedBy === undefined)
+    .flatMap((fn) => {
+      const into = [...fn.needs, ...(fn.oneOf ?? [])].flatMap(portsOf)
+      const outOf = fn.gives.filter((g) => g.rf === undefined).flatMap((g) => portsOf(g.jack))
+      return into.flatMap((a) => outOf.map((b): [string, number] => [`${a} ${b}`, fn.gainDb ?? 0]))
+    })
+  return new Map(ways)
+}
+
 /** The highest level that arrives at a node; ways of unknown isolation count as given, or not at all. */
 function highest(
   graph: ReadonlyMap<string, readonly Edge[]>,
-  from: string,
-  levelDbmv: number,
+  sender: Sender,
   target: string,
   unknownDb: number | null,
 ): number {
   let highestAtTarget = -Infinity
-  const visit = (
-    at: string,
-    level: number,
-    seen: ReadonlySet<string>,
-    last: Edge['by'] | null,
-  ): void => {
+  const visit = (path: readonly string[], level: number, last: Edge['by'] | null): void => {
+    const at = path.at(-1) as string
     if (at === target) highestAtTarget = Math.max(highestAtTarget, level)
     for (const edge of graph.get(at) ?? []) {
       const db = edge.db ?? unknownDb
-      if (db === null || edge.by === last || seen.has(edge.to)) continue
-      visit(edge.to, level + db, new Set(seen).add(edge.to), edge.by)
+      if (db === null || edge.by === last || path.includes(edge.to)) continue
+      visit([...path, edge.to], level + db, edge.by)
     }
   }
-  visit(from, levelDbmv, new Set([from]), null)
+  visit([sender.from], sender.levelDbmv, null)
   return highestAtTarget
 }

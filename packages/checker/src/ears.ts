@@ -1,7 +1,8 @@
-import { inputsOf, type Give, type Jack, type Key, type ModelFunction } from '@coaxwain/models'
-import type { Question, Uid } from '@coaxwain/shelf'
-import { isPictureForm, type Circuit, type Sound } from '@coaxwain/signal'
-import { ownSound, settled, type Bench } from './flow'
+import { inputsOf, type Give, type Jack, type Key } from '@coaxwain/models'
+import type { PortRef, Uid } from '@coaxwain/shelf'
+import type { Circuit, Sound } from '@coaxwain/signal'
+import { Stage, type Bench } from './bench'
+import { ownSound } from './giving'
 
 /** Which of the source's two channels are in a wire. A mono source puts both into one. */
 export interface Channels {
@@ -23,7 +24,10 @@ export interface Pair {
   readonly r: Channels
 }
 
-export const SILENT: Pair = { l: NOTHING, r: NOTHING }
+const SILENT: Pair = { l: NOTHING, r: NOTHING }
+
+const mixed = (pairs: readonly Pair[]): Pair =>
+  pairs.reduce((a, b) => ({ l: add(a.l, b.l), r: add(a.r, b.r) }), SILENT)
 
 /** What two ways amount to. */
 export function soundOf({ l, r }: Pair): Sound {
@@ -48,98 +52,88 @@ export function pairOf(sound: Sound): Pair {
   }
 }
 
+/** More boxes in a row than any hookup has; ends the walk where sound goes in a ring. */
+const MOST_WIRES = 12
+
 /** Follows sound from the source over wires and through functions, by what each wire carries. */
 export class Ears {
-  /** Sound inside the picture signal as it enters a stop, by unit. */
-  readonly riding = new Map<Uid, { fn: Key; pair: Pair }>()
+  /** Sound inside the picture signal as it enters a function, by unit. */
+  private readonly riding = new Map<Uid, { fn: Key; pair: Pair }>()
 
-  constructor(
-    private readonly bench: Bench,
-    private readonly question: Question,
-  ) {}
+  constructor(private readonly bench: Bench) {}
 
-  /** Both ways of a sound input, as its links feed it. */
-  into(unit: Uid, jack: Jack, depth = 0): Pair {
-    const mono = this.wire(unit, jack, 'audio-mono', depth)
-    const l = add(this.wire(unit, jack, 'audio-l', depth), mono)
-    const r = add(this.wire(unit, jack, 'audio-r', depth), mono)
-    return { l, r }
+  /** Notes what of the sound in the picture signal a function hears. */
+  hearsPicture({ unit, fn }: Stage, sound: Sound): void {
+    this.riding.set(unit, { fn: fn.key, pair: pairOf(sound) })
   }
 
-  private wire(unit: Uid, jack: Jack, circuit: Circuit, depth: number): Channels {
-    const contact = jack.contacts.find((c) => c.circuit === circuit)
-    if (!contact || depth > 12) return NOTHING
+  /** Sound that a function has to work with: from its sound inputs, and out of the picture signal. */
+  enters(stage: Stage, depth = 0): Pair {
+    const { unit, device, fn } = stage
+    const wired = inputsOf(fn)
+      .flatMap((key) => device.jacks.filter((j) => j.key === key && j.form === 'sound'))
+      .filter((jack) => stage.holds(fn.optional?.find((o) => o.jack === jack.key)?.while))
+      .map((jack) => this.into(unit, jack, depth))
+    const rides = this.riding.get(unit)
+    return mixed([...wired, ...(rides?.fn === fn.key ? [rides.pair] : [])])
+  }
+
+  /** Both ways of a sound input, as its links feed it. */
+  private into(unit: Uid, jack: Jack, depth: number): Pair {
+    const on = (circuit: Circuit): Channels => {
+      const contact = jack.contacts.find((c) => c.circuit === circuit)
+      return contact ? this.wire({ unit, port: contact.port }, circuit, depth) : NOTHING
+    }
+    const mono = on('audio-mono')
+    return { l: add(on('audio-l'), mono), r: add(on('audio-r'), mono) }
+  }
+
+  private wire(to: PortRef, circuit: Circuit, depth: number): Channels {
+    if (depth > MOST_WIRES) return NOTHING
     return this.bench.hookup.links
-      .filter((l) => l.to.unit === unit && l.to.port === contact.port)
-      .flatMap((l) => l.circuits.filter((c) => c.to === circuit).map((c) => ({ l, c })))
-      .map(({ l, c }) => this.out(l.from.unit, l.from.port, c.from, depth + 1))
+      .filter((l) => l.to.unit === to.unit && l.to.port === to.port)
+      .flatMap((l) =>
+        l.circuits
+          .filter((c) => c.to === circuit)
+          .map((c) => this.leaves(l.from, c.from, depth + 1)),
+      )
       .reduce(add, NOTHING)
   }
 
-  private out(unit: Uid, port: Key, circuit: Circuit, depth: number): Channels {
-    const device = this.bench.view.device(unit)
-    const jacks = (device?.jacks ?? []).filter(
+  private leaves({ unit, port }: PortRef, circuit: Circuit, depth: number): Channels {
+    const jacks = (this.bench.view.device(unit)?.jacks ?? []).filter(
       (j) =>
         j.dir === 'out' &&
         j.form === 'sound' &&
         j.contacts.some((c) => c.port === port && c.circuit === circuit),
     )
-    const pairs = jacks.map((jack) => this.given(unit, jack.key, depth))
-    const pair = pairs.reduce<Pair>((a, b) => ({ l: add(a.l, b.l), r: add(a.r, b.r) }), SILENT)
-    if (circuit === 'audio-l') return pair.l
-    return circuit === 'audio-r' ? pair.r : add(pair.l, pair.r)
+    const { l, r } = mixed(jacks.map((jack) => this.given(unit, jack.key, depth)))
+    if (circuit === 'audio-l') return l
+    return circuit === 'audio-r' ? r : add(l, r)
   }
 
   private given(unit: Uid, jack: Key, depth: number): Pair {
-    const device = this.bench.view.device(unit)
-    if (!device) return SILENT
-    const { source, material } = this.question
-    if (unit === source.unit) {
-      const fn = device.functions.find((f) => f.key === source.playing)
-      const give = fn?.gives.find((g) => g.jack === jack && g.sound !== undefined)
-      return fn && give && this.open(unit, fn, give) ? pairOf(ownSound(fn, material)) : SILENT
-    }
-    return device.functions
-      .flatMap((fn) =>
-        fn.gives
-          .filter((g) => g.jack === jack && g.sound !== undefined)
-          .map((give) => ({ fn, give })),
-      )
-      .filter(({ fn, give }) => this.open(unit, fn, give))
-      .map(({ fn, give }) => this.through(unit, fn, give, depth))
-      .reduce<Pair>((a, b) => ({ l: add(a.l, b.l), r: add(a.r, b.r) }), SILENT)
+    const { source } = this.bench.question
+    const functions = this.bench.view.device(unit)?.functions ?? []
+    return mixed(
+      functions
+        .filter((fn) => unit !== source.unit || fn.key === source.playing)
+        .flatMap((fn) => Stage.of(this.bench, unit, fn.key) ?? [])
+        .flatMap((stage) =>
+          stage.fn.gives
+            .filter((g) => g.jack === jack && g.sound !== undefined)
+            .filter((g) => stage.holds(stage.fn.while) && stage.holds(g.while))
+            .map((g) => this.through(stage, g, depth)),
+        ),
+    )
   }
 
-  private open(unit: Uid, fn: ModelFunction, give: Give): boolean {
-    const quiet = { ...this.bench, found: [] }
-    return settled(quiet, unit, fn.while) && settled(quiet, unit, give.while)
-  }
-
-  private through(unit: Uid, fn: ModelFunction, give: Give, depth: number): Pair {
-    const inside = this.enters(unit, fn, depth)
+  private through(stage: Stage, give: Give, depth: number): Pair {
+    const { source, material } = this.bench.question
+    if (stage.unit === source.unit) return pairOf(ownSound(stage.fn, material))
+    const inside = this.enters(stage, depth)
     if (give.sound !== 'mono') return inside
     const all = add(inside.l, inside.r)
     return { l: all, r: all }
   }
-
-  /** Sound that a function has to work with: from its sound inputs, and out of the picture signal. */
-  enters(unit: Uid, fn: ModelFunction, depth = 0): Pair {
-    const device = this.bench.view.device(unit)
-    const quiet = { ...this.bench, found: [] }
-    const wired = inputsOf(fn)
-      .flatMap((key) => device?.jacks.filter((j) => j.key === key && j.form === 'sound') ?? [])
-      .filter((jack) => {
-        const optional = fn.optional?.find((o) => o.jack === jack.key)
-        return !optional || settled(quiet, unit, optional.while)
-      })
-      .map((jack) => this.into(unit, jack, depth))
-    const rides = this.riding.get(unit)
-    const embedded = rides?.fn === fn.key ? [rides.pair] : []
-    return [...wired, ...embedded].reduce<Pair>(
-      (a, b) => ({ l: add(a.l, b.l), r: add(a.r, b.r) }),
-      SILENT,
-    )
-  }
 }
-
-export const isPictureJack = (jack: Jack): boolean => isPictureForm(jack.form)

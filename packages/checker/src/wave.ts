@@ -1,8 +1,8 @@
 import type { Shape } from '@coaxwain/models'
-import type { PictureSignal } from '@coaxwain/signal'
 import type {
   Colour,
   PictureForm,
+  PictureSignal,
   Protection,
   Quality,
   RfSystemId,

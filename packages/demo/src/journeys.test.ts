@@ -187,7 +187,7 @@ describe('a 31 kHz computer among 15 kHz sets', () => {
       if (model.type !== 'device') return []
       return model.functions
         .filter((f) => functionState(unit, f.key) !== 'dead' && takesAnalogueRgb(model, f))
-        .filter((f) => f.accepts.some((row) => given.some((s) => row.scans.includes(s as never))))
+        .filter((f) => f.accepts.some(({ scans }) => given.some((s) => scans.includes(s))))
         .map((f) => `${model.name} ${f.key}`)
     })
     expect(takers).toEqual([])

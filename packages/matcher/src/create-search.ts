@@ -1,13 +1,14 @@
 import { LIMITS } from '@coaxwain/shelf'
 import type { Answer, Hookup, Question, Snapshot } from '@coaxwain/shelf'
+import { CompiledShelf } from './compile/shelf'
 import { Shopping, type Parts } from './reasons/purchases'
 import { buildHookup } from './result/build'
 import { choose, withSound } from './result/rank'
 import { Solver } from './search/solve'
 
 export interface HookupSearch {
-  /** Expands at most so many labels. */
-  step(expansions: number): void
+  /** Goes on for so many small steps. */
+  step(steps: number): void
   readonly done: boolean
   /** Labels expanded so far. */
   readonly work: number
@@ -22,18 +23,21 @@ export interface SearchOptions {
   readonly parts?: Parts | undefined
 }
 
+/** Makes a shelf ready for any number of questions; what is worked out for one serves the next. */
+export const compileShelf = (snapshot: Snapshot): CompiledShelf => new CompiledShelf(snapshot)
+
 /**
  * A search for hookups that its caller runs in slices, so that it can be watched and stopped.
  * Deterministic: no clock, no randomness; the budget counts label expansions.
  * Throws when the question names a unit that is not in the snapshot, or a lead.
  */
 export function createSearch(
-  snapshot: Snapshot,
+  shelf: CompiledShelf,
   question: Question,
   options: SearchOptions = {},
 ): HookupSearch {
   const { budget = LIMITS.budget, parts } = options
-  const solver = new Solver(snapshot, question, budget)
+  const solver = new Solver(shelf, question, budget)
   let shopping: Shopping | null = null
   let hookups: readonly Hookup[] | null = null
 
@@ -47,33 +51,36 @@ export function createSearch(
     if (!solver.done || hookups) return
     hookups = built()
     if (parts && !hookups.some((h) => h.worksFully)) {
-      shopping = new Shopping(snapshot, question, parts, budget)
+      shopping = new Shopping(shelf, question, parts, budget)
     }
   }
 
+  const done = (): boolean => solver.done && (shopping === null || shopping.done)
+  const work = (): number => solver.work + (shopping?.work ?? 0)
+  const complete = (): boolean => done() && solver.complete && (shopping?.complete ?? true)
+
   return {
-    step(expansions) {
-      if (shopping) shopping.step(expansions)
-      else solver.step(expansions)
+    step(steps) {
+      if (shopping) shopping.step(steps)
+      else solver.step(steps)
       settle()
     },
     get done() {
-      return solver.done && (shopping === null || shopping.done)
+      return done()
     },
     get work() {
-      return solver.work + (shopping?.work ?? 0)
+      return work()
     },
     best() {
       const { shown, more } = choose(withSound(built()), LIMITS.hookupsShown)
-      const complete = solver.complete && (shopping?.complete ?? true)
       return {
         format: 1,
         verdict: shown.length > 0 ? 'yes' : 'none',
-        complete: solver.done && (shopping?.done ?? true) && complete,
-        work: solver.work + (shopping?.work ?? 0),
+        complete: complete(),
+        work: work(),
         hookups: shown,
         moreCount: more,
-        obstacles: solver.done ? solver.obstacles() : [],
+        obstacles: solver.obstacles(),
         purchases: shopping?.done ? shopping.purchases(shown[0] ?? null) : [],
       }
     },
@@ -86,7 +93,7 @@ export function findHookups(
   question: Question,
   options?: SearchOptions,
 ): Answer {
-  const search = createSearch(snapshot, question, options)
+  const search = createSearch(compileShelf(snapshot), question, options)
   while (!search.done) search.step(1000)
   return search.best()
 }

@@ -215,11 +215,11 @@ function checkCondition(
 ): ModelProblem[] {
   return (condition ?? []).flatMap((stands): ModelProblem[] => {
     const control = model.controls.find((c) => c.key === stands.control)
-    const positions =
+    const positions: readonly string[] | null =
       stands.control === POWER_KEY ? POWER_STATES : control ? positionsOf(control) : null
     if (!positions) return [fault('unknown-control', { path, name: stands.control })]
     return stands.in
-      .filter((p) => !(positions as readonly string[]).includes(p))
+      .filter((p) => !positions.includes(p))
       .map((name) => fault('unknown-position', { path, name }))
   })
 }

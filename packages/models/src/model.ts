@@ -334,7 +334,7 @@ export const SHAPES = ['4:3', 'squeezed', 'letterbox', 'cropped'] as const
 /** How wide material is laid out: squeezed needs a wide screen. */
 export type Shape = (typeof SHAPES)[number]
 
-export const SOUND_GIVES = ['same', 'mono', 'stereo', 'left', 'right'] as const
+export const SOUND_GIVES = ['same', 'mono', 'stereo'] as const
 export type SoundGive = (typeof SOUND_GIVES)[number]
 
 /** A carrier put out. Variants under other positions follow as further rows. */

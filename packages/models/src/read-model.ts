@@ -39,14 +39,27 @@ export const holds = (condition: Condition | undefined, stand: Stand): boolean =
  * Both conditions at once: per control the positions that either allows, or null when one has none left.
  */
 export function together(a: Condition | undefined, b: Condition | undefined): Condition | null {
+  if (!b || b.length === 0) return possible(a ?? [])
+  if (!a || a.length === 0) return possible(b)
+  return merge([...a, ...b])
+}
+
+function merge(conditions: Condition): Condition | null {
   const merged = new Map<Key, readonly string[]>()
-  for (const { control, in: positions } of [...(a ?? []), ...(b ?? [])]) {
+  for (const { control, in: positions } of conditions) {
     const before = merged.get(control)
     const left = before ? before.filter((p) => positions.includes(p)) : positions
     if (left.length === 0) return null
     merged.set(control, left)
   }
   return [...merged].map(([control, positions]) => ({ control, in: positions }))
+}
+
+/** One condition alone, its controls named once each. */
+function possible(condition: Condition): Condition | null {
+  const controls = new Set(condition.map((c) => c.control))
+  if (controls.size < condition.length) return merge(condition)
+  return condition.every((c) => c.in.length > 0) ? condition : null
 }
 
 /** All conditions at once, or null when they cannot be. */

@@ -1,5 +1,5 @@
 import type { Model } from '@coaxwain/models'
-import { BOXES } from './boxes'
+import { BOXES } from './boxes/index'
 import { PIECES } from './pieces'
 
 /**

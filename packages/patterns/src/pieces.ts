@@ -12,19 +12,23 @@ const equal = (name: string, connector: Connector, count: number): PieceModel =>
     wires: cores(count),
   })
 
+type Ends = readonly [Connector, Connector]
+
+type Facts = Partial<Pick<PieceModel, 'meantFor' | 'impedanceOhm' | 'lossDb'>>
+
 /** One plug at either end, single core. */
 const single = (
   name: string,
   kind: PieceModel['kind'],
-  a: Connector,
-  b: Connector,
-  more: Partial<Pick<PieceModel, 'meantFor' | 'impedanceOhm' | 'lossDb'>> = {},
-): PieceModel => piece({ name, kind, a: [a], b: [b], wires: cores(1), ...more })
+  [a, b]: Ends,
+  facts: Facts = {},
+): PieceModel => piece({ name, kind, a: [a], b: [b], wires: cores(1), ...facts })
 
+/** One plug at either end, with a core for each circuit. */
 const multi = (
   name: string,
   kind: PieceModel['kind'],
-  [a, b]: readonly [Connector, Connector],
+  [a, b]: Ends,
   circuits: readonly Circuit[],
 ): PieceModel => piece({ name, kind, a: [a], b: [b], wires: through(circuits) })
 
@@ -42,17 +46,21 @@ const SCART_ALL: readonly Circuit[] = [
   'switch-volts',
 ]
 
-/** Between 75 and 300 ohm: loss by common practice, no source. */
-const TRANSFORMER = { meantFor: ['rf'], lossDb: 0.7 } as const
+/** A transformer between two impedances: loss by common practice, no source. */
+const transforms = (...impedanceOhm: readonly [number, number]): Facts => ({
+  meantFor: ['rf'],
+  lossDb: 0.7,
+  impedanceOhm,
+})
 
 /** Leads and adapters that any shop of the trade has. */
 export const PIECES = {
   'phono-lead': equal('phono lead', 'phono-plug', 1),
   'phono-lead-2': equal('2-way phono lead', 'phono-plug', 2),
   'phono-lead-3': equal('3-way phono lead', 'phono-plug', 3),
-  'f-lead': single('F lead', 'lead', 'f-plug', 'f-plug'),
-  'aerial-lead': single('9.52 mm aerial lead', 'lead', 'iec-socket', 'iec-plug', RF),
-  'phono-aerial-lead': single('phono to 9.52 mm lead', 'lead', 'phono-plug', 'iec-plug', RF),
+  'f-lead': single('F lead', 'lead', ['f-plug', 'f-plug']),
+  'aerial-lead': single('9.52 mm aerial lead', 'lead', ['iec-socket', 'iec-plug'], RF),
+  'phono-aerial-lead': single('phono to 9.52 mm lead', 'lead', ['phono-plug', 'iec-plug'], RF),
   's-video-lead': multi('S-Video lead', 'lead', ['svideo4-plug', 'svideo4-plug'], ['y', 'c']),
   'hd15-lead': multi(
     '15-pin computer lead',
@@ -62,10 +70,10 @@ export const PIECES = {
   ),
   'hdmi-lead': multi('HDMI lead', 'lead', ['hdmi-plug', 'hdmi-plug'], ['tmds']),
   '21-pin-lead': multi('21-pin lead, fully wired', 'lead', ['scart-plug', 'scart-plug'], SCART_ALL),
-  'optical-lead': single('optical lead', 'lead', 'optical-plug', 'optical-plug', {
+  'optical-lead': single('optical lead', 'lead', ['optical-plug', 'optical-plug'], {
     meantFor: ['spdif'],
   }),
-  'bnc-lead': single('BNC lead', 'lead', 'bnc-plug', 'bnc-plug'),
+  'bnc-lead': single('BNC lead', 'lead', ['bnc-plug', 'bnc-plug']),
   'mini-jack-phono-lead': piece({
     name: '3.5 mm plug to two phonos',
     kind: 'lead',
@@ -74,43 +82,31 @@ export const PIECES = {
     wires: [wire([0, 'audio-l'], [0, 'any']), wire([0, 'audio-r'], [1, 'any'])],
     meantFor: ['audio-l', 'audio-r', 'audio-mono'],
   }),
-  'phono-f': single('phono socket to F plug', 'adapter', 'phono-socket', 'f-plug'),
-  'f-phono': single('F socket to phono plug', 'adapter', 'f-socket', 'phono-plug'),
-  'f-aerial': single('F socket to 9.52 mm plug', 'adapter', 'f-socket', 'iec-plug', RF),
-  'aerial-f': single('9.52 mm socket to F plug', 'adapter', 'iec-socket', 'f-plug', RF),
-  'bnc-phono': single('BNC plug to phono socket', 'adapter', 'bnc-plug', 'phono-socket'),
-  'phono-bnc': single('BNC socket to phono plug', 'adapter', 'bnc-socket', 'phono-plug'),
-  'phono-joiner': single('phono joiner', 'adapter', 'phono-socket', 'phono-socket'),
-  'f-joiner': single('F joiner', 'adapter', 'f-socket', 'f-socket'),
+  'phono-f': single('phono socket to F plug', 'adapter', ['phono-socket', 'f-plug']),
+  'f-phono': single('F socket to phono plug', 'adapter', ['f-socket', 'phono-plug']),
+  'f-aerial': single('F socket to 9.52 mm plug', 'adapter', ['f-socket', 'iec-plug'], RF),
+  'aerial-f': single('9.52 mm socket to F plug', 'adapter', ['iec-socket', 'f-plug'], RF),
+  'bnc-phono': single('BNC plug to phono socket', 'adapter', ['bnc-plug', 'phono-socket']),
+  'phono-bnc': single('BNC socket to phono plug', 'adapter', ['bnc-socket', 'phono-plug']),
+  'phono-joiner': single('phono joiner', 'adapter', ['phono-socket', 'phono-socket']),
+  'f-joiner': single('F joiner', 'adapter', ['f-socket', 'f-socket']),
   'transformer-75-300': single(
     '75/300 ohm transformer, F socket to lugs',
     'adapter',
-    'f-socket',
-    'spades',
-    {
-      ...TRANSFORMER,
-      impedanceOhm: [75, 300],
-    },
+    ['f-socket', 'spades'],
+    transforms(75, 300),
   ),
   'transformer-aerial-300': single(
     '75/300 ohm transformer, 9.52 mm socket to lugs',
     'adapter',
-    'iec-socket',
-    'spades',
-    {
-      ...TRANSFORMER,
-      impedanceOhm: [75, 300],
-    },
+    ['iec-socket', 'spades'],
+    transforms(75, 300),
   ),
   'transformer-300-75': single(
     '300/75 ohm transformer, screws to F plug',
     'adapter',
-    'screws',
-    'f-plug',
-    {
-      ...TRANSFORMER,
-      impedanceOhm: [300, 75],
-    },
+    ['screws', 'f-plug'],
+    transforms(300, 75),
   ),
   'japanese-21-pin': multi(
     'Japanese 21-pin to SCART adapter, rewired',

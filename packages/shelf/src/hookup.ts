@@ -44,6 +44,7 @@ export interface Question {
   readonly format: 1
   readonly source: { readonly unit: Uid; readonly playing: Key }
   readonly material: Material
+  /** `input`: the function by which it is to show the picture. */
   readonly display: { readonly unit: Uid; readonly input?: Key | undefined }
   readonly demands: Demands
   /** Units that must not be used. */

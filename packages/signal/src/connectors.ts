@@ -49,38 +49,42 @@ export interface ConnectorFact {
   readonly source: string
 }
 
-const fact = (
-  family: ConnectorFamily,
-  single: boolean,
-  impedanceOhm: ConnectorFact['impedanceOhm'],
-  standard: string,
-  source: string,
-): ConnectorFact => ({ family, single, impedanceOhm, standard, source })
+const fact =
+  (single: boolean) =>
+  (
+    family: ConnectorFamily,
+    impedanceOhm: ConnectorFact['impedanceOhm'],
+    standard: string,
+    source: string,
+  ): ConnectorFact => ({ family, single, impedanceOhm, standard, source })
+
+const single = fact(true)
+const multi = fact(false)
 
 const PRACTICE = 'common practice, no source'
 
 export const CONNECTOR_FACTS: Readonly<Record<ConnectorFamily, ConnectorFact>> = {
-  phono: fact('phono', true, 75, 'IEC 60603-14', 'IEC 60603-14; common practice'),
-  f: fact('f', true, 75, 'IEC 61169-24', 'IEC 61169-24; common practice'),
-  iec: fact('iec', true, 75, 'IEC 61169-2', 'IEC 61169-2; common practice'),
-  bnc: fact('bnc', true, 75, 'IEC 61169-8', 'IEC 61169-8; common practice'),
-  svideo4: fact('svideo4', false, 75, 'IEC 60933-5', 'pin list in three public sources'),
-  minidin7: fact('minidin7', false, 75, 'none', 'public adapter pages'),
-  scart: fact('scart', false, 75, 'IEC 60933-1', 'two published pin tables'),
-  jp21: fact('jp21', false, 75, 'EIAJ TTC-0003', 'from memory'),
-  dterm: fact('dterm', false, 75, 'EIAJ CP-4120', 'from memory'),
-  hd15: fact('hd15', false, 75, 'none', PRACTICE),
-  hdmi: fact('hdmi', false, 100, 'HDMI', PRACTICE),
-  dvi: fact('dvi', false, 100, 'DVI 1.0', 'from memory'),
-  de9: fact('de9', false, null, 'none', PRACTICE),
-  db23: fact('db23', false, 75, 'none', PRACTICE),
-  din5: fact('din5', false, null, 'IEC 60130-9', 'from memory'),
-  din6: fact('din6', false, 75, 'DIN 45482', 'from memory'),
-  din8: fact('din8', false, null, 'IEC 60130-9', 'from memory'),
-  jack35: fact('jack35', false, null, 'IEC 60603-11', PRACTICE),
-  multi: fact('multi', false, null, 'none', 'public connector library; common practice'),
-  optical: fact('optical', true, null, 'IEC 61754; JIS C 5974', 'from memory'),
-  dc: fact('dc', true, null, 'none', PRACTICE),
+  phono: single('phono', 75, 'IEC 60603-14', 'IEC 60603-14; common practice'),
+  f: single('f', 75, 'IEC 61169-24', 'IEC 61169-24; common practice'),
+  iec: single('iec', 75, 'IEC 61169-2', 'IEC 61169-2; common practice'),
+  bnc: single('bnc', 75, 'IEC 61169-8', 'IEC 61169-8; common practice'),
+  svideo4: multi('svideo4', 75, 'IEC 60933-5', 'pin list in three public sources'),
+  minidin7: multi('minidin7', 75, 'none', 'public adapter pages'),
+  scart: multi('scart', 75, 'IEC 60933-1', 'two published pin tables'),
+  jp21: multi('jp21', 75, 'EIAJ TTC-0003', 'from memory'),
+  dterm: multi('dterm', 75, 'EIAJ CP-4120', 'from memory'),
+  hd15: multi('hd15', 75, 'none', PRACTICE),
+  hdmi: multi('hdmi', 100, 'HDMI', PRACTICE),
+  dvi: multi('dvi', 100, 'DVI 1.0', 'from memory'),
+  de9: multi('de9', null, 'none', PRACTICE),
+  db23: multi('db23', 75, 'none', PRACTICE),
+  din5: multi('din5', null, 'IEC 60130-9', 'from memory'),
+  din6: multi('din6', 75, 'DIN 45482', 'from memory'),
+  din8: multi('din8', null, 'IEC 60130-9', 'from memory'),
+  jack35: multi('jack35', null, 'IEC 60603-11', PRACTICE),
+  multi: multi('multi', null, 'none', 'public connector library; common practice'),
+  optical: single('optical', null, 'IEC 61754; JIS C 5974', 'from memory'),
+  dc: single('dc', null, 'none', PRACTICE),
 }
 
 const isLoose = (c: Connector): c is LooseConnector =>

@@ -36,34 +36,42 @@ const BT470 = 'ITU-R BT.470 (through open configurations)'
 const HD = 'SMPTE 274M, 296M (from memory)'
 const COMPUTER = 'common practice, no source'
 
-const scan = (
-  id: ScanId,
-  totalLines: number,
-  fieldHz: number,
-  interlaced: boolean,
-  lineKhz: number,
-  source: string,
-): Scan => ({ id, totalLines, fieldHz, interlaced, lineKhz, source })
+/** The columns of the table below, in the units of {@link Scan}. */
+type Columns = readonly [totalLines: number, fieldHz: number, lineKhz: number]
+
+const scan =
+  (interlaced: boolean) =>
+  (id: ScanId, [totalLines, fieldHz, lineKhz]: Columns, source: string): Scan => ({
+    id,
+    totalLines,
+    fieldHz,
+    interlaced,
+    lineKhz,
+    source,
+  })
+
+const interlaced = scan(true)
+const progressive = scan(false)
 
 export const SCANS: Readonly<Record<ScanId, Scan>> = {
-  '525i60': scan('525i60', 525, 59.94, true, 15.734, M),
-  '262p60': scan('262p60', 262, 60.05, false, 15.734, COMPUTER),
-  '625i50': scan('625i50', 625, 50, true, 15.625, BT470),
-  '312p50': scan('312p50', 312, 50.08, false, 15.625, COMPUTER),
-  '525p60': scan('525p60', 525, 59.94, false, 31.47, M),
-  '625p50': scan('625p50', 625, 50, false, 31.25, BT470),
-  '750p60': scan('750p60', 750, 60, false, 45, HD),
-  '1125i60': scan('1125i60', 1125, 60, true, 33.75, HD),
-  '1125p60': scan('1125p60', 1125, 60, false, 67.5, HD),
-  '405i50': scan('405i50', 405, 50, true, 10.125, BT470),
-  '819i50': scan('819i50', 819, 50, true, 20.475, BT470),
-  'cga-15k7': scan('cga-15k7', 262, 59.9, false, 15.7, COMPUTER),
-  'mda-18k4': scan('mda-18k4', 370, 50, false, 18.43, COMPUTER),
-  'ega-21k8': scan('ega-21k8', 366, 59.7, false, 21.85, COMPUTER),
-  'mono-24k': scan('mono-24k', 440, 56.4, false, 24.8, COMPUTER),
-  'vga-31k-60': scan('vga-31k-60', 525, 59.94, false, 31.47, COMPUTER),
-  'vga-31k-70': scan('vga-31k-70', 449, 70.1, false, 31.47, COMPUTER),
-  'mono-35k7-71': scan('mono-35k7-71', 501, 71.2, false, 35.7, COMPUTER),
+  '525i60': interlaced('525i60', [525, 59.94, 15.734], M),
+  '262p60': progressive('262p60', [262, 60.05, 15.734], COMPUTER),
+  '625i50': interlaced('625i50', [625, 50, 15.625], BT470),
+  '312p50': progressive('312p50', [312, 50.08, 15.625], COMPUTER),
+  '525p60': progressive('525p60', [525, 59.94, 31.47], M),
+  '625p50': progressive('625p50', [625, 50, 31.25], BT470),
+  '750p60': progressive('750p60', [750, 60, 45], HD),
+  '1125i60': interlaced('1125i60', [1125, 60, 33.75], HD),
+  '1125p60': progressive('1125p60', [1125, 60, 67.5], HD),
+  '405i50': interlaced('405i50', [405, 50, 10.125], BT470),
+  '819i50': interlaced('819i50', [819, 50, 20.475], BT470),
+  'cga-15k7': progressive('cga-15k7', [262, 59.9, 15.7], COMPUTER),
+  'mda-18k4': progressive('mda-18k4', [370, 50, 18.43], COMPUTER),
+  'ega-21k8': progressive('ega-21k8', [366, 59.7, 21.85], COMPUTER),
+  'mono-24k': progressive('mono-24k', [440, 56.4, 24.8], COMPUTER),
+  'vga-31k-60': progressive('vga-31k-60', [525, 59.94, 31.47], COMPUTER),
+  'vga-31k-70': progressive('vga-31k-70', [449, 70.1, 31.47], COMPUTER),
+  'mono-35k7-71': progressive('mono-35k7-71', [501, 71.2, 35.7], COMPUTER),
 }
 
 /** Fields a second as a person says it: 50, 60 or 70. */

@@ -15,21 +15,29 @@ export function format(
   term: (code: string) => string = (code) => code,
 ): string {
   const worded = template.replace(/\[([A-Za-z]+)\]/g, (_, word: string) => localWord(word, locale))
-  return worded.replace(
-    /\{(?:([a-z]+):)?(\w+)(?:\|([^|{}]*)\|([^|{}]*))?\}/g,
-    (whole, family: string | undefined, name: string, one, many) => {
-      const value = details[name]
-      if (value === undefined) return whole
-      if (family !== undefined) {
-        const codes = String(value).split(', ')
-        return codes.map((code) => term(`${family}.${code}`)).join(', ')
-      }
-      if (one === undefined) return shown(value, locale)
-      const form = String(value === 1 ? one : many)
-      return form.replaceAll('#', shown(value, locale))
-    },
-  )
+  const fill = (slot: Slot): string | null => {
+    const value = details[slot.name]
+    if (value === undefined) return null
+    if (slot.family !== undefined) {
+      const codes = String(value).split(', ')
+      return codes.map((code) => term(`${slot.family}.${code}`)).join(', ')
+    }
+    if (slot.one === undefined) return shown(value, locale)
+    const form = String(value === 1 ? slot.one : slot.many)
+    return form.replaceAll('#', shown(value, locale))
+  }
+  return worded.replace(SLOT, (...match) => fill(match.at(-1) as Slot) ?? String(match[0]))
 }
+
+/** The parts of a slot of a template. */
+interface Slot {
+  readonly family?: string
+  readonly name: string
+  readonly one?: string
+  readonly many?: string
+}
+
+const SLOT = /\{(?:(?<family>[a-z]+):)?(?<name>\w+)(?:\|(?<one>[^|{}]*)\|(?<many>[^|{}]*))?\}/g
 
 /** Numbers by the language's rules, with a true minus sign; text as it is. */
 const shown = (value: string | number, locale: Locale): string =>

@@ -7,6 +7,9 @@ import type { SnapshotService } from '../snapshot/service'
 /** Finds hookups. Gives way to other requests at least every 50 ms. */
 export type Matcher = (snapshot: Snapshot, question: Question) => Promise<Answer> | Answer
 
+/** The shelf with everything on it that an answer may tell to buy. */
+export type Stocker = (snapshot: Snapshot) => Snapshot
+
 /** Judges a hookup without knowing how it was found. */
 export type Checker = (
   snapshot: Snapshot,
@@ -34,20 +37,15 @@ function unitFaults(
   snapshot: Snapshot,
   end: 'source' | 'display',
   uid: string,
-  part: {
-    readonly list: 'functions' | 'jacks'
-    readonly field: string
-    readonly key: string
-  } | null,
+  fn: { readonly field: string; readonly key: string } | null,
 ): FieldTrouble[] {
   const unit = snapshot.units.find((u) => u.uid === uid)
   const model = unit && snapshot.models[unit.model]
   if (!unit || model?.type !== 'device') return [fault(`${end}.unit`, 'unknown-reference', uid)]
-  if (!part) return []
-  const code = part.list === 'functions' ? 'unknown-function' : 'unknown-jack'
-  return fitted(model, unit.modifications)[part.list].some((p) => p.key === part.key)
+  if (!fn) return []
+  return fitted(model, unit.modifications).functions.some((f) => f.key === fn.key)
     ? []
-    : [fault(`${end}.${part.field}`, code, part.key)]
+    : [fault(`${end}.${fn.field}`, 'unknown-function', fn.key)]
 }
 
 /** Everything that a question names must be on this shelf. */
@@ -55,16 +53,12 @@ export function questionMustFit(snapshot: Snapshot, question: Question): void {
   const { source, display } = question
   const known = new Set(snapshot.units.map((u) => u.uid))
   const errors = [
-    ...unitFaults(snapshot, 'source', source.unit, {
-      list: 'functions',
-      field: 'playing',
-      key: source.playing,
-    }),
+    ...unitFaults(snapshot, 'source', source.unit, { field: 'playing', key: source.playing }),
     ...unitFaults(
       snapshot,
       'display',
       display.unit,
-      display.input === undefined ? null : { list: 'jacks', field: 'input', key: display.input },
+      display.input === undefined ? null : { field: 'input', key: display.input },
     ),
     ...question.avoid.flatMap((uid, i) =>
       known.has(uid) ? [] : [fault(`avoid.${i}`, 'unknown-reference', uid)],
@@ -81,21 +75,26 @@ export function questionMustFit(snapshot: Snapshot, question: Question): void {
 interface Needs {
   readonly snapshots: SnapshotService
   readonly findHookups: Matcher
+  readonly withParts: Stocker
   readonly checkHookup: Checker
   readonly onRefusal: OnRefusal
 }
 
-export function createAnswersService({ snapshots, findHookups, checkHookup, onRefusal }: Needs) {
+export function createAnswersService({ snapshots, findHookups, ...needs }: Needs) {
+  const stands = (snapshot: Snapshot, question: Question, hookup: Hookup): boolean => {
+    const { ok, findings } = needs.checkHookup(snapshot, question, hookup)
+    if (!ok) needs.onRefusal({ question, snapshot, hookup, findings })
+    return ok
+  }
+
   /** What the check refuses is never shown; when nothing else is left, that is said. */
   const checked = (snapshot: Snapshot, question: Question, answer: Answer): Answer => {
-    const stands = (hookup: Hookup): boolean => {
-      const { ok, findings } = checkHookup(snapshot, question, hookup)
-      if (!ok) onRefusal({ question, snapshot, hookup, findings })
-      return ok
-    }
-    const hookups = answer.hookups.filter(stands)
+    const hookups = answer.hookups.filter((h) => stands(snapshot, question, h))
     if (answer.hookups.length > 0 && hookups.length === 0) throw new AppError('answer-refused')
-    return { ...answer, hookups }
+    if (answer.purchases.length === 0) return { ...answer, hookups }
+    const stocked = needs.withParts(snapshot)
+    const purchases = answer.purchases.filter((p) => stands(stocked, question, p.hookup))
+    return { ...answer, hookups, purchases }
   }
 
   return {

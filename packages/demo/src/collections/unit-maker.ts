@@ -37,35 +37,39 @@ export interface UnitDraft extends Partial<
 > {
   readonly place: DemoKey | null
   readonly addedOn: string
-  readonly tests?: readonly Test[] | undefined
-  readonly label?: string | undefined
-  readonly serial?: string | undefined
-  readonly note?: string | undefined
+  readonly tests?: readonly Test[]
+  readonly label?: string
+  readonly serial?: string
+  readonly note?: string
 }
+
+/** What holds of a thing where nothing else is said. */
+const USUAL = {
+  working: 'untested',
+  holding: 'kept',
+  modifications: [],
+  stands: {},
+  remotePresent: false,
+  label: '',
+  serial: '',
+  note: '',
+} as const
 
 /** Makes the units of one collection; `mark` keeps their ids apart from those of other collections. */
 export function unitMaker(mark: string) {
   return (number: number, slug: DeviceSlug, draft: UnitDraft): DemoUnit => {
     const model = modelOf(slug)
     if (model.type !== 'device') throw new Error(`${slug} is not a device`)
-    const device = withAdded(model, draft.modifications ?? [])
-    for (const key of Object.keys(draft.stands ?? {})) controlOf(device, key)
+    const { tests = [], ...stated } = { ...USUAL, ...draft }
+    const device = withAdded(model, stated.modifications)
+    for (const key of Object.keys(stated.stands)) controlOf(device, key)
     return {
+      ...stated,
+      ...statesOf(device, tests),
       uid: demoUid(`u-${mark}-${number}`),
       number,
       model: modelUid(slug),
       quantity: 1,
-      working: draft.working ?? 'untested',
-      holding: draft.holding ?? 'kept',
-      place: draft.place,
-      ...statesOf(device, draft.tests ?? []),
-      modifications: draft.modifications ?? [],
-      stands: draft.stands ?? {},
-      remotePresent: draft.remotePresent ?? false,
-      label: draft.label ?? '',
-      serial: draft.serial ?? '',
-      note: draft.note ?? '',
-      addedOn: draft.addedOn,
     }
   }
 }
@@ -73,20 +77,15 @@ export function unitMaker(mark: string) {
 /** Makes the leads and adapters of one collection, all in one place. */
 export function drawerMaker(mark: string, place: DemoKey, addedOn: string) {
   return (number: number, slug: PieceSlug, quantity: number, note = ''): DemoUnit => ({
+    ...USUAL,
     uid: demoUid(`u-${mark}-${number}`),
     number,
     model: modelUid(slug),
     quantity,
     working: 'works',
-    holding: 'kept',
     place,
     forms: [],
     functions: [],
-    modifications: [],
-    stands: {},
-    remotePresent: false,
-    label: '',
-    serial: '',
     note,
     addedOn,
   })

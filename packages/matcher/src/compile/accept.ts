@@ -17,7 +17,14 @@ import {
   type SwitchVolt,
 } from '@coaxwain/signal'
 import { reachedBy, type Reached } from './carriers'
-import type { Sig } from './sig'
+import type { Core, CoreTable } from './signal'
+
+/** An input of a function of a device. */
+export interface Input {
+  readonly device: DeviceModel
+  readonly fn: ModelFunction
+  readonly jack: Key
+}
 
 /** What an input makes of a signal, and under which positions. */
 export interface Taken {
@@ -26,12 +33,12 @@ export interface Taken {
   /** The sound inside the signal comes out. */
   readonly heard: boolean
   readonly stand: Condition
-  /** The carriers that are still possible. */
-  readonly sig: Sig
+  /** The signal, with the carriers that are still possible. */
+  readonly core: Core
 }
 
 export interface Arriving {
-  readonly sig: Sig
+  readonly core: Core
   readonly lumaOnly: boolean
   readonly volts: readonly SwitchVolt[]
 }
@@ -47,49 +54,52 @@ const showsPicture = (listed: RfSystemId, sent: RfSystemId): boolean =>
  * The rows of a function that take a signal at one of its inputs. The first row that matches in full wins
  * under its positions; a row that matches but for the colour takes the picture in grey.
  */
-export function accept(
-  device: DeviceModel,
-  fn: ModelFunction,
-  jack: Key,
-  arriving: Arriving,
-  widen: (sig: Sig, carrier: Sig['carrier']) => Sig,
-): Taken[] {
-  const { sig } = arriving
-  const reached: readonly (Reached | null)[] = tunes(device, fn, sig)
+export function accept(input: Input, arriving: Arriving, cores: CoreTable): Taken[] {
+  const { fn } = input
   const rows = fn.accepts.length > 0 ? fn.accepts : ANYTHING
+  const reached: readonly (Reached | null)[] = tunes(input, arriving.core)
   return reached.flatMap((reach) =>
     rows.flatMap((row): Taken[] => {
-      if (row.jacks && !row.jacks.includes(jack)) return []
-      if (row.volts && !row.volts.every((v) => arriving.volts.includes(v))) return []
-      if (row.scans !== 'any' && !row.scans.includes(sig.scan)) return []
-      const systems = fn.tunedBy === undefined ? 'pass' : receives(row, sig)
-      if (systems === 'nothing') return []
-      const seen = colourOf(row, arriving)
-      if (seen === 'nothing') return []
-      const stand = together(row.while, reach?.while)
-      if (!stand) return []
-      return [
-        {
-          colour: seen === 'colour' && row.outcome !== 'monochrome',
-          reducedHeight: row.outcome === 'reduced-height',
-          heard: systems !== 'silent' && row.outcome !== 'silent',
-          stand,
-          sig: reach ? widen(sig, reach.carrier) : sig,
-        },
-      ]
+      const outcome = matches(row, input, arriving)
+      const stand = outcome && together(row.while, reach?.while)
+      if (!outcome || !stand) return []
+      const core = reach
+        ? cores.intern({ ...arriving.core, carrier: reach.carrier })
+        : arriving.core
+      return [{ ...outcome, stand, core }]
     }),
   )
 }
 
-function tunes(device: DeviceModel, fn: ModelFunction, sig: Sig): readonly (Reached | null)[] {
-  if (fn.tunedBy === undefined) return [null]
-  const control = controlOf(device, fn.tunedBy)
-  if (control.kind !== 'tuned-to' || !sig.carrier) return []
-  return reachedBy(control, sig.carrier)
+/** What one row makes of a signal; null when it is not for it. */
+function matches(
+  row: AcceptRow,
+  { fn, jack }: Input,
+  arriving: Arriving,
+): Pick<Taken, 'colour' | 'reducedHeight' | 'heard'> | null {
+  const { core, volts } = arriving
+  const meant =
+    (!row.jacks || row.jacks.includes(jack)) &&
+    (row.volts ?? []).every((v) => volts.includes(v)) &&
+    (row.scans === 'any' || row.scans.includes(core.scan))
+  const tuned = fn.tunedBy === undefined ? 'pass' : receives(row, core)
+  const seen = colourOf(row, arriving)
+  if (!meant || tuned === 'nothing' || seen === 'nothing') return null
+  return {
+    colour: seen === 'colour' && row.outcome !== 'monochrome',
+    reducedHeight: row.outcome === 'reduced-height',
+    heard: tuned !== 'silent' && row.outcome !== 'silent',
+  }
 }
 
-function receives(row: AcceptRow, sig: Sig): 'fine' | 'silent' | 'nothing' {
-  const carrier = sig.carrier
+function tunes({ device, fn }: Input, { carrier }: Core): readonly (Reached | null)[] {
+  if (fn.tunedBy === undefined) return [null]
+  const control = controlOf(device, fn.tunedBy)
+  if (control.kind !== 'tuned-to' || !carrier) return []
+  return reachedBy(control, carrier)
+}
+
+function receives(row: AcceptRow, { carrier }: Core): 'fine' | 'silent' | 'nothing' {
   if (!carrier) return 'nothing'
   if (carrier.digital) return row.digital?.includes(carrier.digital) ? 'fine' : 'nothing'
   const listed = row.systems ?? []
@@ -97,15 +107,16 @@ function receives(row: AcceptRow, sig: Sig): 'fine' | 'silent' | 'nothing' {
   return listed.some((s) => sameSoundSpacing(s, carrier.system)) ? 'fine' : 'silent'
 }
 
-function colourOf(row: AcceptRow, { sig, lumaOnly }: Arriving): 'colour' | 'grey' | 'nothing' {
-  if (lumaOnly || sig.colour === 'mono') return 'grey'
+function colourOf(row: AcceptRow, { core, lumaOnly }: Arriving): 'colour' | 'grey' | 'nothing' {
+  if (lumaOnly || core.colour === 'mono') return 'grey'
   if (row.colours === 'any') return 'colour'
-  if (isEncoded(sig.colour)) return decode(sig.colour, row.colours) === 'colour' ? 'colour' : 'grey'
-  return row.colours.includes(sig.colour) ? 'colour' : 'nothing'
+  if (isEncoded(core.colour))
+    return decode(core.colour, row.colours) === 'colour' ? 'colour' : 'grey'
+  return row.colours.includes(core.colour) ? 'colour' : 'nothing'
 }
 
 /** Lines of a system against the scan of what is to be sent by it. */
-export function systemCarries(system: RfSystemId, scan: Sig['scan']): boolean {
+export function systemCarries(system: RfSystemId, scan: Core['scan']): boolean {
   switch (RF_SYSTEMS[system].lines) {
     case 525:
       return scan === '525i60' || scan === '262p60'

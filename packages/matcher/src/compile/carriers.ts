@@ -1,7 +1,7 @@
 import type { Condition, DeviceModel, RfGive, TunedControl } from '@coaxwain/models'
 import { controlOf } from '@coaxwain/models'
 import { channelsIn, type Channel, type PlanPart } from '@coaxwain/signal'
-import type { CarrierSet } from './sig'
+import type { CarrierSet } from './signal'
 
 type NamedCarriers = Pick<CarrierSet, 'part' | 'names' | 'visionMhz'>
 

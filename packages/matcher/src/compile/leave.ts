@@ -8,23 +8,27 @@ import {
   type PictureGive,
   type RfGive,
 } from '@coaxwain/models'
-import {
-  FORM_MHZ,
-  poorer,
-  RF_SYSTEMS,
-  SOUND_RANK,
-  type Colour,
-  type PictureForm,
-  type ScanId,
-  type Sound,
-} from '@coaxwain/signal'
+import { FORM_MHZ, RF_SYSTEMS, type Colour, type PictureForm, type ScanId } from '@coaxwain/signal'
 import { systemCarries } from './accept'
 import { carriersOf } from './carriers'
-import { embedsSound, type Sig, type SigTable } from './sig'
+import { embedsSound, type Core, type CoreTable, type Passing } from './signal'
 
-/** A signal as it leaves a box, and the positions that make it so. */
-export interface Leaving {
-  readonly sig: Sig
+/** An output of a function of a device. */
+export interface Output {
+  readonly device: DeviceModel
+  readonly fn: ModelFunction
+  readonly give: Give
+}
+
+/** A picture as it is inside a box. */
+export interface Inside {
+  readonly core: Core
+  readonly colour: boolean
+  readonly lumaOnly: boolean
+}
+
+/** A picture as it leaves a box, and the positions that make it so. */
+export interface Leaving extends Passing {
   readonly stand: Condition
 }
 
@@ -38,16 +42,6 @@ export function wireMhz(form: PictureForm, colour: Colour): number {
   if (form !== 'composite') return FORM_MHZ[form]
   if (colour === 'secam') return 3.5
   return colour === 'pal' || colour === 'pal-n' || colour === 'pal-60' ? 5 : FORM_MHZ.composite
-}
-
-const lesserSound = (a: Sound, b: Sound): Sound => (SOUND_RANK[a] <= SOUND_RANK[b] ? a : b)
-
-export interface Inside {
-  readonly sig: Sig
-  readonly colour: boolean
-  readonly lumaOnly: boolean
-  /** Sound that goes out by this way, if it goes out inside the picture signal. */
-  readonly sound: Sound
 }
 
 /** Rows that a box offers: those that equal what arrives, else those of the same scan, else any. */
@@ -69,61 +63,66 @@ const preempts = (better: PictureGive, row: PictureGive): boolean => {
   )
 }
 
+const AS_IT_COMES: readonly PictureGive[] = [{ scan: 'same', colour: 'same' }]
+
 /** What leaves by one output of a function when a signal has been taken at its input. */
-export function leave(
-  device: DeviceModel,
-  fn: ModelFunction,
-  give: Give,
-  inside: Inside,
-  sigs: SigTable,
-): Leaving[] {
-  const form = jackOf(device, give.jack).form as PictureForm
-  const { sig } = inside
-  const pictures = offered(give.picture ?? [{ scan: 'same', colour: 'same' }], sig.scan, sig.colour)
-  return pictures.flatMap((row): Leaving[] => {
-    const scan = row.scan === 'same' ? sig.scan : row.scan
-    const colour = inside.lumaOnly ? 'mono' : colourAfter(row, inside)
-    const passed = {
-      ...sig,
-      form,
-      scan,
-      colour,
-      poorest: poorer(inside.lumaOnly ? 'luma-only' : sig.poorest, form),
-      lumaMhz: Math.min(sig.lumaMhz, fn.bandwidthMhz ?? Infinity, wireMhz(form, colour)),
-      shape: row.shape ?? sig.shape,
-      direct: sig.direct && fn.storesFields !== true && scan === sig.scan,
-      delayMs: sig.delayMs + (fn.delayMs ?? 0),
-      sound: embedsSound(form) ? inside.sound : ('none' as const),
-    }
-    if (!give.rf) {
-      const carrier = form === 'rf' ? sig.carrier : null
-      // RF cannot come out of a box that neither passes a carrier on nor makes one.
-      if (form === 'rf' && !carrier) return []
-      return [{ sig: sigs.intern({ ...passed, carrier }), stand: row.while ?? [] }]
-    }
-    return give.rf.flatMap((rf) => modulated(device, rf, row, passed, sigs))
-  })
+export function leave(output: Output, inside: Inside, cores: CoreTable): Leaving[] {
+  const { core } = inside
+  return offered(output.give.picture ?? AS_IT_COMES, core.scan, core.colour).flatMap((row) =>
+    leaveAs(row, output, inside, cores),
+  )
 }
 
-const colourAfter = (row: PictureGive, inside: Inside): Colour => {
-  if (row.colour === 'same') return inside.sig.colour
+function leaveAs(row: PictureGive, output: Output, inside: Inside, cores: CoreTable): Leaving[] {
+  const { device, fn, give } = output
+  const { core } = inside
+  const form = jackOf(device, give.jack).form as PictureForm
+  const scan = row.scan === 'same' ? core.scan : row.scan
+  const colour = colourAfter(row, inside)
+  const plain = { form, scan, colour, protection: core.protection, carrier: core.carrier }
+  const passing: Omit<Leaving, 'core' | 'stand'> = {
+    poorest: inside.lumaOnly ? 'luma-only' : form,
+    lumaMhz: Math.min(bandwidthOf(fn), wireMhz(form, colour)),
+    shape: row.shape ?? null,
+    direct: isDirect(fn) && scan === core.scan,
+    delayMs: fn.delayMs ?? 0,
+    sound: embedsSound(form) ? 'stereo' : 'none',
+  }
+  if (give.rf) return give.rf.flatMap((rf) => modulate(rf, { device, row, plain, passing }, cores))
+  // RF cannot come out of a box that neither passes a carrier on nor makes one.
+  if (form === 'rf' && !core.carrier) return []
+  const passed = cores.intern(form === 'rf' ? plain : { ...plain, carrier: null })
+  return [{ ...passing, core: passed, stand: row.while ?? [] }]
+}
+
+function colourAfter(row: PictureGive, inside: Inside): Colour {
+  if (inside.lumaOnly) return 'mono'
+  if (row.colour === 'same') return inside.core.colour
   return inside.colour ? row.colour : 'mono'
 }
 
-function modulated(
-  device: DeviceModel,
-  rf: RfGive,
-  row: PictureGive,
-  passed: Omit<Sig, 'id'>,
-  sigs: SigTable,
-): Leaving[] {
+const bandwidthOf = (fn: ModelFunction): number => fn.bandwidthMhz ?? Infinity
+
+const isDirect = (fn: ModelFunction): boolean => fn.storesFields !== true
+
+interface Unmodulated {
+  readonly device: DeviceModel
+  readonly row: PictureGive
+  readonly plain: Omit<Core, 'id' | 'kind'>
+  readonly passing: Omit<Leaving, 'core' | 'stand'>
+}
+
+function modulate(rf: RfGive, made: Unmodulated, cores: CoreTable): Leaving[] {
+  const { device, row, plain, passing } = made
   const stand = together(rf.while, row.while)
-  if (!stand || !systemCarries(rf.system, passed.scan)) return []
-  const sig = sigs.intern({
-    ...passed,
-    carrier: carriersOf(device, rf),
-    lumaMhz: Math.min(passed.lumaMhz, RF_SYSTEMS[rf.system].videoMhz),
-    sound: rf.sound === 'none' ? 'none' : lesserSound(rf.sound, passed.sound),
-  })
-  return [{ sig, stand }]
+  if (!stand || !systemCarries(rf.system, plain.scan)) return []
+  return [
+    {
+      ...passing,
+      core: cores.intern({ ...plain, carrier: carriersOf(device, rf) }),
+      lumaMhz: Math.min(passing.lumaMhz, RF_SYSTEMS[rf.system].videoMhz),
+      sound: rf.sound,
+      stand,
+    },
+  ]
 }

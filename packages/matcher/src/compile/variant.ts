@@ -91,26 +91,42 @@ export function variantOf(snapshot: Snapshot, unit: Unit, bought = false): Varia
   }
 }
 
+/** The same for units that can do the same. */
+export const variantKey = (device: DeviceModel, unit: Unit): string => {
+  const stuck = stuckControls(device, unit)
+  return unit.modifications.length === 0 && Object.keys(stuck).length === 0
+    ? unit.model
+    : JSON.stringify([unit.model, unit.modifications, stuck])
+}
+
 /** All units that may be lent, put together by what they can do. */
-export function compileVariants(
-  snapshot: Snapshot,
-  leftOut: ReadonlySet<Uid>,
-  bought: ReadonlySet<Uid>,
-): Variant[] {
+export function compileVariants(snapshot: Snapshot, bought: ReadonlySet<Uid>): Variant[] {
   const groups = new Map<string, Unit[]>()
   for (const unit of snapshot.units) {
     const model = snapshot.models[unit.model]
-    if (model?.type !== 'device' || leftOut.has(unit.uid) || !mayLend(unit)) continue
-    const key = JSON.stringify([unit.model, unit.modifications, stuckControls(model, unit)])
+    if (model?.type !== 'device' || !mayLend(unit)) continue
+    const key = variantKey(model, unit)
     const group = groups.get(key)
     if (group) group.push(unit)
     else groups.set(key, [unit])
   }
-  return [...groups].map(([id, units]) => ({
+  const variants = [...groups].map(([id, units]) => ({
     ...variantOf(snapshot, units[0] as Unit, bought.has(units[0]!.uid)),
     id,
     units,
   }))
+  return byContent(variants)
+}
+
+const contentOf = (device: DeviceModel): string =>
+  JSON.stringify({ ...device, maker: '', name: '', aliases: [] })
+
+/** Neither names nor the order on the shelf decide between equals. */
+function byContent(variants: readonly Variant[]): Variant[] {
+  return variants
+    .map((variant) => ({ variant, content: contentOf(variant.device) }))
+    .sort((a, b) => (a.content < b.content ? -1 : a.content > b.content ? 1 : 0))
+    .map(({ variant }) => variant)
 }
 
 /** What one way through a unit leans on: forms on ports, and functions. */

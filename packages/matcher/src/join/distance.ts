@@ -3,6 +3,23 @@ import { isSoundCircuit, mates, type Circuit, type Connector } from '@coaxwain/s
 import type { FacePort } from '../compile/face'
 import type { Drawer, Passage } from './drawer'
 
+/** An open end of what is laid out so far, and what is to come by it; no contact where any signal may. */
+export interface OpenEnd {
+  readonly connector: Connector
+  readonly contact: string | null
+  readonly circuit: Circuit
+}
+
+/** A contact of an input. */
+export interface Target {
+  readonly port: FacePort
+  readonly contact: string
+}
+
+type Tip = Omit<OpenEnd, 'circuit'>
+
+const nameOf = ({ connector, contact }: Tip): string => `${connector} ${contact ?? '*'}`
+
 /**
  * The fewest pieces between an open connector and a target, by connectors, contacts and circuits alone.
  * Stock, occupied plugs and impedance can only make it more, so it never cuts off a way that exists.
@@ -13,65 +30,61 @@ export class Distances {
   constructor(private readonly drawer: Drawer) {}
 
   /** Distance from an open end to a port; Infinity when no pieces at hand lead there. */
-  from(
-    connector: Connector,
-    contact: string | null,
-    circuit: Circuit,
-    target: FacePort,
-    at: string,
-  ): number {
-    const table = this.tableFor(circuit, target.connector, at)
-    const exact = table.get(`${connector} ${contact ?? '*'}`) ?? Infinity
-    return contact === null ? exact : Math.min(exact, table.get(`${connector} *`) ?? Infinity)
+  from(end: OpenEnd, target: Target): number {
+    const table = this.tableFor(end.circuit, target)
+    const exact = table.get(nameOf(end)) ?? Infinity
+    if (end.contact === null) return exact
+    return Math.min(exact, table.get(nameOf({ ...end, contact: null })) ?? Infinity)
   }
 
-  private tableFor(
-    circuit: Circuit,
-    connector: Connector,
-    contact: string,
-  ): ReadonlyMap<string, number> {
+  private tableFor(circuit: Circuit, { port, contact }: Target): ReadonlyMap<string, number> {
     const kind = isSoundCircuit(circuit) ? 'sound' : circuit
-    const key = `${kind} ${connector} ${contact}`
+    const key = `${kind} ${port.connector} ${contact}`
     const known = this.tables.get(key)
     if (known) return known
-    const made = this.spread(circuit, connector, contact)
+    const made = this.spread(circuit, { connector: port.connector, contact })
     this.tables.set(key, made)
     return made
   }
 
   /** Spreads backwards from the target: which open ends reach it with so many pieces. */
-  private spread(circuit: Circuit, connector: Connector, contact: string): Map<string, number> {
+  private spread(circuit: Circuit, target: Tip): Map<string, number> {
     const reached = new Map<string, number>()
-    const note = (c: Connector, at: string | null, steps: number): boolean => {
-      const key = `${c} ${at ?? '*'}`
-      if (reached.has(key)) return false
-      reached.set(key, steps)
-      return true
-    }
-    let edge: { connector: Connector; contact: string | null }[] = []
-    for (const c of this.drawer.connectors) {
-      if (!mates(c, connector)) continue
-      for (const at of [contact, null]) if (note(c, at, 0)) edge.push({ connector: c, contact: at })
-    }
+    const first = [target.contact, null].flatMap((contact) => this.onto(target.connector, contact))
+    let edge = fresh(first, reached, 0)
     for (let steps = 1; steps <= LIMITS.piecesInLink && edge.length > 0; steps++) {
-      const next: typeof edge = []
-      for (const turned of this.drawer.turned) {
-        if (!this.drawer.suits(turned.piece, circuit)) continue
-        for (const passage of turned.passages) {
-          const exit = turned.exit[passage.exitPlug]!.connector
-          if (!edge.some((e) => e.connector === exit && agrees(passage, e.contact))) continue
-          const entry = turned.entry[passage.plug]!.connector
-          for (const c of this.drawer.connectors) {
-            if (mates(c, entry) && note(c, passage.contact, steps)) {
-              next.push({ connector: c, contact: passage.contact })
-            }
-          }
-        }
-      }
-      edge = next
+      edge = fresh(this.behind(circuit, edge), reached, steps)
     }
     return reached
   }
+
+  private onto(connector: Connector, contact: string | null): Tip[] {
+    return this.drawer.connectors
+      .filter((c) => mates(c, connector))
+      .map((c) => ({ connector: c, contact }))
+  }
+
+  /** Open ends from which one piece more leads to the edge. */
+  private behind(circuit: Circuit, edge: readonly Tip[]): Tip[] {
+    const suited = this.drawer.turned.filter((t) => this.drawer.suits(t.piece, circuit))
+    return suited.flatMap(({ passages, entry, exit }) =>
+      passages
+        .filter((p) =>
+          edge.some((e) => e.connector === exit[p.exitPlug]!.connector && agrees(p, e.contact)),
+        )
+        .flatMap((p) => this.onto(entry[p.plug]!.connector, p.contact)),
+    )
+  }
+}
+
+/** Those not reached before, noted with their distance. */
+function fresh(tips: readonly Tip[], reached: Map<string, number>, steps: number): Tip[] {
+  return tips.filter((tip) => {
+    const name = nameOf(tip)
+    if (reached.has(name)) return false
+    reached.set(name, steps)
+    return true
+  })
 }
 
 const agrees = (passage: Passage, contact: string | null): boolean =>

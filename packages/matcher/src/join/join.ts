@@ -3,7 +3,7 @@ import type { SwitchVolt } from '@coaxwain/signal'
 import type { Face, FacePort } from '../compile/face'
 import { Distances } from './distance'
 import type { Drawer } from './drawer'
-import { Router, usageOf, type Routing, type Supply, type WantedWire } from './route'
+import { Router, usageOf, type Job, type Routing, type Supply, type WantedWire } from './route'
 import {
   lumaOnly,
   mismatched,
@@ -36,16 +36,16 @@ export interface Wanted {
   readonly sound: boolean
 }
 
+export const PICTURE: Wanted = { picture: true, sound: false }
+export const BOTH: Wanted = { picture: true, sound: true }
+
 /** Twice the pieces of one link, for pictures and sounds that need several leads. */
 const MOST_PIECES = 2 * LIMITS.piecesInLink
 
 /** Ways that need so many pieces more than the shortest are not sought in a well-filled drawer. */
 const SPARE_PIECES = 2
 
-interface Wish {
-  readonly out: Face
-  readonly into: Face
-  readonly wires: readonly WantedWire[]
+interface Wish extends Job {
   readonly picture: PictureMeeting | null
   readonly sound: SoundMeeting | null
 }
@@ -99,60 +99,58 @@ export class JoinTable {
   private work(out: Face, into: Face, wanted: Wanted): readonly Join[] {
     const sound = wanted.sound ? soundWires(out, into) : null
     if (wanted.sound && !sound) return []
-    if (!wanted.picture) return sound ? this.lay(out, into, sound.wires, null, sound.meeting) : []
-    const meetings: readonly (readonly [PictureMeeting, WantedWire[] | null])[] = [
+    const heard = { wires: sound?.wires ?? [], sound: sound?.meeting ?? null }
+    if (!wanted.picture) return this.lay({ out, into, ...heard, picture: null })
+    const pictures: readonly (readonly [PictureMeeting, WantedWire[] | null])[] = [
       ['whole', wholePicture(out, into)],
       ['luma-only', lumaOnly(out, into)],
     ]
-    return meetings.flatMap(([meeting, wires]) =>
+    return pictures.flatMap(([picture, wires]) =>
       wires
-        ? this.lay(out, into, [...wires, ...(sound?.wires ?? [])], meeting, sound?.meeting ?? null)
+        ? this.lay({ out, into, wires: [...wires, ...heard.wires], picture, sound: heard.sound })
         : [],
     )
   }
 
   /** With what is there if that does it; else with something bought. */
-  private lay(
-    out: Face,
-    into: Face,
-    wires: readonly WantedWire[],
-    picture: PictureMeeting | null,
-    sound: SoundMeeting | null,
-  ): Join[] {
-    const wish = { out, into, wires, picture, sound }
+  private lay(wish: Wish): Join[] {
     const own = this.layFrom(this.owned, wish)
     const enough = this.owned === this.all || own.some((j) => j.scarce.size === 0)
     return enough ? own : [...own, ...this.layFrom(this.all, wish).filter((j) => j.bought > 0)]
   }
 
   private layFrom(supply: Supply, wish: Wish): Join[] {
-    const { out, into, wires, sound } = wish
-    if (sound === 'fold' && !supply.drawer.mixers) return []
-    const each = wires.map((w) => this.leastFor(supply, wish, w))
+    const folds = wish.sound === 'fold'
+    if (folds && !supply.drawer.mixers) return []
+    const each = wish.wires.map((w) => this.leastFor(supply, wish, w))
     const least = Math.max(...each)
     if (least === Infinity) return []
     // Every wire by pieces of its own is the most that can be needed; a mixing piece is one more.
-    const most = Math.min(
-      MOST_PIECES,
-      each.reduce((sum, n) => sum + n, sound === 'fold' ? 1 : 0),
-    )
-    const shopping = supply !== this.owned
+    const sum = each.reduce((all, n) => all + n, folds ? 1 : 0)
+    const most = Math.max(least, Math.min(MOST_PIECES, sum))
     let kept: Join[] = []
-    for (let pieces = least; pieces <= Math.max(most, least) + this.slack(kept); pieces++) {
-      if (kept[0] && (shopping || pieces > kept[0].pieces + SPARE_PIECES)) {
-        this.capped ||= !shopping && this.scarce.size > 0 && supply.drawer.total > MOST_PIECES
-        if (shopping || supply.drawer.total > MOST_PIECES) break
-      }
-      new Router(supply, out, into, wires, pieces, (routing) => {
+    for (let pieces = least; pieces <= most + this.slack(kept); pieces++) {
+      if (this.isEnough(kept, pieces, supply)) break
+      new Router(supply, wish, pieces, (routing) => {
         const join = this.judge(wish, routing)
         if (join && !kept.some((k) => noWorse(k, join))) {
           kept = [...kept.filter((k) => !noWorse(join, k)), join]
         }
-        return settled(kept, out)
+        return settled(kept, wish.out)
       }).run()
-      if (settled(kept, out)) break
+      if (settled(kept, wish.out)) break
     }
     return kept
+  }
+
+  /** Longer ways are not sought in a well-filled drawer, nor in a shop. */
+  private isEnough([first]: readonly Join[], pieces: number, supply: Supply): boolean {
+    const filled = supply.drawer.total > MOST_PIECES
+    if (!first) return false
+    if (supply !== this.owned) return true
+    if (pieces <= first.pieces + SPARE_PIECES) return false
+    this.capped ||= this.scarce.size > 0 && filled
+    return filled
   }
 
   /** Round a scarce piece or a missing voltage it may take longer. */
@@ -169,7 +167,7 @@ export class JoinTable {
     if (known !== undefined) return known
     let least = Infinity
     for (let pieces = 0; pieces <= LIMITS.piecesInLink && least === Infinity; pieces++) {
-      new Router(supply, out, into, [wire], pieces, () => {
+      new Router(supply, { out, into, wires: [wire] }, pieces, () => {
         least = pieces
         return true
       }).run()

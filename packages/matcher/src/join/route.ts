@@ -56,6 +56,13 @@ export interface Supply {
   readonly single: Map<string, number>
 }
 
+/** Wires that are to come about between two faces. */
+export interface Job {
+  readonly out: Face
+  readonly into: Face
+  readonly wires: readonly WantedWire[]
+}
+
 interface Open {
   readonly connector: Connector
   readonly mount: 'chassis' | 'lead'
@@ -78,16 +85,21 @@ export class Router {
   private readonly drawer: Drawer
   private readonly distances: Distances
 
+  private readonly out: Face
+  private readonly into: Face
+  private readonly wires: readonly WantedWire[]
+
   constructor(
     supply: Supply,
-    private readonly out: Face,
-    private readonly into: Face,
-    private readonly wires: readonly WantedWire[],
+    job: Job,
     private readonly pieces: number,
     private readonly found: (routing: Routing) => boolean,
   ) {
     this.drawer = supply.drawer
     this.distances = supply.distances
+    this.out = job.out
+    this.into = job.into
+    this.wires = job.wires
   }
 
   run(): void {
@@ -168,11 +180,8 @@ export class Router {
   /** The target cannot be reached with the pieces that a link may still have. */
   private tooFar(wire: WantedWire, target: FacePort, open: Open): boolean {
     const left = this.distances.from(
-      open.connector,
-      open.contact,
-      wire.circuit,
-      target,
-      wire.toContact,
+      { ...open, circuit: wire.circuit },
+      { port: target, contact: wire.toContact },
     )
     return open.hops.length + Math.max(left, 1) > LIMITS.piecesInLink
   }
@@ -232,12 +241,10 @@ export class Router {
     const target = this.into.ports[wire.toPort] as FacePort
     return turned.passages.some((p) => {
       if (p.plug !== plug || !enters(p, open.contact)) return false
+      const { connector } = turned.exit[p.exitPlug]!
       const left = this.distances.from(
-        turned.exit[p.exitPlug]!.connector,
-        p.exitContact ?? open.contact,
-        wire.circuit,
-        target,
-        wire.toContact,
+        { connector, contact: p.exitContact ?? open.contact, circuit: wire.circuit },
+        { port: target, contact: wire.toContact },
       )
       return open.hops.length + 1 + left <= LIMITS.piecesInLink
     })
@@ -250,52 +257,63 @@ export class Router {
 
   private through(index: number, at: number, plug: number, open: Open): void {
     const { turned } = this.instances[at] as Instance
-    const drawn = this.drawer.pieces[turned.piece]
-    const wire = this.wires[index] as WantedWire
-    if (!drawn || !meantFor(drawn.piece.meantFor, wire.circuit)) return
-    if (open.hops.length >= LIMITS.piecesInLink || open.hops.some((h) => h.instance === at)) return
-    const lead = drawn.piece.kind === 'lead' ? 1 : 0
-    if (open.leads + lead > LIMITS.leadsInLink) return
-    const ohm = this.ohmAfter(turned, plug, open.ohm, wire.circuit)
-    if (ohm === null) return
+    const after = this.insidePiece(index, at, plug, open)
+    if (!after) return
     for (const passage of turned.passages) {
       if (passage.plug !== plug || !enters(passage, open.contact)) continue
-      if (this.taken(index, at, passage, drawn.piece.mixes, open.hops)) continue
+      if (this.taken(index, at, passage, open.hops)) continue
       this.follow(
         index,
         { at: 'piece', instance: at, plug: passage.exitPlug },
         {
+          ...after,
           connector: turned.exit[passage.exitPlug]!.connector,
-          mount: open.mount === 'lead' || lead > 0 ? 'lead' : open.mount,
           contact: passage.exitContact ?? open.contact,
-          ohm,
           hops: [...open.hops, { instance: at, inPlug: plug, outPlug: passage.exitPlug }],
-          leads: open.leads + lead,
         },
       )
     }
   }
 
-  /** Two wires never share a way through a piece, nor a contact of its exit unless it is made to mix them. */
-  private taken(
+  /** What comes of a wire by going into a piece; null where the piece is not made for it. */
+  private insidePiece(
     index: number,
     at: number,
-    passage: Passage,
-    mixes: boolean,
-    path: readonly Hop[],
-  ): boolean {
+    plug: number,
+    open: Open,
+  ): Pick<Open, 'mount' | 'ohm' | 'leads'> | null {
+    const { turned } = this.instances[at] as Instance
+    const { circuit } = this.wires[index] as WantedWire
+    const piece = this.drawer.pieces[turned.piece]?.piece
+    if (!piece || !meantFor(piece.meantFor, circuit)) return null
+    if (open.hops.length >= LIMITS.piecesInLink || open.hops.some((h) => h.instance === at))
+      return null
+    const leads = open.leads + (piece.kind === 'lead' ? 1 : 0)
+    const ohm = this.ohmAfter(turned, plug, open.ohm, circuit)
+    if (leads > LIMITS.leadsInLink || ohm === null) return null
+    return { mount: leads > 0 ? 'lead' : open.mount, ohm, leads }
+  }
+
+  /** Two wires never share a way through a piece, nor a contact of its exit unless it is made to mix them. */
+  private taken(index: number, at: number, passage: Passage, path: readonly Hop[]): boolean {
     const wire = this.wires[index] as WantedWire
+    const mixes = this.mixes(at) && isSoundCircuit(wire.circuit)
     return this.hops.slice(0, index).some((hops, other) =>
       hops.some((hop) => {
         if (hop.instance !== at || hop.outPlug !== passage.exitPlug) return false
         if (this.mixedBefore(hops, at, path)) return false
-        const sameEnd =
-          (this.wires[other] as WantedWire).toPort === wire.toPort &&
-          (this.wires[other] as WantedWire).toContact === wire.toContact
-        const single = passage.exitContact === 'pin'
-        return (single || sameEnd) && !(mixes && isSoundCircuit(wire.circuit))
+        return (passage.exitContact === 'pin' || this.sameEnd(wire, other)) && !mixes
       }),
     )
+  }
+
+  private sameEnd(wire: WantedWire, other: number): boolean {
+    const { toPort, toContact } = this.wires[other] as WantedWire
+    return toPort === wire.toPort && toContact === wire.toContact
+  }
+
+  private mixes(instance: number): boolean {
+    return this.drawer.pieces[this.instances[instance]!.turned.piece]?.piece.mixes === true
   }
 
   /** Both wires came out of one mixing piece, and have been one ever since. */
@@ -303,7 +321,7 @@ export class Router {
     return path.some(
       (mine) =>
         mine.instance !== at &&
-        this.drawer.pieces[this.instances[mine.instance]!.turned.piece]?.piece.mixes === true &&
+        this.mixes(mine.instance) &&
         other.some((o) => o.instance === mine.instance && o.outPlug === mine.outPlug),
     )
   }

@@ -1,4 +1,4 @@
-import { arrivalAt, isSingle, mates, type Circuit, type SoundCircuit } from '@coaxwain/signal'
+import { arrivalAt, isSingle, mates, type Circuit } from '@coaxwain/signal'
 import type { Face, FaceContact } from '../compile/face'
 import type { WantedWire } from './route'
 
@@ -101,30 +101,35 @@ export interface WantedSound {
   readonly meeting: SoundMeeting
 }
 
+type SoundContacts = Partial<Record<Circuit, FaceContact>>
+
+const soundContacts = (face: Face): SoundContacts =>
+  Object.fromEntries(face.sound.map((c) => [c.circuit, c]))
+
 /** The wires that bring sound from one sound end to another, or null when they do not meet. */
 export function soundWires(out: Face, into: Face): WantedSound | null {
-  const from = new Map(out.sound.map((c) => [c.circuit as SoundCircuit, c]))
-  const to = new Map(into.sound.map((c) => [c.circuit as SoundCircuit, c]))
-  if ([...from.values()].some((c) => c.level === 'loudspeaker')) return null
-  const left = from.get('audio-l')
-  const right = from.get('audio-r')
-  const mono = from.get('audio-mono')
-  const toLeft = to.get('audio-l')
-  const toRight = to.get('audio-r')
-  const toMono = to.get('audio-mono')
-  if (left && right) {
-    if (toLeft && toRight)
-      return { wires: [wire(left, toLeft), wire(right, toRight)], meeting: 'both' }
-    return toMono && !toLeft && !toRight
-      ? { wires: [wire(left, toMono), wire(right, toMono)], meeting: 'fold' }
-      : null
-  }
+  if (out.sound.some((c) => c.level === 'loudspeaker')) return null
+  const from = soundContacts(out)
+  const to = soundContacts(into)
+  const { 'audio-l': left, 'audio-r': right } = from
+  return left && right ? stereoWires(left, right, to) : oneWire(from, to)
+}
+
+function stereoWires(left: FaceContact, right: FaceContact, to: SoundContacts): WantedSound | null {
+  const { 'audio-l': toLeft, 'audio-r': toRight, 'audio-mono': toMono } = to
+  if (toLeft && toRight)
+    return { wires: [wire(left, toLeft), wire(right, toRight)], meeting: 'both' }
+  return toMono && !toLeft && !toRight
+    ? { wires: [wire(left, toMono), wire(right, toMono)], meeting: 'fold' }
+    : null
+}
+
+function oneWire(from: SoundContacts, to: SoundContacts): WantedSound | null {
+  const { 'audio-l': toLeft, 'audio-r': toRight, 'audio-mono': toMono } = to
   if (toLeft && toRight) return null
-  if (mono) {
-    const target = toMono ?? toLeft
-    return target ? { wires: [wire(mono, target)], meeting: 'mono' } : null
-  }
-  const one = left ?? right
-  const target = toMono ?? (left ? toLeft : toRight)
-  return one && target ? { wires: [wire(one, target)], meeting: 'one' } : null
+  const mono = from['audio-mono']
+  const one = mono ?? from['audio-l'] ?? from['audio-r']
+  const own = from['audio-r'] && !mono ? toRight : toLeft
+  const target = toMono ?? own
+  return one && target ? { wires: [wire(one, target)], meeting: mono ? 'mono' : 'one' } : null
 }

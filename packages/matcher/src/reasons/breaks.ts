@@ -12,7 +12,7 @@ import {
   type ScanId,
 } from '@coaxwain/signal'
 import { reachedBy } from '../compile/carriers'
-import type { Sig } from '../compile/sig'
+import type { Core } from '../compile/signal'
 import type { Way } from '../compile/way'
 import { stopsAt } from '../search/protection'
 
@@ -29,29 +29,32 @@ export const obstacle = (
 ): Obstacle => ({ code, details, harmful: false, lookalike: false, ...flags })
 
 /** Every rule that a signal breaks at an input, nearest cause first; empty when it is taken. */
-export function breaksAt(way: Way, sig: Sig, ends: Ends): Obstacle[] {
+export function breaksAt(way: Way, core: Core, ends: Ends): Obstacle[] {
   const { device } = way.variant
   const found: Obstacle[] = []
-  if (stopsAt(way, sig.protection)) {
-    found.push(obstacle(sig.protection === 'hdcp' ? 'no-handshake' : 'level-control', { ...ends }))
+  if (stopsAt(way, core.protection)) {
+    found.push(obstacle(core.protection === 'hdcp' ? 'no-handshake' : 'level-control', { ...ends }))
   }
   const deflection = device.display?.deflection
-  if (way.fn.kind === 'shows' && deflection) found.push(...deflectionBreaks(deflection, sig, ends))
+  if (way.fn.kind === 'shows' && deflection) found.push(...deflectionBreaks(deflection, core, ends))
   if (found.some((o) => o.code === 'line-rate')) return found
-  if (way.fn.tunedBy !== undefined) return onceEach([...found, ...tunerBreaks(way, sig, ends)])
-  if (sig.form !== way.into?.face.form) return found
-  return onceEach([...found, ...rowBreaks(way, sig, ends)])
+  if (way.fn.tunedBy !== undefined) return onceEach([...found, ...tunerBreaks(way, core, ends)])
+  if (core.form !== way.into?.face.form) return found
+  return onceEach([...found, ...rowBreaks(way, core, ends)])
 }
 
 const onceEach = (found: readonly Obstacle[]): Obstacle[] =>
   found.filter((o, i) => found.findIndex((x) => x.code === o.code) === i)
 
-function deflectionBreaks(deflection: Deflection, sig: Sig, ends: Ends): Obstacle[] {
-  const { lineKhz, fieldHz } = SCANS[sig.scan]
+function deflectionBreaks(deflection: Deflection, core: Core, ends: Ends): Obstacle[] {
+  const { lineKhz, fieldHz } = SCANS[core.scan]
   const near = nearest(deflection.lineKhz.flat(), lineKhz)
   // The two television rates differ by 0.7 %: what stops such a picture is its field rate.
   const television = Math.abs(near - lineKhz) / lineKhz < 0.02
-  if (!followsLine(deflection, sig.scan) && !(television && !followsField(deflection, sig.scan))) {
+  if (
+    !followsLine(deflection, core.scan) &&
+    !(television && !followsField(deflection, core.scan))
+  ) {
     return [
       obstacle(
         'line-rate',
@@ -60,7 +63,7 @@ function deflectionBreaks(deflection: Deflection, sig: Sig, ends: Ends): Obstacl
       ),
     ]
   }
-  if (followsField(deflection, sig.scan)) return []
+  if (followsField(deflection, core.scan)) return []
   return [
     obstacle('field-rate', {
       ...ends,
@@ -73,8 +76,8 @@ function deflectionBreaks(deflection: Deflection, sig: Sig, ends: Ends): Obstacl
 const nearest = (values: readonly number[], to: number): number =>
   values.reduce((best, v) => (Math.abs(v - to) < Math.abs(best - to) ? v : best), values[0] ?? 0)
 
-function tunerBreaks(way: Way, sig: Sig, ends: Ends): Obstacle[] {
-  const { carrier } = sig
+function tunerBreaks(way: Way, core: Core, ends: Ends): Obstacle[] {
+  const { carrier } = core
   if (!carrier) return [obstacle('not-a-channel', { ...ends })]
   const rows = way.fn.accepts
   const systems = rows.flatMap((r) => r.systems ?? [])
@@ -104,28 +107,28 @@ function tunerBreaks(way: Way, sig: Sig, ends: Ends): Obstacle[] {
       }),
     )
   }
-  return [...found, ...scanBreaks(rows, sig, ends), ...colourBreaks(rows, sig, ends)]
+  return [...found, ...scanBreaks(rows, core, ends), ...colourBreaks(rows, core, ends)]
 }
 
-function rowBreaks(way: Way, sig: Sig, ends: Ends): Obstacle[] {
+function rowBreaks(way: Way, core: Core, ends: Ends): Obstacle[] {
   const rows = way.fn.accepts.filter((r) => !r.jacks || r.jacks.includes(way.in ?? ''))
   if (rows.length === 0) return []
   const voltless = rows.filter((r) => !r.volts)
-  const scan = scanBreaks(rows, sig, ends)
-  if (scan.length > 0) return [...scan, ...colourBreaks(rows, sig, ends)]
+  const scan = scanBreaks(rows, core, ends)
+  if (scan.length > 0) return [...scan, ...colourBreaks(rows, core, ends)]
   if (voltless.length === 0) return [obstacle('switching-voltage', { ...ends })]
-  return colourBreaks(rows, sig, ends)
+  return colourBreaks(rows, core, ends)
 }
 
 const lists = (row: AcceptRow, scan: ScanId): boolean =>
   row.scans === 'any' || row.scans.includes(scan)
 
-function scanBreaks(rows: readonly AcceptRow[], sig: Sig, ends: Ends): Obstacle[] {
-  if (rows.some((r) => lists(r, sig.scan))) return []
+function scanBreaks(rows: readonly AcceptRow[], core: Core, ends: Ends): Obstacle[] {
+  if (rows.some((r) => lists(r, core.scan))) return []
   const wanted = rows.flatMap((r) => (r.scans === 'any' ? [] : r.scans))
   const [first] = wanted
   if (!first) return []
-  const own = SCANS[sig.scan]
+  const own = SCANS[core.scan]
   if (!wanted.some((s) => Math.abs(SCANS[s].lineKhz - own.lineKhz) < 0.2)) {
     const at = nearest(
       wanted.map((s) => SCANS[s].lineKhz),
@@ -142,25 +145,27 @@ function scanBreaks(rows: readonly AcceptRow[], sig: Sig, ends: Ends): Obstacle[
       obstacle('field-rate', { ...ends, fromHz: Math.round(own.fieldHz), toHz: Math.round(at) }),
     ]
   }
-  return [obstacle('scan', { ...ends, scan: sig.scan })]
+  return [obstacle('scan', { ...ends, scan: core.scan })]
 }
 
 /** The colour of an encoded signal that no row decodes. */
-function colourBreaks(rows: readonly AcceptRow[], sig: Sig, ends: Ends): Obstacle[] {
-  if (sig.colour === 'mono' || rows.some((r) => r.colours === 'any')) return []
+function colourBreaks(rows: readonly AcceptRow[], core: Core, ends: Ends): Obstacle[] {
+  if (core.colour === 'mono' || rows.some((r) => r.colours === 'any')) return []
   const listed = rows.flatMap((r) => (r.colours === 'any' ? [] : r.colours))
-  if (isEncoded(sig.colour)) {
-    return decode(sig.colour, listed) === 'colour'
+  if (isEncoded(core.colour)) {
+    return decode(core.colour, listed) === 'colour'
       ? []
       : [
           obstacle('colour', {
             ...ends,
-            colour: sig.colour,
+            colour: core.colour,
             listed: [...new Set(listed)].join(', '),
           }),
         ]
   }
-  return listed.includes(sig.colour) ? [] : [obstacle('not-taken', { ...ends, colour: sig.colour })]
+  return listed.includes(core.colour)
+    ? []
+    : [obstacle('not-taken', { ...ends, colour: core.colour })]
 }
 
 /** A display that cannot serve a light gun: it looks for a spot on a tube drawn at the source's own rate. */

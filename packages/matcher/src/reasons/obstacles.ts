@@ -2,14 +2,16 @@ import type { Obstacle } from '@coaxwain/shelf'
 import { fits, mates } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
 import type { Way } from '../compile/way'
-import type { JoinTable } from '../join/join'
+import { PICTURE, type Join, type JoinTable } from '../join/join'
 import type { Expander } from '../search/expand'
 import type { Label } from '../search/label'
+import type { MovesFrom } from '../search/outlook'
 import { breaksAt, gunBreaks, obstacle, type Ends } from './breaks'
 
 export interface ReasonTools {
   readonly joins: JoinTable
   readonly expander: Expander
+  readonly moves: MovesFrom
   /** Ways through boxes. */
   readonly boxes: readonly Way[]
   readonly lightGun: boolean
@@ -27,8 +29,6 @@ const MOST_REASONS = 6
 const MOST_BESIDE = 3
 /** A way that is not taken may break so many rules and still be worth a word. */
 const MOST_BROKEN = 2
-
-const PICTURE = { picture: true, sound: false }
 
 interface Attempt {
   readonly broken: readonly Obstacle[]
@@ -50,42 +50,82 @@ export function obstaclesBetween(
   ends: readonly Way[],
   tools: ReasonTools,
 ): Obstacle[] {
-  const direct = starts.flatMap((label) => ends.map((end) => attempt(label, end, tools)))
-  const throughBox = starts.flatMap((label) =>
-    tools.boxes.flatMap((box) => throughOne(label, box, ends, tools)),
-  )
-  const backwards = tools.whole
-    ? []
-    : starts.flatMap((label) => tools.boxes.flatMap((box) => turnedRound(label, box, ends, tools)))
-  const all = [...direct, ...throughBox, ...backwards].filter(
+  const pictures = onePerPicture(starts)
+  const boxes = onePerWay(leadingOn(tools, ends))
+  const passive = tools.whole ? [] : onePerWay(tools.boxes.filter((b) => b.fn.power === 'none'))
+  const tried = pictures.flatMap((label) => [
+    ...ends.map((end) => attempt(label, end, tools)),
+    ...boxes.flatMap((box) => throughOne(label, box, ends, tools)),
+    ...passive.flatMap((box) => turnedRound(label, box, ends, tools)),
+  ])
+  const broken = tried.filter(
     (a): a is Attempt => a !== null && a.broken.length > 0 && rulesOf(a).length <= MOST_BROKEN,
   )
-  const { best } = tools
-  if (all.length === 0 && !best)
-    return distinct(starts.flatMap((l) => ends.flatMap((e) => apart(l, e))))
-  const worth = best
-    ? all.filter((a) => easier(a, best) && looksRight(a))
-    : all.sort(
-        (a, b) => a.broken.length - b.broken.length || a.boxes - b.boxes || a.pieces - b.pieces,
-      )
-  const found = worth.flatMap((a) => a.broken).filter((o) => !best || o.code !== 'no-lead')
-  const told = best ? found.map((o) => ({ ...o, lookalike: true })) : found
-  const harmFirst = [...told.filter((o) => o.harmful), ...told.filter((o) => !o.harmful)]
-  return distinct(harmFirst, best !== null).slice(0, best ? MOST_BESIDE : MOST_REASONS)
+  if (tools.best) return beside(broken, tools.best)
+  if (broken.length === 0)
+    return distinct(pictures.flatMap((l) => ends.flatMap((e) => apart(l, e))))
+  const nearest = broken.sort(
+    (a, b) => a.broken.length - b.broken.length || a.boxes - b.boxes || a.pieces - b.pieces,
+  )
+  return distinct(harmFirst(nearest.flatMap((a) => a.broken))).slice(0, MOST_REASONS)
+}
+
+/** What looks easier than the answer and is not. */
+function beside(broken: readonly Attempt[], best: NonNullable<ReasonTools['best']>): Obstacle[] {
+  const found = broken
+    .filter((a) => easier(a, best) && looksRight(a))
+    .flatMap((a) => a.broken)
+    .filter((o) => o.code !== 'no-lead')
+    .map((o) => ({ ...o, lookalike: true }))
+  return distinct(harmFirst(found), true).slice(0, MOST_BESIDE)
+}
+
+const harmFirst = (all: readonly Obstacle[]): Obstacle[] => [
+  ...all.filter((o) => o.harmful),
+  ...all.filter((o) => !o.harmful),
+]
+
+/** What becomes of the sound is no reason, so that each picture of each socket is tried once. */
+const onePerPicture = (starts: readonly Label[]): Label[] => [
+  ...new Map(starts.map((l) => [`${l.way.out?.jack} ${l.sig.core.id}`, l])).values(),
+]
+
+/** Each picture through each box once. */
+const onePerWay = (ways: readonly Way[]): Way[] => [
+  ...new Map(ways.map((w) => [`${w.variant.id} ${w.fn.key} ${w.in} ${w.out?.jack}`, w])).values(),
+]
+
+/** Boxes of which something plugs into the display. */
+function leadingOn({ boxes, joins }: ReasonTools, ends: readonly Way[]): Way[] {
+  const known = new Map<Face, boolean>()
+  const plugs = (out: Face): boolean =>
+    ends.some(
+      ({ into }) =>
+        into !== null &&
+        (joins.between(out, into.face, PICTURE).length > 0 ||
+          wrongWiring(out, into.face) ||
+          joins.wrongWires(out, into.face)),
+    )
+  return boxes.filter(({ from }) => {
+    if (!from) return false
+    const leadsOn = known.get(from.face) ?? plugs(from.face)
+    known.set(from.face, leadsOn)
+    return leadsOn
+  })
 }
 
 /** Nothing at hand can even be plugged together: the forms differ, and perhaps the rates as well. */
 function apart(label: Label, end: Way): Obstacle[] {
   const ends = endsOf(label.way, end)
   const rates = ratesAt(end, label, ends)
-  const forms = { from: label.sig.form, to: end.into?.face.form ?? '' }
+  const forms = { from: label.sig.core.form, to: end.into?.face.form ?? '' }
   return [...rates, obstacle('no-common-form', { ...ends, fromForm: forms.from, toForm: forms.to })]
 }
 
 const RATES = ['line-rate', 'field-rate']
 
 const ratesAt = (end: Way, label: Label, ends: Ends): Obstacle[] =>
-  breaksAt(end, label.sig, ends).filter((o) => RATES.includes(o.code))
+  breaksAt(end, label.sig.core, ends).filter((o) => RATES.includes(o.code))
 
 /** One rule stands in the way; a lead that is not at hand is no rule. */
 const looksRight = (a: Attempt): boolean => {
@@ -112,41 +152,65 @@ function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
   const out = label.way.from?.face
   const into = way.into?.face
   if (!out || !into) return null
-  const ends = endsOf(label.way, way)
-  const cost = { boxes: label.boxes, pieces: label.pieces }
-  if (wrongWiring(out, into)) {
-    const flags = { harmful: true, lookalike: true }
-    return { ...cost, broken: [obstacle('japanese-21-pin', { ...ends }, flags)] }
-  }
   const [join] = tools.joins.between(out, into, PICTURE)
-  if (!join && out.form !== into.form) {
-    if (!tools.joins.wrongWires(out, into)) return null
-    const forms = { fromForm: out.form ?? '', toForm: into.form ?? '' }
-    return {
-      ...cost,
-      broken: [
-        obstacle('wrong-circuits', { ...ends, ...forms }, { lookalike: true }),
-        ...ratesAt(way, label, ends),
-      ],
-    }
-  }
-  const noLead = join ? [] : [obstacle('no-lead', { ...ends, form: out.form ?? '' })]
-  const grey =
-    join?.picture === 'luma-only'
-      ? [obstacle('luma-only', { ...ends }, { lookalike: true })]
-      : breaksAt(way, label.sig, ends).filter(
-          (o) => !RATES.includes(o.code) || !tools.joined(out, into),
-        )
+  if (!join && out.form !== into.form && !misfits(out, into, tools)) return null
+  const wrong = wrongPlug(label, way, join, tools)
+  if (wrong) return { boxes: label.boxes, pieces: label.pieces, broken: wrong }
+  const broken = [
+    ...socketBreaks(way, endsOf(label.way, way)),
+    ...leadBreaks(label, way, join),
+    ...signalBreaks(label, way, join, tools),
+  ]
+  return { boxes: label.boxes, pieces: label.pieces + (join?.pieces ?? 1), broken }
+}
+
+const leadBreaks = (label: Label, way: Way, join: Join | undefined): Obstacle[] =>
+  join
+    ? []
+    : [obstacle('no-lead', { ...endsOf(label.way, way), form: label.way.from?.face.form ?? '' })]
+
+const misfits = (out: Face, into: Face, { joins }: ReasonTools): boolean =>
+  wrongWiring(out, into) || joins.wrongWires(out, into)
+
+/** What a plug that goes in and is wired differently inside does; null where there is none. */
+function wrongPlug(
+  label: Label,
+  way: Way,
+  join: Join | undefined,
+  { joins }: ReasonTools,
+): Obstacle[] | null {
+  const out = label.way.from!.face
+  const into = way.into!.face
+  const ends = endsOf(label.way, way)
+  if (wrongWiring(out, into))
+    return [obstacle('japanese-21-pin', { ...ends }, { harmful: true, lookalike: true })]
+  if (join || out.form === into.form || !joins.wrongWires(out, into)) return null
+  const forms = { fromForm: out.form ?? '', toForm: into.form ?? '' }
+  const wrong = obstacle('wrong-circuits', { ...ends, ...forms }, { lookalike: true })
+  return [wrong, ...ratesAt(way, label, ends)]
+}
+
+/** A socket that is dead, or that would harm somebody. */
+function socketBreaks({ dead, harm }: Way, ends: Ends): Obstacle[] {
+  return [
+    ...(dead ? [obstacle('socket-dead', { ...ends, port: dead.label })] : []),
+    ...(harm ? [obstacle('added-socket', { ...ends, port: harm.label }, { harmful: true })] : []),
+  ]
+}
+
+function signalBreaks(
+  label: Label,
+  way: Way,
+  join: Join | undefined,
+  tools: ReasonTools,
+): Obstacle[] {
+  const ends = endsOf(label.way, way)
   const gun = tools.lightGun && way.fn.kind === 'shows' ? gunBreaks(way.variant.device, ends) : []
-  const dead = way.dead ? [obstacle('socket-dead', { ...ends, port: way.dead.label })] : []
-  const harm = way.harm
-    ? [obstacle('added-socket', { ...ends, port: way.harm.label }, { harmful: true })]
-    : []
-  return {
-    ...cost,
-    pieces: cost.pieces + (join?.pieces ?? 1),
-    broken: [...dead, ...harm, ...noLead, ...grey, ...gun],
-  }
+  if (join?.picture === 'luma-only')
+    return [obstacle('luma-only', { ...ends }, { lookalike: true }), ...gun]
+  const joined = tools.joined(label.way.from!.face, way.into!.face)
+  const breaks = breaksAt(way, label.sig.core, ends)
+  return [...breaks.filter((o) => !joined || !RATES.includes(o.code)), ...gun]
 }
 
 /** A plug that goes in and is wired differently inside. */
@@ -162,14 +226,14 @@ function turnedRound(
   ends: readonly Way[],
   tools: ReasonTools,
 ): (Attempt | null)[] {
-  if (box.fn.power !== 'none' || !label.way.from || !box.from || !box.into) return []
+  if (!label.way.from || !box.from || !box.into) return []
   const { from, into } = box
   if (tools.joins.between(label.way.from.face, from.face, PICTURE).length === 0) return []
   return ends.map((end) => {
     if (!end.into || tools.joins.between(into.face, end.into.face, PICTURE).length === 0)
       return null
     const details = { ...endsOf(label.way, end), to: box.variant.device.name }
-    const grey = into.face.form === 's-video' && label.sig.form === 'composite'
+    const grey = into.face.form === 's-video' && label.sig.core.form === 'composite'
     return {
       boxes: label.boxes,
       pieces: label.pieces + 1,
@@ -193,19 +257,14 @@ function throughOne(
   const first = attempt(label, box, tools)
   if (!first || rulesOf(first).length > MOST_BROKEN) return []
   if (first.broken.length === 0) {
-    const made: Label[] = []
-    for (const entry of tools.expander.entries(label, box)) {
-      tools.expander.leave(label, box, entry, (l) => made.push(l))
-    }
+    const { expander, moves } = tools
+    const into = moves(label.way.from!.face, label.sig.core).filter((move) => move.way === box)
+    const made = into.flatMap((move) =>
+      expander.entries(label, move).flatMap((entry) => expander.leave(label, move, entry)),
+    )
     return made.flatMap((l) => ends.map((end) => attempt(l, end, tools)))
   }
   // Whether the display would take what comes out cannot be known; that it fails here is the reason.
-  const leadsOn = ends.some(
-    (end) =>
-      box.from && end.into && tools.joins.between(box.from.face, end.into.face, PICTURE).length > 0,
-  )
   const powered = box.variant.powered ? 1 : 0
-  return leadsOn
-    ? [{ ...first, boxes: first.boxes + powered, pieces: first.pieces + 2 - powered }]
-    : []
+  return [{ ...first, boxes: first.boxes + powered, pieces: first.pieces + 2 - powered }]
 }

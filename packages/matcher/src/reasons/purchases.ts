@@ -1,6 +1,7 @@
 import type { Model } from '@coaxwain/models'
 import type { Caution, Hookup, Purchase, Question, Snapshot, Uid, Unit } from '@coaxwain/shelf'
 import { SOUND_RANK, TIER } from '@coaxwain/signal'
+import { CompiledShelf } from '../compile/shelf'
 import { buildHookup } from '../result/build'
 import { compareHookups } from '../result/rank'
 import { Solver, type Solved } from '../search/solve'
@@ -48,24 +49,30 @@ export function withParts(snapshot: Snapshot, parts: Parts): Snapshot {
   }
 }
 
+const stocked = new WeakMap<CompiledShelf, WeakMap<Parts, CompiledShelf>>()
+
+/** A compiled shelf with every part on it; made once. */
+function stock(shelf: CompiledShelf, parts: Parts): CompiledShelf {
+  const known = stocked.get(shelf) ?? new WeakMap<Parts, CompiledShelf>()
+  stocked.set(shelf, known)
+  const made =
+    known.get(parts) ??
+    new CompiledShelf(withParts(shelf.snapshot, parts), new Set(Object.keys(parts).map(partUid)))
+  known.set(parts, made)
+  return made
+}
+
 /** A second search over the shelf with the parts on it. */
 export class Shopping {
   private readonly solver: Solver
-  readonly snapshot: Snapshot
 
   constructor(
-    snapshot: Snapshot,
+    shelf: CompiledShelf,
     private readonly question: Question,
     parts: Parts,
     budget: number,
   ) {
-    this.snapshot = withParts(snapshot, parts)
-    this.solver = new Solver(
-      this.snapshot,
-      question,
-      budget,
-      new Set(Object.keys(parts).map(partUid)),
-    )
+    this.solver = new Solver(stock(shelf, parts), question, budget)
   }
 
   step(expansions: number): void {

@@ -1,27 +1,15 @@
 import type { Key } from '@coaxwain/models'
 import type { Hookup, Leg, OffAir, Stop, Uid, Unit } from '@coaxwain/shelf'
 import { isSoundCircuit, type PictureSignal } from '@coaxwain/signal'
-import type { Sig } from '../compile/sig'
+import type { Core } from '../compile/signal'
 import type { Way } from '../compile/way'
 import { worksFully } from '../search/finish'
 import { pathOf, type Finished, type Label, type SoundRoute } from '../search/label'
-import type { Solved, Solving } from '../search/solve'
 import { cautionsOf } from './cautions/index'
 import { channelControl, chooseChannel, type ChosenChannel } from './channels'
 import { LinkMaker } from './links'
 import { settingsOf, type Placing } from './settings'
-
-export interface BuildInput {
-  readonly solved: Solved
-  readonly frame: Solving
-  readonly offAir: readonly OffAir[]
-}
-
-/** One unit of the picture's path, first to last. */
-export interface PathStop extends Placing {
-  /** What leaves it; at the display, what arrives. */
-  readonly sig: Sig
-}
+import type { BuildInput, PathStop } from './stops'
 
 /** Puts a finished chain into the form that everybody reads: legs, links, settings, cautions. */
 export function buildHookup(input: BuildInput): Hookup {
@@ -62,18 +50,18 @@ function channelsOnPath(path: readonly Label[], found: Finished, offAir: readonl
   const sent = new Map<Label, ChosenChannel>()
   const received = new Map<Label | 'end', ChosenChannel>()
   let maker: Label | null = null
-  const receive = (at: Label | 'end', sig: Sig): void => {
-    if (!maker || !sig.carrier) return
-    const chosen = chooseChannel(sig.carrier, offAir)
+  const receive = (at: Label | 'end', core: Core): void => {
+    if (!maker || !core.carrier) return
+    const chosen = chooseChannel(core.carrier, offAir)
     sent.set(maker, chosen)
     received.set(at, chosen)
     maker = null
   }
   for (const label of path) {
-    if (label.way.fn.tunedBy !== undefined && label.step) receive(label, label.step.taken.sig)
+    if (label.way.fn.tunedBy !== undefined && label.step) receive(label, label.step.taken.core)
     if ((label.way.out?.rf ?? []).length > 0) maker = label
   }
-  receive('end', found.step.taken.sig)
+  receive('end', found.step.taken.core)
   return { sent, received }
 }
 
@@ -105,7 +93,7 @@ function placeStops(input: BuildInput): PathStop[] {
     receives: received.get('end') ?? null,
     sends: null,
     narrowScreen: false,
-    sig: found.step.taken.sig,
+    sig: { ...found.last.sig, core: found.step.taken.core },
   }
   return [...boxes, end]
 }
@@ -151,11 +139,11 @@ function makeLegs(input: BuildInput, stops: readonly PathStop[], made: LinkMaker
       if (circuits.some((c) => isSoundCircuit(c.from))) soundLinks.push(link)
     }
     if (step.soundRoute)
-      soundLinks.push(...addRoute(input, made, step.soundRoute, waitingAt(path, stops, i), to))
+      soundLinks.push(...addRoute(input, made, step.soundRoute, [waitingAt(path, stops, i), to]))
   })
   if (found.speakers) {
     const from = waitingAt(path, stops, path.length - 1)
-    soundLinks.push(...addRoute(input, made, found.speakers.route, from, speakersStop(input)))
+    soundLinks.push(...addRoute(input, made, found.speakers.route, [from, speakersStop(input)]))
   }
   const picture: Leg = { purpose: 'picture', stops: stops.map(stopOf(input)), links: pictureLinks }
   const sound: Leg[] =
@@ -174,7 +162,10 @@ function aerialLeg(
 ): Leg[] {
   const use = input.solved.found.aerial
   if (!use) return []
-  const joint = stops.findIndex((s) => s.way === use.at)
+  const last = stops.length - 1
+  const joint = stops.findIndex(
+    (s, i) => s.way === use.at || (i === last && s.way.id === use.at.id),
+  )
   const at = stops[joint]
   if (!at) return []
   const { ways, joins } = use.route
@@ -239,8 +230,7 @@ function addRoute(
   input: BuildInput,
   made: LinkMaker,
   route: SoundRoute,
-  from: RouteEnd,
-  to: RouteEnd,
+  [from, to]: readonly [RouteEnd, RouteEnd],
 ): number[] {
   const [first, second] = route.joins
   const start = { unit: from.unit.uid, placed: from.way.from! }
@@ -272,29 +262,25 @@ function soundLeaving({ solved }: BuildInput, index: number): Stop['sound'] {
 
 /** The signal with the channel that was chosen for it. */
 function pictureAt(stop: PathStop, all: readonly PathStop[], index: number): PictureSignal {
-  const { sig } = stop
+  const { core, sound, ...been } = stop.sig
   const chosen = [...all.slice(0, index + 1)].reverse().find((s) => s.sends)?.sends?.channel ?? null
   return {
-    form: sig.form,
-    scan: sig.scan,
-    colour: sig.colour,
-    poorest: sig.poorest,
-    lumaMhz: sig.lumaMhz,
-    protection: sig.protection,
-    shape: sig.shape,
-    direct: sig.direct,
-    delayMs: sig.delayMs,
+    form: core.form,
+    scan: core.scan,
+    colour: core.colour,
+    protection: core.protection,
+    ...been,
     carrier:
-      sig.carrier && chosen
+      core.carrier && chosen
         ? {
-            part: sig.carrier.part,
+            part: core.carrier.part,
             visionMhz: chosen.visionMhz,
             channel: chosen.name,
-            system: sig.carrier.system,
-            digital: sig.carrier.digital,
-            sideband: sig.carrier.sideband,
+            system: core.carrier.system,
+            digital: core.carrier.digital,
+            sideband: core.carrier.sideband,
             levelDbmv: sendLevel(all, index),
-            sound: sig.sound,
+            sound,
           }
         : null,
   }

@@ -2,7 +2,7 @@ import { controlOf, type Key, type RfGive } from '@coaxwain/models'
 import type { OffAir } from '@coaxwain/shelf'
 import { findChannel, type Channel, type PlanId } from '@coaxwain/signal'
 import { caughtBy, carriersOf } from '../compile/carriers'
-import type { CarrierSet } from '../compile/sig'
+import type { CarrierSet } from '../compile/signal'
 import type { Variant } from '../compile/variant'
 
 export interface ChosenChannel {

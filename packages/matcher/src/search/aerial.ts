@@ -9,11 +9,13 @@ import {
 import type { OffAir } from '@coaxwain/shelf'
 import { channelsIn, findChannel, leastMargin, type Occupant } from '@coaxwain/signal'
 import type { FaceTable, Placed } from '../compile/face'
-import type { CarrierSet, Sig, SigTable } from '../compile/sig'
-import { priceOf, type Variant } from '../compile/variant'
-import type { Way } from '../compile/way'
-import type { Join, JoinTable } from '../join/join'
-import { pathOf, type Cost, type Label } from './label'
+import type { CarrierSet } from '../compile/signal'
+import { priceOf } from '../compile/variant'
+import { bothLeans, offersOf } from '../compile/leans'
+import { leastDoubt, type Way } from '../compile/way'
+import type { JoinTable } from '../join/join'
+import { pathOf, type AerialRoute, type AerialUse, type Label } from './label'
+import { PICTURE } from '../join/join'
 
 /**
  * What may reach an aerial terminal at most: 0.346 sqrt(75) microvolts, 47 CFR 15.115(c)(1)(ii),
@@ -21,40 +23,15 @@ import { pathOf, type Cost, type Label } from './label'
  */
 export const AERIAL_LIMIT_DBMV = -50.47
 
-/** How a signal gets from an aerial to the place where it joins a chain. */
-export interface AerialRoute extends Cost {
-  /** The aerial, then boxes that pass it on. */
-  readonly ways: readonly Way[]
-  readonly joins: readonly Join[]
-  /** Isolation backwards through the boxes in dB; null where nobody knows. */
-  readonly reverseDb: number | null
-}
-
-/** The aerial as part of a chain: where it joins, and by what. */
-export interface AerialUse extends Cost {
-  readonly route: AerialRoute
-  readonly at: Way
-  readonly variant: Variant
-  readonly fn: ModelFunction
-  readonly in: Key
-  readonly into: Placed
-  readonly stand: Condition
-  /** On the lead together with the modulated carrier, and not switched. */
-  readonly together: boolean
-  /** What reaches the aerial terminal, in dBmV; null where nobody knows. */
-  readonly radiatesDbmv: number | null
-}
-
 const MOST_BOXES = 2
-
-const PICTURE = { picture: true, sound: false }
 
 const noWorse = (a: AerialRoute, b: AerialRoute): boolean =>
   a.boxes <= b.boxes &&
   a.pieces <= b.pieces &&
   a.doubt <= b.doubt &&
   a.bought <= b.bought &&
-  (a.reverseDb ?? -1) >= (b.reverseDb ?? -1)
+  a.reverseDb >= b.reverseDb &&
+  (!a.reverseUnknown || b.reverseUnknown)
 
 /** Isolation from one port to another on a way that is not meant; null where it is not recorded. */
 export function isolationDb(device: DeviceModel, from: Key, to: Key): number | null {
@@ -83,6 +60,51 @@ const passesRf = (way: Way): boolean =>
   way.out.rf === undefined &&
   way.soundFrom === 'picture'
 
+/** An RF input at which an aerial may join a chain. */
+interface Joint {
+  readonly way: Way
+  readonly fn: ModelFunction
+  readonly jack: Key
+  readonly stand: Condition
+  /** The chain before the unit. */
+  readonly before: Label | null
+  /** The aerial goes out by the same lead as the carrier, and is not received here. */
+  readonly meets: boolean
+}
+
+const freeRfInputs = (device: DeviceModel, fn: ModelFunction, taken: readonly Key[]): Key[] =>
+  [...fn.needs, ...(fn.oneOf ?? [])].filter(
+    (key) =>
+      device.jacks.find((j) => j.key === key)?.form === 'rf' &&
+      !portsOf(device, key).some((p) => taken.includes(p)),
+  )
+
+/** The way with everything that the aerial leans on in the same unit. */
+function alsoFed({ way, fn, jack }: Joint): Way {
+  const contacts = portsOf(way.variant.device, jack).map((port) => ({ jack, port }))
+  const leans = bothLeans(way.leans, { contacts, functions: [fn.key] })
+  return { ...way, leans, offers: offersOf(way.variant, leans) }
+}
+
+/** A carrier in the unit: the jack where it goes in or comes out, and its level there. */
+function carrierAt({ way, before }: Joint): { jack: Key; levelDbmv: number } | null {
+  const own = way.out?.rf?.[0]
+  if (way.out && own) return { jack: way.out.jack, levelDbmv: own.levelDbmv }
+  if (way.in === null || way.into?.face.form !== 'rf' || !before) return null
+  const levelDbmv = levelOf(before)
+  return levelDbmv === null ? null : { jack: way.in, levelDbmv }
+}
+
+/** What of that gets up to the aerial terminal; null where it might be too much and nobody knows. */
+function radiated(joint: Joint, route: AerialRoute): number | null {
+  const carrier = carrierAt(joint)
+  if (!carrier) return -Infinity
+  const isolation = worstIsolation(joint.way.variant.device, carrier.jack, joint.jack)
+  const atMost = carrier.levelDbmv - (isolation ?? 0) - route.reverseDb
+  const unknown = isolation === null || route.reverseUnknown
+  return unknown && atMost > AERIAL_LIMIT_DBMV ? null : atMost
+}
+
 /** Finds where an aerial can join a chain, what that costs, and whether anything gets up to the aerial. */
 export class Aerials {
   private readonly outs: AerialRoute[]
@@ -91,9 +113,11 @@ export class Aerials {
   constructor(
     aerials: readonly Way[],
     boxes: readonly Way[],
-    private readonly joins: JoinTable,
-    private readonly faces: FaceTable,
-    private readonly offAir: readonly OffAir[],
+    private readonly place: {
+      readonly joins: JoinTable
+      readonly faces: FaceTable
+      readonly offAir: readonly OffAir[]
+    },
   ) {
     this.outs = this.reach(aerials, boxes.filter(passesRf))
   }
@@ -109,9 +133,10 @@ export class Aerials {
       joins: [],
       boxes: 0,
       pieces: 0,
-      doubt: way.offers[0]?.doubt ?? 0,
+      doubt: leastDoubt(way),
       bought: 0,
       reverseDb: 0,
+      reverseUnknown: false,
     }))
     const all = [...layer]
     for (let n = 0; n < MOST_BOXES; n++) {
@@ -126,14 +151,15 @@ export class Aerials {
     if (!last.from || !way.into || route.ways.some((w) => w.variant === way.variant)) return []
     const { device } = way.variant
     const back = worstIsolation(device, way.out!.jack, way.in!)
-    return this.joins.between(last.from.face, way.into.face, PICTURE).map((join) => ({
+    return this.place.joins.between(last.from.face, way.into.face, PICTURE).map((join) => ({
       ways: [...route.ways, way],
       joins: [...route.joins, join],
       boxes: route.boxes + (way.variant.powered ? 1 : 0),
       pieces: route.pieces + join.pieces + (way.variant.powered ? 0 : 1),
-      doubt: route.doubt + (way.offers[0]?.doubt ?? 0) + (join.dcUnknown ? 1 : 0),
+      doubt: route.doubt + leastDoubt(way) + (join.dcUnknown ? 1 : 0),
       bought: route.bought + join.bought + priceOf(way.variant),
-      reverseDb: route.reverseDb === null || back === null ? null : route.reverseDb + back,
+      reverseDb: route.reverseDb + (back ?? 0),
+      reverseUnknown: route.reverseUnknown || back === null,
     }))
   }
 
@@ -145,7 +171,7 @@ export class Aerials {
     for (const route of this.outs) {
       const from = route.ways.at(-1)!.from
       if (!from) continue
-      for (const join of this.joins.between(from.face, into.face, PICTURE)) {
+      for (const join of this.place.joins.between(from.face, into.face, PICTURE)) {
         const whole: AerialRoute = {
           ...route,
           joins: [...route.joins, join],
@@ -162,7 +188,7 @@ export class Aerials {
 
   /** The kinds of station that are received here; both when nobody has said. */
   private received(fn: ModelFunction): boolean {
-    const wanted = new Set(this.offAir.map((s) => s.kind))
+    const wanted = new Set(this.place.offAir.map((s) => s.kind))
     const analogue = fn.accepts.some((r) => (r.systems ?? []).length > 0)
     const digital = fn.accepts.some((r) => (r.digital ?? []).length > 0)
     if (wanted.size === 0) return analogue || digital
@@ -175,16 +201,14 @@ export class Aerials {
   }
 
   /** Joins at a tuner of the unit itself: a converter box, or another input of the display. */
-  atTuner(way: Way, taken: readonly Key[]): AerialUse[] {
+  atTuner(before: Label | null, way: Way, taken: readonly Key[]): AerialUse[] {
     const { device } = way.variant
     return device.functions
       .filter((fn) => this.canWatch(fn))
       .flatMap((fn) =>
-        [...fn.needs, ...(fn.oneOf ?? [])].flatMap((key) => {
-          const jack = device.jacks.find((j) => j.key === key)
-          if (jack?.form !== 'rf' || portsOf(device, key).some((p) => taken.includes(p))) return []
-          return this.uses(way, fn, key, fn.while ?? [], false, null)
-        }),
+        freeRfInputs(device, fn, taken).flatMap((jack) =>
+          this.uses({ way, fn, jack, stand: fn.while ?? [], before, meets: false }),
+        ),
       )
   }
 
@@ -197,67 +221,47 @@ export class Aerials {
       .filter((fn) => fn.tunedBy === undefined)
       .flatMap((fn) => {
         const give = fn.gives.find((g) => g.jack === way.out?.jack && g.rf === undefined)
-        const own = give ? together(fn.while, give.while) : null
-        if (!own) return []
-        return [...fn.needs, ...(fn.oneOf ?? [])].flatMap((key) => {
-          const jack = device.jacks.find((j) => j.key === key)
-          if (jack?.form !== 'rf' || portsOf(device, key).some((p) => taken.includes(p))) return []
-          const atOnce = together(own, way.stand) !== null
-          return this.uses(way, fn, key, own, atOnce, { before, jack: key })
-        })
+        const stand = give ? together(fn.while, give.while) : null
+        if (!stand) return []
+        return freeRfInputs(device, fn, taken).flatMap((jack) =>
+          this.uses({ way, fn, jack, stand, before, meets: true }),
+        )
       })
   }
 
-  private uses(
-    way: Way,
-    fn: ModelFunction,
-    key: Key,
-    stand: Condition,
-    atOnce: boolean,
-    sender: { before: Label | null; jack: Key } | null,
-  ): AerialUse[] {
+  private uses(joint: Joint): AerialUse[] {
+    const { way, fn, jack, stand } = joint
     const { device } = way.variant
-    const into = this.faces.place(device, { picture: jackOf(device, key), sound: null, volts: [] })
+    const picture = jackOf(device, jack)
+    const into = this.place.faces.place(device, { picture, sound: null, volts: [] })
+    const at = alsoFed(joint)
+    if (at.offers.length === 0) return []
     return this.to(into).flatMap((route): AerialUse[] => {
-      const radiates = sender ? this.radiated(way, sender, route) : -Infinity
+      const radiates = radiated(joint, route)
       if (radiates !== null && radiates > AERIAL_LIMIT_DBMV) return []
       return [
         {
           route,
-          at: way,
+          at,
           variant: way.variant,
           fn,
-          in: key,
+          in: jack,
           into,
           stand,
-          together: atOnce,
+          together: joint.meets && together(stand, way.stand) !== null,
           radiatesDbmv: radiates,
           boxes: route.boxes,
           pieces: route.pieces,
-          doubt: route.doubt + (radiates === null ? 1 : 0),
+          doubt: route.doubt + (radiates === null ? 1 : 0) + leastDoubt(at) - leastDoubt(way),
           bought: route.bought,
         },
       ]
     })
   }
 
-  /** What of a modulated carrier gets up to the aerial terminal. */
-  private radiated(
-    way: Way,
-    sender: { before: Label | null; jack: Key },
-    route: AerialRoute,
-  ): number | null {
-    const own = way.out?.rf?.[0]
-    const from = own || way.in === null ? way.out!.jack : way.in
-    const level = own ? own.levelDbmv : sender.before ? levelOf(sender.before) : null
-    const isolation = worstIsolation(way.variant.device, from, sender.jack)
-    if (level === null || isolation === null || route.reverseDb === null) return null
-    return level - isolation - route.reverseDb
-  }
-
   /** The carriers that can lie on one lead with the stations without harm to either. */
   besideStations(carrier: CarrierSet, levelDbmv: number): CarrierSet | null {
-    const stations = this.offAir.flatMap((s) => stationOf(s) ?? [])
+    const stations = this.place.offAir.flatMap((s) => stationOf(s) ?? [])
     const kept = carrier.names
       .map((name, i) => ({ name, mhz: carrier.visionMhz[i] as number }))
       .filter(({ name }) => {
@@ -266,12 +270,6 @@ export class Aerials {
       })
     if (kept.length === 0) return null
     return { ...carrier, names: kept.map((k) => k.name), visionMhz: kept.map((k) => k.mhz) }
-  }
-
-  narrowed(sig: Sig, sigs: SigTable, levelDbmv: number): Sig | null {
-    if (!sig.carrier) return null
-    const carrier = this.besideStations(sig.carrier, levelDbmv)
-    return carrier ? sigs.intern({ ...sig, carrier }) : null
   }
 }
 

@@ -1,5 +1,5 @@
 import type { Unit } from '@coaxwain/shelf'
-import type { Way } from '../compile/way'
+import { leastDoubt, type Way } from '../compile/way'
 import type { Join } from '../join/join'
 import { pathOf, type Finished } from './label'
 
@@ -50,7 +50,7 @@ export function assign(
   }
   for (const [id, ways] of groups) {
     const picked = leastApart(ways)
-    const hoped = ways.reduce((sum, way) => sum + (way.offers[0]?.doubt ?? 0), 0)
+    const hoped = ways.reduce((sum, way) => sum + leastDoubt(way), 0)
     if (picked && (picked.doubt === hoped || exact.has(id))) {
       ways.forEach((way, i) => units.set(way, picked.units[i] as Unit))
     } else variants.add(id)

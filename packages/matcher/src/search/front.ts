@@ -1,48 +1,34 @@
-import type { Finished } from './label'
+import { noWorseCost, type Cost, type Finished } from './label'
+
+interface Held extends Cost {
+  readonly found: Finished
+}
 
 /** Finished chains of which none beats another; one for each set of axes. */
 export class Front {
-  private solutions: Finished[] = []
+  private held: Held[] = []
 
   add(found: Finished): void {
     const { picture, sound, boxes, pieces, doubt } = found.axes
-    if (this.matches(picture, sound, boxes, pieces, doubt, found.bought)) return
-    this.solutions = this.solutions.filter((s) => !noWorse(found, s))
-    this.solutions.push(found)
+    const own: Held = { found, boxes, pieces, doubt, bought: found.bought }
+    if (this.matches(picture, sound, own)) return
+    this.held = this.held.filter((h) => !noWorse(own, h))
+    this.held.push(own)
   }
 
-  /** Some chain is at least as good on every axis: higher for picture and sound, lower for the rest. */
-  matches(
-    picture: number,
-    sound: number,
-    boxes: number,
-    pieces: number,
-    doubt: number,
-    bought: number,
-  ): boolean {
-    for (const { axes, bought: paid } of this.solutions) {
-      if (
-        axes.picture >= picture &&
-        axes.sound >= sound &&
-        axes.boxes <= boxes &&
-        axes.pieces <= pieces &&
-        axes.doubt <= doubt &&
-        paid <= bought
-      )
-        return true
-    }
-    return false
+  /** Some chain is at least as good on every axis. */
+  matches(picture: number, sound: number, cost: Cost): boolean {
+    return this.held.some(
+      (h) => h.found.axes.picture >= picture && h.found.axes.sound >= sound && noWorseCost(h, cost),
+    )
   }
 
   all(): readonly Finished[] {
-    return this.solutions
+    return this.held.map((h) => h.found)
   }
 }
 
-const noWorse = (a: Finished, b: Finished): boolean =>
-  a.axes.picture >= b.axes.picture &&
-  a.axes.sound >= b.axes.sound &&
-  a.axes.boxes <= b.axes.boxes &&
-  a.axes.pieces <= b.axes.pieces &&
-  a.axes.doubt <= b.axes.doubt &&
-  a.bought <= b.bought
+const noWorse = (a: Held, b: Held): boolean =>
+  a.found.axes.picture >= b.found.axes.picture &&
+  a.found.axes.sound >= b.found.axes.sound &&
+  noWorseCost(a, b)

@@ -1,11 +1,12 @@
-import type { Condition } from '@coaxwain/models'
+import type { Condition, Key, ModelFunction } from '@coaxwain/models'
 import type { Axes, SeenPicture } from '@coaxwain/shelf'
 import type { Sound } from '@coaxwain/signal'
-import type { Sig } from '../compile/sig'
+import type { Sig } from '../compile/signal'
 import type { Taken } from '../compile/accept'
+import type { Placed } from '../compile/face'
+import type { Variant } from '../compile/variant'
 import type { Way } from '../compile/way'
 import type { Join } from '../join/join'
-import type { AerialUse } from './aerial'
 
 /** Sound on its own wires: from where it waits to where it is taken, perhaps through one box. */
 export interface SoundRoute {
@@ -18,11 +19,15 @@ export interface SoundRoute {
   readonly bought: number
 }
 
+/** Sound on the sound outputs of a unit of the chain, under that unit's positions. */
+export interface Waiting {
+  readonly kind: 'waits'
+  readonly sound: Sound
+  readonly at: Label
+}
+
 /** Where the sound is that does not ride in the picture signal. */
-export type SoundState =
-  | { readonly kind: 'none' }
-  /** On the sound outputs of a unit of the chain, under that unit's positions. */
-  | { readonly kind: 'waits'; readonly sound: Sound; readonly at: Label }
+export type SoundState = { readonly kind: 'none' } | Waiting
 
 export interface Cost {
   readonly boxes: number
@@ -30,6 +35,33 @@ export interface Cost {
   readonly doubt: number
   /** Boxes and pieces that are not there and would have to be bought. */
   readonly bought: number
+}
+
+/** How a signal gets from an aerial to the place where it joins a chain. */
+export interface AerialRoute extends Cost {
+  /** The aerial, then boxes that pass it on. */
+  readonly ways: readonly Way[]
+  readonly joins: readonly Join[]
+  /** Isolation backwards through the boxes in dB; what nobody knows counts as none. */
+  readonly reverseDb: number
+  /** Somewhere on the way nobody knows it. */
+  readonly reverseUnknown: boolean
+}
+
+/** The aerial as part of a chain: where it joins, and by what. */
+export interface AerialUse extends Cost {
+  readonly route: AerialRoute
+  /** The way of the unit where it joins, with all that the aerial leans on there. */
+  readonly at: Way
+  readonly variant: Variant
+  readonly fn: ModelFunction
+  readonly in: Key
+  readonly into: Placed
+  readonly stand: Condition
+  /** On the lead together with the modulated carrier, and not switched. */
+  readonly together: boolean
+  /** What reaches the aerial terminal at most, in dBmV; null where it might be too much and nobody knows. */
+  readonly radiatesDbmv: number | null
 }
 
 /** A chain so far: the last unit, what leaves it, where the sound is, and what it cost. */
@@ -79,6 +111,13 @@ export const pathOf = (label: Label): Label[] => {
   for (let at: Label | null = label; at; at = at.prev) path.unshift(at)
   return path
 }
+
+export const plus = (a: Cost, b: Cost): Cost => ({
+  boxes: a.boxes + b.boxes,
+  pieces: a.pieces + b.pieces,
+  doubt: a.doubt + b.doubt,
+  bought: a.bought + b.bought,
+})
 
 export const noWorseCost = (a: Cost, b: Cost): boolean =>
   a.boxes <= b.boxes && a.pieces <= b.pieces && a.doubt <= b.doubt && a.bought <= b.bought

@@ -1,13 +1,5 @@
 import type { DisplayFacts } from '@coaxwain/models'
-import {
-  FORM_MHZ,
-  poorer,
-  SOUND_RANK,
-  TIER,
-  type PictureForm,
-  type Quality,
-  type Sound,
-} from '@coaxwain/signal'
+import { poorer, TIER, type PictureForm, type Quality, type Sound } from '@coaxwain/signal'
 
 /**
  * The picture axis: the tier of the poorest form on the way times 100, plus ten times the luma bandwidth.
@@ -22,12 +14,8 @@ export const bestScore = (tier: number, lumaMhz: number): number =>
 
 export const qualityAt = (poorest: Quality, form: PictureForm): Quality => poorer(poorest, form)
 
-export const formMhz = (form: PictureForm): number => (form === 'rf' ? Infinity : FORM_MHZ[form])
-
 /** What a display's own loudspeakers make of a sound. */
 export function fromLoudspeakers(sound: Sound, display: DisplayFacts): Sound {
   if (display.loudspeakers === 'none') return 'none'
   return display.loudspeakers === 'mono' && sound === 'stereo' ? 'mono' : sound
 }
-
-export const soundScore = (sound: Sound): number => SOUND_RANK[sound]

@@ -1,7 +1,7 @@
 import { SOUND_RANK, type Sound } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
 import { priceOf } from '../compile/variant'
-import type { Way } from '../compile/way'
+import { leastDoubt, type Way } from '../compile/way'
 import type { JoinTable } from '../join/join'
 import type { SoundMeeting } from '../join/wanted'
 import type { SoundRoute } from './label'
@@ -76,7 +76,7 @@ export class SoundRoutes {
           sound: b.sound,
           boxes: way.variant.powered ? 1 : 0,
           pieces: a.pieces + b.pieces + (way.variant.powered ? 0 : 1),
-          doubt: a.doubt + b.doubt + (way.offers[0]?.doubt ?? 0),
+          doubt: a.doubt + b.doubt + leastDoubt(way),
           bought: a.bought + b.bought + priceOf(way.variant),
         }))
       })

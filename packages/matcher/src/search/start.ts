@@ -11,8 +11,8 @@ import {
 import { systemCarries } from '../compile/accept'
 import { carriersOf } from '../compile/carriers'
 import { wireMhz } from '../compile/leave'
-import { embedsSound, type Sig, type SigTable } from '../compile/sig'
-import type { Way } from '../compile/way'
+import { embedsSound, lesserSound, type Core, type CoreTable, type Sig } from '../compile/signal'
+import { leastDoubt, soundEnd, type Way } from '../compile/way'
 import type { Label, SoundState } from './label'
 
 /** What the source plays by one row of one output, for this material; null when the row does not serve. */
@@ -33,60 +33,65 @@ function soundOf(way: Way, material: Material): Sound {
 }
 
 /** The labels that the source starts with: each output, each way it can be set, sound or none. */
-export function startLabels(ways: readonly Way[], material: Material, sigs: SigTable): Label[] {
+export function startLabels(ways: readonly Way[], material: Material, cores: CoreTable): Label[] {
   return ways.flatMap((way) =>
-    signalsOf(way, material, sigs).flatMap(({ sig, stand }) => label(way, sig, stand, material)),
+    signalsOf(way, material, cores).flatMap((given) => startLabel(way, given, material)),
   )
 }
 
-function signalsOf(way: Way, material: Material, sigs: SigTable) {
+/** A picture as the source gives it, and the positions that make it so. */
+interface Given {
+  readonly sig: Sig
+  readonly stand: Label['stand']
+}
+
+function signalsOf(way: Way, material: Material, cores: CoreTable): Given[] {
   const give = way.out
   if (!give) return []
-  const { device } = way.variant
-  const form = jackOf(device, give.jack).form as PictureForm
+  const form = jackOf(way.variant.device, give.jack).form as PictureForm
   return (give.picture ?? []).flatMap((row) => {
     const plays = played(row, material)
-    const base = together(way.stand, row.while)
-    if (!plays || !base) return []
-    const mhz = Math.min(wireMhz(form, plays.colour), way.fn.bandwidthMhz ?? Infinity)
-    const sig: Omit<Sig, 'id'> = {
-      form,
-      ...plays,
+    const stand = together(way.stand, row.while)
+    if (!plays || !stand) return []
+    const { protection } = material
+    const plain = { form, ...plays, protection }
+    const sig: Omit<Sig, 'core'> = {
       poorest: form,
-      lumaMhz: mhz,
-      protection: material.protection,
+      lumaMhz: Math.min(wireMhz(form, plays.colour), way.fn.bandwidthMhz ?? Infinity),
       shape: row.shape ?? material.shape ?? '4:3',
       direct: way.fn.storesFields !== true,
       delayMs: way.fn.delayMs ?? 0,
-      carrier: null,
-      sound: 'none',
+      sound: ridingSound(way, form, material),
     }
-    if (form !== 'rf')
-      return [
-        { sig: sigs.intern({ ...sig, sound: ridingSound(way, form, material) }), stand: base },
-      ]
-    return (give.rf ?? []).flatMap((rf) => {
-      const stand = together(base, rf.while)
-      if (!stand || !systemCarries(rf.system, plays.scan)) return []
-      const made = sigs.intern({
-        ...sig,
-        carrier: carriersOf(device, rf),
-        lumaMhz: Math.min(mhz, RF_SYSTEMS[rf.system].videoMhz),
-        sound: way.soundTo === 'picture' ? rf.sound : 'none',
-      })
-      return [{ sig: made, stand }]
-    })
+    if (form === 'rf') return modulated(way, plain, { sig, stand }, cores)
+    return [{ sig: { ...sig, core: cores.intern({ ...plain, carrier: null }) }, stand }]
+  })
+}
+
+function modulated(
+  way: Way,
+  plain: Omit<Core, 'id' | 'kind' | 'carrier'>,
+  given: { readonly sig: Omit<Sig, 'core'>; readonly stand: Label['stand'] },
+  cores: CoreTable,
+): Given[] {
+  return (way.out?.rf ?? []).flatMap((rf) => {
+    const stand = together(given.stand, rf.while)
+    if (!stand || !systemCarries(rf.system, plain.scan)) return []
+    const core = cores.intern({ ...plain, carrier: carriersOf(way.variant.device, rf) })
+    const lumaMhz = Math.min(given.sig.lumaMhz, RF_SYSTEMS[rf.system].videoMhz)
+    const sound = lesserSound(rf.sound, given.sig.sound)
+    return [{ sig: { ...given.sig, core, lumaMhz, sound }, stand }]
   })
 }
 
 const ridingSound = (way: Way, form: PictureForm, material: Material): Sound =>
   embedsSound(form) && way.soundTo === 'picture' ? soundOf(way, material) : 'none'
 
-function label(way: Way, sig: Sig, stand: Label['stand'], material: Material): Label[] {
-  const made: Omit<Label, 'sound'> & { sound: SoundState } = {
+function startLabel(way: Way, given: Given, material: Material): Label[] {
+  const { sig } = given
+  const made: Label & { sound: SoundState } = {
     way,
-    sig,
-    stand,
+    ...given,
     sound: { kind: 'none' },
     aerial: null,
     depth: 0,
@@ -95,12 +100,13 @@ function label(way: Way, sig: Sig, stand: Label['stand'], material: Material): L
     boxes: 0,
     pieces: 0,
     bought: 0,
-    doubt: way.offers[0]?.doubt ?? 0,
+    doubt: leastDoubt(way),
   }
-  if (way.soundTo !== null && way.soundTo !== 'picture') {
+  const end = soundEnd(way.soundTo)
+  if (end) {
     const sound = soundOf(way, material)
     if (sound === 'none') return []
-    made.sound = { kind: 'waits', sound: kindAt(sound, way.soundTo.circuits.length), at: made }
+    made.sound = { kind: 'waits', sound: kindAt(sound, end.circuits.length), at: made }
   }
   if (way.soundTo === 'picture' && sig.sound === 'none') return []
   return [made]

@@ -2,6 +2,7 @@
 export const APP = {
   'app.name': 'Coaxwain',
   'app.title': '{page} \u00b7 Coaxwain',
+  'app.title-sort': '{title}, {sort}',
   'app.skip': 'Skip to the page',
   'app.main-places': 'Places',
   'app.more': 'More',

@@ -108,6 +108,7 @@ export const ASK = {
   'answer.lookalike': 'It looks right and is not.',
   'answer.purchases': 'What would do it',
   'answer.purchase': 'With {parts}',
+  'answer.purchase-several': '{count} of {name}',
   'answer.purchase-shows': 'Then: {summary}',
   'answer.nothing-helps': 'No ordinary part would help.',
   'answer.incomplete': 'The search stopped at its limit: there may be more.',

@@ -282,6 +282,7 @@ export const MODELS = {
   'trim.volume': 'volume',
   'trim.other': 'something else',
 
+  'model.sort': 'model',
   'model.line': 'What devices and [leads] have on their backs, described once.',
   'model.search': 'Maker, type, other name or kind',
   'model.found': '{count|# model|# models}',

@@ -54,6 +54,7 @@ export const SHELF = {
   'shelf.units-here': '{count|# unit|# units}',
 
   'unit.line': '{kind}, {market}. Unit {number}.',
+  'unit.number': 'unit {number}',
   'unit.model': 'Model',
   'unit.whole': 'As a whole',
   'unit.sockets': '[Sockets]',
@@ -90,6 +91,7 @@ export const SHELF = {
   'unit.serial': 'Serial number',
   'unit.note': 'Note',
   'unit.needed-by': 'Needed by',
+  'unit.needed-more': 'and {count} more',
   'unit.test-next': 'Test the next [socket]',
   'unit.all-tested': 'Everything was tried',
   'unit.set-state': 'Set the state of {what}',

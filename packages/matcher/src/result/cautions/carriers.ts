@@ -1,5 +1,5 @@
 import { channelsIn, touches, type Channel } from '@coaxwain/signal'
-import type { PathStop } from '../build'
+import type { PathStop } from '../stops'
 import { boxes, caution, display, named, source, type Rule } from './rule'
 
 const senders = (stops: readonly PathStop[]): readonly PathStop[] =>

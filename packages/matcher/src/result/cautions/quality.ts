@@ -1,3 +1,4 @@
+import { together } from '@coaxwain/models'
 import { SCANS, type ScanId } from '@coaxwain/signal'
 import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
 
@@ -28,7 +29,7 @@ const picture: Rule = (c) => {
   return [
     ...(quality === 'luma-only' ? [caution('luma-only')] : []),
     ...(degradations.includes('monochrome') && quality !== 'luma-only'
-      ? [caution('colour-not-decoded', { colour: display(c).sig.colour })]
+      ? [caution('colour-not-decoded', { colour: display(c).sig.core.colour })]
       : []),
     ...(degradations.includes('reduced-height') ? [caution('reduced-height')] : []),
     ...(degradations.includes('squeezed') ? [caution('squeezed')] : []),
@@ -43,11 +44,13 @@ const playsHighDefinition = (c: CautionInput): boolean =>
   (source(c).way.out?.picture ?? []).some((r) => r.scan !== 'same' && isHighDefinition(r.scan))
 
 const lessDetail: Rule = (c) =>
-  playsHighDefinition(c) && SCANS[display(c).sig.scan].lineKhz < 20 ? [caution('less-detail')] : []
+  playsHighDefinition(c) && SCANS[display(c).sig.core.scan].lineKhz < 20
+    ? [caution('less-detail')]
+    : []
 
 /** What comes by a digital socket is wide; an old tube is not. */
 const wide: Rule = (c) =>
-  source(c).sig.form === 'hdmi' && display(c).variant.device.display?.shape === '4:3'
+  source(c).sig.core.form === 'hdmi' && display(c).variant.device.display?.shape === '4:3'
     ? [caution('wide-picture')]
     : []
 
@@ -60,17 +63,20 @@ const fewLines: Rule = (c) => {
     (s) =>
       s.way.in !== null &&
       s.way.into?.face.form !== s.way.from?.face.form &&
-      s.sig.form !== 'rf' &&
+      s.sig.core.form !== 'rf' &&
       s.way.into?.face.form !== 'rf',
   )
-  const few = FEW_LINES.includes(source(c).sig.scan)
+  const { way, stand } = source(c)
+  const few = (way.out?.picture ?? []).some(
+    (r) => r.scan !== 'same' && FEW_LINES.includes(r.scan) && together(r.while, stand) !== null,
+  )
   return few && (flat || turned) ? [caution('few-lines')] : []
 }
 
 /** Games answer to the hand: delay and lines matter. */
 const isGame = (c: CautionInput): boolean =>
   ['console', 'computer'].includes(source(c).variant.device.kind) ||
-  FEW_LINES.includes(source(c).sig.scan)
+  FEW_LINES.includes(source(c).sig.core.scan)
 
 const delay: Rule = (c) => {
   const facts = display(c).variant.device.display
@@ -80,13 +86,13 @@ const delay: Rule = (c) => {
 
 /** A converter that makes interlaced pictures makes no true 240-line ones. */
 const interlacedOnly: Rule = (c) =>
-  isGame(c) && playsHighDefinition(c) && SCANS[display(c).sig.scan].interlaced
+  isGame(c) && playsHighDefinition(c) && SCANS[display(c).sig.core.scan].interlaced
     ? [caution('interlaced-only')]
     : []
 
 /** Adding chroma to luma brings false colours on fine detail (common practice, no source). */
 const crossColour: Rule = (c) =>
-  boxes(c).some((s) => s.way.into?.face.form === 's-video' && s.sig.form === 'composite')
+  boxes(c).some((s) => s.way.into?.face.form === 's-video' && s.sig.core.form === 'composite')
     ? [caution('cross-colour')]
     : []
 
@@ -103,13 +109,13 @@ const soundApart: Rule = (c) => {
 
 /** RGB must bring its sync along; component takes it from the luma wire. */
 const sync: Rule = (c) =>
-  boxes(c).some((s) => s.way.into?.face.form?.startsWith('rgb') && s.sig.form === 'component')
+  boxes(c).some((s) => s.way.into?.face.form?.startsWith('rgb') && s.sig.core.form === 'component')
     ? [caution('sync-needed')]
     : []
 
 /** A playback mode made for sets that follow 60 fields. */
 const sixtyFields: Rule = (c) =>
-  ['pal-60', 'ntsc-443'].includes(display(c).sig.colour) ? [caution('sixty-fields')] : []
+  ['pal-60', 'ntsc-443'].includes(display(c).sig.core.colour) ? [caution('sixty-fields')] : []
 
 /** White that drives the carrier to nothing breaks up the sound (47 CFR 73.682(a)(13) for the white level). */
 const whiteBuzz: Rule = (c) =>

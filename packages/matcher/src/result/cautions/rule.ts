@@ -1,5 +1,5 @@
 import type { Caution, Hookup } from '@coaxwain/shelf'
-import type { BuildInput, PathStop } from '../build'
+import type { BuildInput, PathStop } from '../stops'
 
 export interface CautionInput {
   readonly hookup: Omit<Hookup, 'cautions'>

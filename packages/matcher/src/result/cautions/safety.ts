@@ -1,7 +1,7 @@
 import { portOf } from '@coaxwain/models'
 import { AERIAL_LIMIT_DBMV } from '../../search/aerial'
 import { pathOf } from '../../search/label'
-import type { PathStop } from '../build'
+import type { PathStop } from '../stops'
 import { boxes, caution, display, named, source, type Rule } from './rule'
 
 /** A modulated output must never meet an aerial or a cable company's line (47 CFR 15.115(c)). */
@@ -88,7 +88,7 @@ const recorderInput: Rule = (c) =>
     .map((s) => caution('recorder-input', { name: named(s) }))
 
 const handshake: Rule = (c) =>
-  source(c).sig.protection !== 'hdcp'
+  source(c).sig.core.protection !== 'hdcp'
     ? []
     : boxes(c)
         .filter((s) => s.way.in !== null && s.way.into?.face.form === 'hdmi')
