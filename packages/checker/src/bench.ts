@@ -37,6 +37,12 @@ export const unitsIn = (hookup: Hookup): Uid[] => [
 export const takesAt = (fn: ModelFunction, jack: Key | null): boolean =>
   jack !== null && [...fn.needs, ...(fn.oneOf ?? [])].includes(jack)
 
+/** The power states in which a function acts. */
+const powerFor = ({ power }: ModelFunction): Condition => {
+  if (power === 'none') return []
+  return [{ control: POWER_KEY, in: power === 'on' ? ['on'] : ['on', 'standby'] }]
+}
+
 /** One unit on the bench at work: a function of it, under the positions that the hookup sets. */
 export class Stage {
   constructor(
@@ -59,6 +65,16 @@ export class Stage {
 
   jack(key: Key | null): Jack | null {
     return this.device.jacks.find((j) => j.key === key) ?? null
+  }
+
+  /** Whether the function acts as its unit stands, power included; only asks. */
+  acts(): boolean {
+    return this.holds(this.fn.while) && this.holds(powerFor(this.fn))
+  }
+
+  /** Whether the function acts; a control that is left open, and should not be, is reported. */
+  isSetToAct(): boolean {
+    return this.settles(this.fn.while) && this.settles(powerFor(this.fn))
   }
 
   /** Whether a condition holds; only asks, and leaves no finding behind. */

@@ -122,7 +122,7 @@ export class Ears {
         .flatMap((stage) =>
           stage.fn.gives
             .filter((g) => g.jack === jack && g.sound !== undefined)
-            .filter((g) => stage.holds(stage.fn.while) && stage.holds(g.while))
+            .filter((g) => stage.acts() && stage.holds(g.while))
             .map((g) => this.through(stage, g, depth)),
         ),
     )

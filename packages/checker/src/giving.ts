@@ -36,7 +36,7 @@ function formMhz(form: PictureForm, colour: Colour): number {
 export function played(stage: Stage, give: Give, claimed: Wave): Wave | null {
   const { fn, bench } = stage
   const { material } = bench.question
-  if (!stage.settles(fn.while) || !stage.settles(give.while)) return null
+  if (!stage.isSetToAct() || !stage.settles(give.while)) return null
   const row = (give.picture ?? [])
     .filter((r) => isRecorded(r, material) && stage.settles(r.while))
     .find((r) => isClaimed(r, material, claimed))

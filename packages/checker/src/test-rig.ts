@@ -28,11 +28,14 @@ interface Built {
 
 export type Rig = Loose<Built>
 
-export function check(rig: Rig) {
+/** The rig as the check takes it. */
+export function laid(rig: Rig) {
   const { models, units, question, hookup } = rig as Built
   const snapshot: Snapshot = { shelfVersion: 1, catalogueVersion: 1, models, units }
-  return checkHookup(snapshot, question, hookup)
+  return [snapshot, question, hookup] as const
 }
+
+export const check = (rig: Rig) => checkHookup(...laid(rig))
 
 /** Codes of everything that is found, each once. */
 export const codes = (rig: Rig): FindingCode[] => [

@@ -63,13 +63,14 @@ function enter(bench: Bench, stop: Stop, wave: Wave): Entered | null {
   const { fn } = stage
   const at = { function: fn.key }
   const jack = takesAt(fn, stop.in) ? stage.jack(stop.in) : null
-  if (jack && !stage.settles(fn.while)) stage.report('function-not-acting', at)
+  const acts = stage.isSetToAct()
+  if (!acts) stage.report('function-not-acting', at)
   if (jack && isStopped(bench.question.material.protection, fn, jack)) {
     stage.report('protection', at)
   }
-  const input = jack && pictureInto(stage, jack, wave)
+  const input = acts && jack ? pictureInto(stage, jack, wave) : null
   if (!input) {
-    stage.report('input-not-fed', at)
+    if (acts) stage.report('input-not-fed', at)
     return null
   }
   const taken = take(stage, input)

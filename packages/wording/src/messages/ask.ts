@@ -80,6 +80,16 @@ export const ASK = {
   'answer.if-stereo': 'stereo matters',
   'answer.if-colour': 'it must be in [colour]',
   'answer.if-sold': 'the {name} is not to be used',
+  'answer.did-it-work': 'Did it work?',
+  'answer.worked': 'It worked',
+  'answer.worked-marks':
+    'Marks {sockets|# [socket]|# [sockets]} and {functions|# function|# functions} as tested today.',
+  'answer.worked-how': 'worked in a hookup',
+  'answer.worked-noted': 'Noted: everything that it used is tested.',
+  'answer.did-not': 'It did not',
+  'answer.did-not-explains': 'Shows where to note what failed, so that the next answer avoids it.',
+  'answer.did-not-where':
+    'Check the settings once more, then note on the page of a unit what does not work:',
   'answer.step-done': 'Step {number} is done',
   'answer.tick': 'Step {number} done',
   'answer.all-done': 'All steps are done',

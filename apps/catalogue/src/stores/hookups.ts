@@ -1,0 +1,82 @@
+import type { AnswerReply, HookupDetail, HookupSummary } from '@coaxwain/contract'
+import { err, ok, type Result } from '@coaxwain/result'
+import type { Hookup, Question } from '@coaxwain/shelf'
+import { defineStore } from 'pinia'
+import { shallowRef } from 'vue'
+import { call } from '../api/client'
+import type { Failure } from '../api/failure'
+import { createUid } from '../api/uid'
+
+/** Answers that were asked for, and hookups that were kept. */
+export const useHookups = defineStore('hookups', () => {
+  const saved = shallowRef<readonly HookupSummary[]>([])
+  const savedTotal = shallowRef(0)
+  const next = shallowRef<string | null>(null)
+  const last = shallowRef<{ key: string; reply: AnswerReply } | null>(null)
+
+  /** The same question about the same shelf is not asked twice in a row. */
+  async function ask(
+    collection: string,
+    question: Question,
+    shelfVersion: number,
+  ): Promise<Result<AnswerReply, Failure>> {
+    const key = JSON.stringify([collection, question])
+    const known = last.value
+    if (known?.key === key && known.reply.shelfVersion === shelfVersion) return ok(known.reply)
+    const reply = await call('ask', { params: { collection }, body: { question } })
+    if (!reply.ok) return err(reply.problem)
+    last.value = { key, reply: reply.value }
+    return ok(reply.value)
+  }
+
+  async function loadSaved(collection: string, more = false): Promise<Result<void, Failure>> {
+    const reply = await call('listHookups', {
+      params: { collection },
+      query: {
+        sort: '-saved',
+        limit: '20',
+        ...(more && next.value ? { cursor: next.value } : {}),
+      },
+    })
+    if (!reply.ok) return err(reply.problem)
+    saved.value = more ? [...saved.value, ...reply.value.items] : reply.value.items
+    next.value = reply.value.next
+    savedTotal.value = reply.value.total
+    return ok(undefined)
+  }
+
+  const read = (collection: string, hookup: string): Promise<Result<HookupDetail, Failure>> =>
+    call('readHookup', { params: { collection, hookup } })
+
+  const save = (
+    collection: string,
+    title: string,
+    question: Question,
+    hookup: Hookup,
+  ): Promise<Result<HookupDetail, Failure>> =>
+    call('saveHookup', {
+      params: { collection },
+      body: { uid: createUid(), title, question, hookup },
+    })
+
+  const rename = (
+    collection: string,
+    { uid, version }: HookupDetail,
+    title: string,
+  ): Promise<Result<HookupDetail, Failure>> =>
+    call('renameHookup', { params: { collection, hookup: uid }, body: { title }, version })
+
+  const remove = (
+    collection: string,
+    { uid, version }: HookupDetail,
+  ): Promise<Result<void, Failure>> =>
+    call('deleteHookup', { params: { collection, hookup: uid }, version })
+
+  const restore = (
+    collection: string,
+    { uid, version }: HookupDetail,
+  ): Promise<Result<HookupDetail, Failure>> =>
+    call('restoreHookup', { params: { collection, hookup: uid }, version: version + 1 })
+
+  return { saved, savedTotal, next, ask, loadSaved, read, save, rename, remove, restore }
+})

@@ -1,0 +1,49 @@
+import { err, ok, type Result } from '@coaxwain/result'
+import type { Snapshot } from '@coaxwain/shelf'
+import { defineStore } from 'pinia'
+import { computed, ref, shallowRef } from 'vue'
+import { call } from '../api/client'
+import type { Failure } from '../api/failure'
+import { createLookup } from '../format/lookup'
+
+const EMPTY: Snapshot = { shelfVersion: 0, catalogueVersion: 0, models: {}, units: [] }
+
+/** One collection's units with the models they are of: what drawings, strips and search boxes rest on. */
+export const useSnapshot = defineStore('snapshot', () => {
+  const snapshot = shallowRef<Snapshot>(EMPTY)
+  const of = ref<string | null>(null)
+  const failure = shallowRef<Failure | null>(null)
+  /** Whose units are held, fresh or stale. */
+  let shown: string | null = null
+  let loading: { collection: string; reply: Promise<Result<void, Failure>> } | null = null
+
+  const lookup = computed(() => createLookup(snapshot.value))
+  const ready = computed(() => snapshot.value !== EMPTY)
+
+  function load(collection: string): Promise<Result<void, Failure>> {
+    if (loading?.collection === collection) return loading.reply
+    if (shown !== collection) snapshot.value = EMPTY
+    const reply = call('readSnapshot', { params: { collection } }).then((r) => {
+      if (loading?.collection === collection) loading = null
+      failure.value = r.ok ? null : r.problem
+      if (!r.ok) return err(r.problem)
+      snapshot.value = r.value
+      of.value = collection
+      shown = collection
+      return ok(undefined)
+    })
+    loading = { collection, reply }
+    return reply
+  }
+
+  /** Loads unless this collection is here already. */
+  const ensure = async (collection: string): Promise<Result<void, Failure>> =>
+    of.value === collection ? ok(undefined) : load(collection)
+
+  /** The next reader asks the server again; what is shown stays until then. */
+  function markStale(): void {
+    of.value = null
+  }
+
+  return { snapshot, lookup, ready, failure, load, ensure, markStale }
+})
