@@ -44,6 +44,19 @@ describe('messages', () => {
     expect(unknown).toEqual([])
   })
 
+  it('write no word of the one English in the other', () => {
+    const british = new RegExp(
+      `\\b(${Object.values(WORDS)
+        .map((w) => w['en-GB'])
+        .join('|')})\\b`,
+      'i',
+    )
+    const bare = Object.values(MESSAGES).filter((m) =>
+      british.test(m.replace(/\[[A-Za-z]+\]|\{[^}]*\}/g, '')),
+    )
+    expect(bare).toEqual([])
+  })
+
   it('have no bracket left in any language', () => {
     const left = LOCALES.flatMap((l) =>
       Object.keys(MESSAGES).filter((c) => /\[[A-Za-z]+\]/.test(sentence(c, {}, l))),

@@ -95,7 +95,7 @@ export const APP = {
   'draft.leave': 'What you typed is kept on this device until you save or start afresh.',
   'help.keyboard': 'Keys',
   'help.keyboard-search': '/ goes to the search box.',
-  'help.marks': 'Sockets',
+  'help.marks': '[Sockets]',
   'help.cables': 'Cables',
   'help.states': 'States',
   'help.numbers': 'Numbers',

@@ -2,7 +2,8 @@
 export const ASK = {
   'ask.line': 'What shall play on what? Everything comes from your own shelf.',
   'ask.source': 'Source',
-  'ask.source-hint': 'The player, recorder, console, computer or box that the picture comes from.',
+  'ask.source-hint':
+    'The player, [recorder], console, computer or box that the picture comes from.',
   'ask.display': 'Set',
   'ask.display-hint': 'The television or monitor that is to show it.',
   'ask.playing': 'What it does',

@@ -43,7 +43,7 @@ export const HOOKUP = {
   'setting.power.unplugged': 'pull its [mains] plug',
   'setting.trim.up': 'Turn {control} up until the picture is full',
   'setting.trim.down': 'Turn {control} down until white no longer buzzes',
-  'setting.trim.by-eye': '{control} by eye: until the colour holds and the sound is clean',
+  'setting.trim.by-eye': '{control} by eye: until the [colour] holds and the sound is clean',
 
   'why.opens-way': 'it opens the way',
   'why.picks-input': 'chooses what comes in',
@@ -165,7 +165,7 @@ export const HOOKUP = {
   'caution.band-switch.more': 'On another band the tuner does not reach this channel.',
   'caution.aerial-to-box': 'The [aerial] goes to the {name}, and not to the {set}.',
   'caution.aerial-to-box.more': 'An old set finds no digital station by itself.',
-  'caution.sound-carrier-socket': 'One socket of the {name} says RF and is no [aerial] output.',
+  'caution.sound-carrier-socket': 'One [socket] of the {name} says RF and is no [aerial] output.',
   'caution.sound-carrier-socket.more': 'It carries digital sound for a decoder.',
   'caution.shared-socket':
     '{port} of the {name} takes composite only while its AV input is chosen.',
@@ -201,7 +201,7 @@ export const OBSTACLES = {
   'obstacle.added-socket':
     'Do not use {port} of the {to}. It was added later to a set whose chassis is or may be joined to the [mains]: everything plugged in there, and whoever touches it, may be live.',
   'obstacle.line-rate':
-    'The {from} draws {fromKhz} thousand lines a second; the {to} follows {toKhz} thousand. No [lead] changes that, and some sets are harmed by it: a scan converter is needed.',
+    'The {from} draws its lines at {fromKhz} kHz; the {to} follows {toKhz} kHz. No [lead] changes that, and some sets are harmed by it: a scan converter is needed.',
   'obstacle.field-rate':
     'The {from} gives {fromHz} pictures a second; the {to} follows {toHz}. The picture would roll: a standards converter is needed.',
   'obstacle.socket-dead': '{port} of the {to} is marked as dead.',

@@ -190,7 +190,7 @@ export const MODELS = {
   'plan.new-zealand': 'New Zealand',
   'plan.china-broadcast': 'China broadcast',
 
-  'mark.phono': 'Phono: the ring takes the colour of the plug',
+  'mark.phono': 'Phono: the ring takes the [colour] of the plug',
   'mark.f': 'F: six-sided nut, pin',
   'mark.iec-socket': '9.52 mm [aerial] [socket]: two thin rings, open hub',
   'mark.iec-plug': '9.52 mm [aerial] plug: split ring, solid pin',

@@ -81,9 +81,9 @@ export const PROBLEMS = {
   'field.in-use': '{name} is named by a noted state or a saved hookup, so it has to stay.',
   'field.used-before': '{name} was the key of something else before. Choose another key.',
   'field.quantity-of-device':
-    'Of a device there is one to a unit; only leads and small parts are counted.',
+    'Of a device there is one to a unit; only [leads] and small parts are counted.',
   'field.check-failed': 'The check found a fault here: {name}.',
-  'field.devices-only': 'A lead or an adapter has no such thing.',
+  'field.devices-only': 'A [lead] or an adapter has no such thing.',
 
   'field.key-repeated': 'The key {name} is used twice. Give one of them another.',
   'field.unknown-port': 'There is no [socket] with the key {name}.',

@@ -31,7 +31,7 @@ export const SCREENS = {
   'seen.grey': 'Steady black and white, {sharpness}',
   'seen.none': 'No picture',
   'sharpness.none': 'nothing',
-  'sharpness.luma-only': 'grey only',
+  'sharpness.luma-only': '[grey] only',
   'sharpness.rf': 'a little soft',
   'sharpness.composite': 'ordinary edges',
   'sharpness.s-video': 'cleaner edges',

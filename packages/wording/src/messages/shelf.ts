@@ -79,7 +79,7 @@ export const SHELF = {
   'unit.change-isolator.bad': 'The [aerial] isolator is bad: do not join an [aerial] [lead].',
   'unit.change-isolator.bypassed':
     'The [aerial] isolator is bypassed: do not join an [aerial] [lead].',
-  'unit.isolator': 'Aerial isolator',
+  'unit.isolator': '[Aerial] isolator',
   'unit.isolator-none': 'nothing noted',
   'unit.isolator.tested-good': 'tested, good',
   'unit.isolator.bad': 'bad',
