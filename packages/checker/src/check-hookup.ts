@@ -6,6 +6,7 @@ import { checkClaims, checkDemands } from './claims'
 import { checkDoubt } from './doubt'
 import { Ears, soundOf } from './ears'
 import type { Finding } from './finding'
+import { checkLineEnds } from './line-ends'
 import { checkLinks } from './links'
 import { checkPlugging } from './plugging'
 import { checkSettings } from './settings'
@@ -35,6 +36,7 @@ export function checkHookup(snapshot: Snapshot, question: Question, hookup: Hook
     ...checkLinks(bench),
     ...checkPlugging(bench),
     ...checkSettings(bench),
+    ...checkLineEnds(bench),
     ...bench.found,
     ...checkAerial(bench),
     ...checkClaims(bench, picture, sound),

@@ -49,7 +49,8 @@ function effortOf({ question, hookup, view }: Bench): { boxes: number; pieces: n
   const devices = unitsIn(hookup)
     .filter((u) => !ends.includes(u))
     .flatMap((u) => view.device(u) ?? [])
-  const copies = new Set(hookup.links.flatMap((l) => l.pieces.map((p) => `${p.model} ${p.copy}`)))
+  const pieces = [...hookup.links.flatMap((l) => l.pieces), ...(hookup.ends ?? [])]
+  const copies = new Set(pieces.map((p) => `${p.model} ${p.copy}`))
   const boxes = devices.filter(isPowered).length
   return { boxes, pieces: copies.size + devices.length - boxes }
 }

@@ -47,6 +47,8 @@ export const FINDINGS = [
   'light-gun',
   'demand-missed',
   'line-not-ended',
+  'line-ended-twice',
+  'terminator-misplaced',
   'claims-picture',
   'claims-sound',
   'claims-effort',

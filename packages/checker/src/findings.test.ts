@@ -5,6 +5,7 @@ import {
   codes,
   deviceIn,
   functionIn,
+  looped,
   modulated,
   pieceIn,
   portIn,
@@ -170,6 +171,12 @@ const FAULTS: Readonly<Record<FindingCode, Fault>> = {
   'line-not-ended': direct((r) => {
     addInputSwitch(r, 'tv')
     portIn(r, 'set', 'video-in').load = { kind: 'switch', control: 'input', position75: 'line' }
+  }),
+  'line-ended-twice': fault(looped)((r) => {
+    portIn(r, 'loop', 'video-in').load = { kind: '75' }
+  }),
+  'terminator-misplaced': direct((r) => {
+    r.hookup.ends = [{ unit: 'set', port: 'aerial-in', model: 'phonos', copy: 2 }]
   }),
   'claims-picture': direct((r) => void (r.hookup.picture.quality = 's-video')),
   'claims-sound': direct((r) => void (r.hookup.sound.sound = 'mono')),

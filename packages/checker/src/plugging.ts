@@ -57,7 +57,10 @@ function wiresJoined({ hookup, view }: Bench): Finding[] {
 /** More copies of a piece than the drawer holds; leads that are assumed to be there never run out. */
 function shortOf({ question, hookup, view }: Bench): Finding[] {
   const copies = new Map<string, Set<number>>()
-  for (const { model, copy } of hookup.links.flatMap((l) => l.pieces)) {
+  for (const { model, copy } of [
+    ...hookup.links.flatMap((l) => l.pieces),
+    ...(hookup.ends ?? []),
+  ]) {
     if (question.assumedLeads.includes(model)) continue
     copies.set(model, (copies.get(model) ?? new Set()).add(copy))
   }

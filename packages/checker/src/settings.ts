@@ -1,17 +1,14 @@
 import { POWER_KEY, POWER_STATES, type AutoCause, type AutoControl } from '@coaxwain/models'
 import type { Setting } from '@coaxwain/shelf'
-import { isSoundCircuit } from '@coaxwain/signal'
 import type { Bench } from './bench'
 import { finding, type Finding, type FindingCode } from './finding'
 
-/** Every setting names a position that is there and can be reached, and lines end where they should. */
-export const checkSettings = (bench: Bench): Finding[] => [
-  ...bench.hookup.settings.flatMap((setting) => {
+/** Every setting names a position that is there and can be reached. */
+export const checkSettings = (bench: Bench): Finding[] =>
+  bench.hookup.settings.flatMap((setting) => {
     const code = wrongWith(setting, bench)
     return code === null ? [] : [finding(code, { unit: setting.unit, control: setting.control })]
-  }),
-  ...checkLineEnds(bench),
-]
+  })
 
 function wrongWith(setting: Setting, bench: Bench): FindingCode | null {
   const { position } = setting
@@ -54,15 +51,4 @@ function isMoved({ hookup }: Bench, control: AutoControl, { unit, position }: Se
     }
   }
   return control.positions.some((p) => p.key === position && acts(p.cause))
-}
-
-/** An input with a 75-ohm switch ends its line here, so the switch must stand so. */
-function checkLineEnds({ hookup, view, positions }: Bench): Finding[] {
-  return hookup.links.flatMap((l): Finding[] => {
-    const load = view.port(l.to.unit, l.to.port)?.load
-    if (load?.kind !== 'switch' || l.circuits.every((c) => isSoundCircuit(c.from))) return []
-    return positions.of(l.to.unit, load.control) === load.position75
-      ? []
-      : [finding('line-not-ended', { unit: l.to.unit, port: l.to.port })]
-  })
 }

@@ -90,6 +90,21 @@ export const MODULATOR = device({
   ],
 })
 
+/** Passes a picture on by its loop, and has an input that lifts its own load then. */
+export const LOOP = device({
+  maker: 'Rig',
+  name: 'loop box',
+  kind: 'selector',
+  market: 'any',
+  back: [
+    [
+      compositeIn('video-in', 'VIDEO', { load: { kind: 'ends-itself' }, loopsTo: 'video-loop' }),
+      compositeOut('video-loop', 'LOOP'),
+    ],
+  ],
+  functions: [passes('loop', 'loop-through', 'video-in', { to: ['video-loop'] })],
+})
+
 export const AERIAL = device({
   maker: 'Rig',
   name: 'aerial',

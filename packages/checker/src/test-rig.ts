@@ -12,7 +12,7 @@ import type {
 import type { Circuit, PictureSignal } from '@coaxwain/signal'
 import { checkHookup } from './check-hookup'
 import type { FindingCode } from './finding'
-import { AERIAL, MODULATOR, PIECES, PLAYER, SET, SWITCH } from './test-models'
+import { AERIAL, LOOP, MODULATOR, PIECES, PLAYER, SET, SWITCH } from './test-models'
 
 /** Whole hookups for the tests beside this file: right as they stand, and built anew by every call. */
 
@@ -230,6 +230,31 @@ export const straight = (): Rig =>
       axes: axes(0, 1),
       picture: { colour: true, quality: 'composite', lumaMhz: 4.2, degradations: [] },
       sound: 'stereo',
+    },
+  )
+
+/** The same player without its sound, through a box that passes the line on. */
+export const looped = (): Rig =>
+  rigOf(
+    { player: PLAYER, loop: LOOP, set: SET },
+    {
+      legs: [
+        leg(
+          'picture',
+          [0, 1],
+          ['player', 'play', [null, 'video-out'], COMPOSITE],
+          ['loop', 'loop', ['video-in', 'video-loop'], COMPOSITE],
+          ['set', 'line', ['video-in', null], COMPOSITE],
+        ),
+      ],
+      links: [
+        link('player:video-out', use('phonos', 0), 'loop:video-in', 'cvbs'),
+        link('loop:video-loop', use('phonos', 0, 2), 'set:video-in', 'cvbs'),
+      ],
+      settings: [],
+      axes: axes(0, 3),
+      picture: { colour: true, quality: 'composite', lumaMhz: 4.2, degradations: [] },
+      sound: 'none',
     },
   )
 

@@ -144,6 +144,10 @@ const caution = z.strictObject({ code, details })
 const hookupDocument = z.strictObject({
   legs: z.array(leg).max(20),
   links: z.array(link).max(200),
+  ends: z
+    .array(z.strictObject({ unit: thing, port: key, model: thing, copy: z.int().min(0).max(1000) }))
+    .max(40)
+    .optional(),
   settings: z.array(setting).max(200),
   picture: z.strictObject({
     colour: z.boolean(),

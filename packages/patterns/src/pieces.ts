@@ -53,6 +53,10 @@ const transforms = (...impedanceOhm: readonly [number, number]): Facts => ({
   impedanceOhm,
 })
 
+/** A load on the loop socket of the last unit of a line. */
+const terminator = (name: string, plug: Connector): PieceModel =>
+  piece({ name, kind: 'terminator', a: [plug], b: [], wires: [] })
+
 /** Leads and adapters that any shop of the trade has. */
 export const PIECES = {
   'phono-lead': equal('phono lead', 'phono-plug', 1),
@@ -123,4 +127,6 @@ export const PIECES = {
     meantFor: ['audio-l', 'audio-r', 'audio-mono'],
     mixes: true,
   }),
+  'terminator-bnc': terminator('75 ohm terminator, BNC', 'bnc-plug'),
+  'terminator-phono': terminator('75 ohm terminator, phono', 'phono-plug'),
 } satisfies Record<string, PieceModel>

@@ -170,9 +170,16 @@ export interface HeardSound {
   readonly from: Uid | null
 }
 
+/** A terminator on the loop socket of an input that does not end its line itself. */
+export interface LineEnd extends PortRef {
+  readonly model: Uid
+  readonly copy: number
+}
+
 export interface Hookup {
   readonly legs: readonly Leg[]
   readonly links: readonly Link[]
+  readonly ends?: readonly LineEnd[] | undefined
   readonly settings: readonly Setting[]
   readonly picture: SeenPicture
   readonly sound: HeardSound

@@ -44,6 +44,7 @@ export function stepsOf(hookup: Hookup, snapshot: Snapshot): HookupStep[] {
     ...checks(hookup),
     fetch(hookup, look),
     ...joins(hookup, look),
+    ...lineEnds(hookup, look),
     ...settings(hookup, look),
   ]
   return drafts.map((draft, i) => ({ ...draft, number: i + 1 }))
@@ -105,7 +106,7 @@ function fetch(hookup: Hookup, look: Lookup): Draft {
       : plain('step.fetch.unit-at', { name, place })
   })
   const copies = new Map<Uid, Set<number>>()
-  for (const piece of hookup.links.flatMap((l) => l.pieces)) {
+  for (const piece of [...hookup.links.flatMap((l) => l.pieces), ...(hookup.ends ?? [])]) {
     copies.set(piece.model, (copies.get(piece.model) ?? new Set()).add(piece.copy))
   }
   const pieces = [...copies].map(([model, set]): Say => {
@@ -151,6 +152,20 @@ function joins(hookup: Hookup, look: Lookup): Draft[] {
     }))
   })
 }
+
+/** Terminators, one by one. */
+const lineEnds = (hookup: Hookup, look: Lookup): Draft[] =>
+  (hookup.ends ?? []).map((end) => ({
+    kind: 'join',
+    say: plain('step.end-line', {
+      name: look.piece(end.model).name,
+      to: look.name(end.unit),
+      toPort: look.portLabel(end),
+    }),
+    lines: [],
+    segments: [],
+    settings: [],
+  }))
 
 const USUAL_COLOUR: Partial<Record<Circuit, PlugColour>> = {
   cvbs: 'yellow',

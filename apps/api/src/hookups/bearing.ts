@@ -46,7 +46,7 @@ export const usedUnits = (question: Question, hookup: Hookup): Uid[] => [
 /** How many of each lead or adapter it takes; plugs of one copy are one piece. */
 export function usedPieces(hookup: Hookup): Map<Uid, number> {
   const copies = new Map<Uid, Set<number>>()
-  for (const piece of hookup.links.flatMap((l) => l.pieces)) {
+  for (const piece of [...hookup.links.flatMap((l) => l.pieces), ...(hookup.ends ?? [])]) {
     copies.set(piece.model, (copies.get(piece.model) ?? new Set()).add(piece.copy))
   }
   return new Map([...copies].map(([model, found]) => [model, found.size]))

@@ -1,4 +1,11 @@
-import { controlOf, jackOf, type DeviceModel, type Give, type Key } from '@coaxwain/models'
+import {
+  controlOf,
+  jackOf,
+  together,
+  type DeviceModel,
+  type Give,
+  type Key,
+} from '@coaxwain/models'
 import { draftsOf, isSoundOnly, soundDraftsOf } from './drafts'
 import type { FaceTable, Placed } from './face'
 import {
@@ -11,6 +18,7 @@ import {
   reachable,
   socketsClash,
 } from './leans'
+import { lineEnding, type LineEnding } from './line-end'
 import type { Variant } from './variant'
 import { soundEnd, type Draft, type SoundPlace, type Way } from './way'
 
@@ -38,25 +46,33 @@ export class WayMaker {
     return drafts.flatMap((draft) => this.make(variant, draft) ?? [])
   }
 
-  private make(variant: Variant, draft: Draft): Way | null {
-    const moved = canBe(variant.device, draft) ? causes(variant.device, draft) : null
+  private make(variant: Variant, plain: Draft): Way | null {
+    const ended = withLineEnds(variant.device, plain)
+    return ended && this.offered(variant, ended)
+  }
+
+  private offered(variant: Variant, { draft, ending }: Ended): Way | null {
+    const { device } = variant
+    const moved = canBe(device, draft) ? causes(device, draft) : null
     if (!moved) return null
-    const leans = leansOf(variant.device, draft)
+    const leans = leansOf(device, draft)
     const offers = offersOf(variant, leans)
     const dead = offers.length === 0 ? deadPort(variant, leans) : null
     if (offers.length === 0 && dead === null) return null
-    const wired = withDc(variant.device, moved.dcAt)
+    const wired = withDc(device, moved.dcAt)
     return {
       ...draft,
       id: this.made++,
-      takeId: numberOf(this.takes, takeContent(variant.device, draft)),
-      leaveId: numberOf(this.leaves, leaveContent(variant.device, draft)),
+      takeId: numberOf(this.takes, takeContent(device, draft)),
+      leaveId: numberOf(this.leaves, leaveContent(device, draft)),
       variant,
+      terminate: ending.terminate,
+      openEnded: ending.open,
       leans,
       into: this.face(wired, draft.in, draft.soundFrom, []),
       from: this.face(wired, draft.out?.jack ?? null, draft.soundTo, draft.out?.volts ?? []),
       offers,
-      harm: harmOf(variant.device, draft),
+      harm: harmOf(device, draft),
       dead,
     }
   }
@@ -75,6 +91,18 @@ export class WayMaker {
       volts: volts ?? [],
     })
   }
+}
+
+interface Ended {
+  readonly draft: Draft
+  readonly ending: LineEnding
+}
+
+/** The draft with the switches that end its lines. */
+function withLineEnds(device: DeviceModel, draft: Draft): Ended | null {
+  const ending = lineEnding(device, draft)
+  const stand = ending && together(draft.stand, ending.stand)
+  return stand && { draft: { ...draft, stand }, ending }
 }
 
 function numberOf(table: Map<string, number>, content: string): number {

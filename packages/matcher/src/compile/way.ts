@@ -37,6 +37,10 @@ export interface Way extends Draft {
   /** The same for ways whose outputs make the same of what was taken. */
   readonly leaveId: number
   readonly variant: Variant
+  /** Loop sockets that want a terminator, so that the line ends. */
+  readonly terminate: readonly Key[]
+  /** Nothing at this input ends the line. */
+  readonly openEnded: boolean
   /** What a unit must be able to do for it. */
   readonly leans: Leans
   readonly into: Placed | null

@@ -52,6 +52,8 @@ export interface Drawer {
   readonly mixers: boolean
   /** The piece is made for such a circuit. */
   suits(piece: number, circuit: Circuit): boolean
+  /** A terminator that goes onto a connector, or null when there is none. */
+  terminatorFor(connector: Connector): number | null
   /** The same drawer without what would have to be bought. */
   readonly owned: Drawer
   /** Pieces that can be pushed onto a connector, by that connector. */
@@ -116,12 +118,13 @@ function view(pieces: readonly DrawerPiece[], among: (piece: DrawerPiece) => boo
   const turned = pieces.flatMap((drawn, i) => {
     if (!among(drawn)) return []
     const { piece } = drawn
+    if (piece.kind === 'terminator') return []
     return symmetric(piece)
       ? [turn(piece, i, 'forward')]
       : [turn(piece, i, 'forward'), turn(piece, i, 'reverse')]
   })
   const byConnector = new Map<Connector, { turned: Turned; plug: number }[]>()
-  const present = pieces.filter(among)
+  const present = pieces.filter((p) => among(p) && p.piece.kind !== 'terminator')
   const made: Drawer = {
     pieces,
     turned,
@@ -129,6 +132,15 @@ function view(pieces: readonly DrawerPiece[], among: (piece: DrawerPiece) => boo
     mixers: present.some((p) => p.piece.mixes),
     suits: (piece, circuit) => meantFor(pieces[piece]?.piece.meantFor, circuit),
     total: present.reduce((sum, p) => sum + p.stock, 0),
+    terminatorFor(connector) {
+      const at = pieces.findIndex(
+        (p) =>
+          among(p) &&
+          p.piece.kind === 'terminator' &&
+          p.piece.a.some((plug) => mates(plug.connector, connector)),
+      )
+      return at < 0 ? null : at
+    },
     get owned() {
       return made
     },
@@ -199,7 +211,7 @@ function classes(
   const groups = new Map<string, { model: Uid; stock: number; piece: PieceModel }[]>()
   for (const [model, count] of stock) {
     const piece = snapshot.models[model]
-    if (piece?.type !== 'piece' || piece.kind === 'terminator' || count <= 0) continue
+    if (piece?.type !== 'piece' || count <= 0) continue
     const key = `${bought.has(model) ? 1 : 0} ${content(piece)}`
     groups.set(key, [...(groups.get(key) ?? []), { model, stock: count, piece }])
   }

@@ -1,3 +1,4 @@
+import { portOf } from '@coaxwain/models'
 import type { Obstacle } from '@coaxwain/shelf'
 import { fits, mates } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
@@ -159,6 +160,7 @@ function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
   const broken = [
     ...socketBreaks(way, endsOf(label.way, way)),
     ...leadBreaks(label, way, join),
+    ...endBreaks(way, endsOf(label.way, way), tools),
     ...signalBreaks(label, way, join, tools),
   ]
   return { boxes: label.boxes, pieces: label.pieces + (join?.pieces ?? 1), broken }
@@ -188,6 +190,14 @@ function wrongPlug(
   const forms = { fromForm: out.form ?? '', toForm: into.form ?? '' }
   const wrong = obstacle('wrong-circuits', { ...ends, ...forms }, { lookalike: true })
   return [wrong, ...ratesAt(way, label, ends)]
+}
+
+/** A line that nothing at hand ends. */
+function endBreaks({ terminate, variant }: Way, ends: Ends, { joins }: ReasonTools): Obstacle[] {
+  return terminate
+    .map((key) => portOf(variant.device, key))
+    .filter((port) => joins.drawer.terminatorFor(port.connector) === null)
+    .map((port) => obstacle('line-not-ended', { ...ends, port: port.label }))
 }
 
 /** A socket that is dead, or that would harm somebody. */

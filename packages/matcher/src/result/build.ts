@@ -21,6 +21,7 @@ export function buildHookup(input: BuildInput): Hookup {
   const draft: Omit<Hookup, 'cautions'> = {
     legs,
     links: made.links,
+    ...(made.ends.length > 0 ? { ends: made.ends } : {}),
     settings: [...stops, ...alonePlacings(input)].flatMap(settingsOf),
     picture: found.picture,
     sound: { sound: found.sound, from: speaker(input) },
@@ -138,6 +139,9 @@ function makeLegs(input: BuildInput, stops: readonly PathStop[], made: LinkMaker
       if (circuits.some((c) => !isSoundCircuit(c.from))) pictureLinks.push(link)
       if (circuits.some((c) => isSoundCircuit(c.from))) soundLinks.push(link)
     }
+    step.terminators.forEach((piece, nth) =>
+      made.end(piece, { unit: to.unit.uid, port: to.way.terminate[nth]! }),
+    )
     if (step.soundRoute)
       soundLinks.push(...addRoute(input, made, step.soundRoute, [waitingAt(path, stops, i), to]))
   })

@@ -1,4 +1,4 @@
-import type { Link, PieceUse, PortRef, Uid } from '@coaxwain/shelf'
+import type { LineEnd, Link, PieceUse, PortRef, Uid } from '@coaxwain/shelf'
 import type { Placed } from '../compile/face'
 import type { Drawer } from '../join/drawer'
 import type { Join } from '../join/join'
@@ -13,6 +13,7 @@ export class LinkMaker {
   private readonly copies = new Map<Uid, number>()
   private readonly drawn = new Map<number, number>()
   readonly links: Link[] = []
+  readonly ends: LineEnd[] = []
 
   constructor(private readonly drawer: Drawer) {}
 
@@ -28,14 +29,21 @@ export class LinkMaker {
     return models.at(-1)!.model
   }
 
+  /** A terminator on a socket. */
+  end(piece: number, at: PortRef): void {
+    this.ends.push({ ...at, ...this.take(piece) })
+  }
+
+  private take(piece: number): { model: Uid; copy: number } {
+    const model = this.draw(piece)
+    const copy = (this.copies.get(model) ?? 0) + 1
+    this.copies.set(model, copy)
+    return { model, copy }
+  }
+
   /** Adds the links of one join, and says which they are. */
   add(join: Join, from: End, to: End): number[] {
-    const copies = join.routing.instances.map(({ piece }) => {
-      const model = this.draw(piece)
-      const copy = (this.copies.get(model) ?? 0) + 1
-      this.copies.set(model, copy)
-      return { model, copy }
-    })
+    const copies = join.routing.instances.map(({ piece }) => this.take(piece))
     const made: number[] = []
     join.wires.forEach((wire, i) => {
       const pieces = (join.routing.hops[i] ?? []).map((hop): PieceUse => ({

@@ -43,7 +43,6 @@ export function settingsOf(placing: Placing): Setting[] {
   return [
     ...power(placing, wanted),
     ...switches(placing, wanted),
-    ...lineEnds(placing),
     ...sending(placing),
     ...tuning(placing, wanted),
     ...shape(placing, wanted),
@@ -112,25 +111,6 @@ function alsoTunes(
   return all.filter(
     (p) => tunedAs(variant, control.key, receives.visionMhz, new Map([[key, [p]]])) !== null,
   )
-}
-
-/** A switchable input ends its line here. */
-function lineEnds(placing: Placing): Setting[] {
-  const { device } = placing.variant
-  return (placing.way.into?.ports ?? []).flatMap((key): Setting[] => {
-    const load = device.ports.find((p) => p.key === key)?.load
-    if (load?.kind !== 'switch') return []
-    const control = controlOf(device, load.control)
-    return [
-      {
-        ...base(placing, control),
-        position: load.position75,
-        orElse: [],
-        why: 'ends-line',
-        must: true,
-      },
-    ]
-  })
 }
 
 function sending(placing: Placing): Setting[] {

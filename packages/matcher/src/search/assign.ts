@@ -1,7 +1,7 @@
 import type { Unit } from '@coaxwain/shelf'
 import { leastDoubt, type Way } from '../compile/way'
 import type { Join } from '../join/join'
-import { pathOf, type Finished } from './label'
+import { pathOf, type Finished, type Step } from './label'
 
 /** Every way that a chain uses of boxes from the shelf, in order: on the picture's path, then for sound alone. */
 export function waysUsed(found: Finished): Way[] {
@@ -20,11 +20,16 @@ export function waysUsed(found: Finished): Way[] {
   ]
 }
 
+/** Every step of a chain, the last into the display. */
+export const stepsOf = (found: Finished): Step[] => [
+  ...pathOf(found.last).flatMap((l) => (l.step ? [l.step] : [])),
+  found.step,
+]
+
 /** Every set of pieces that a chain uses, in order. */
 export function joinsUsed(found: Finished): Join[] {
-  const steps = [...pathOf(found.last).flatMap((l) => (l.step ? [l.step] : [])), found.step]
   return [
-    ...steps.flatMap((s) => [s.join, ...(s.soundRoute?.joins ?? [])]),
+    ...stepsOf(found).flatMap((s) => [s.join, ...(s.soundRoute?.joins ?? [])]),
     ...(found.speakers?.route.joins ?? []),
     ...(found.aerial?.route.joins ?? []),
   ]
@@ -81,8 +86,8 @@ export function leastApart(
 
 function piecesShort(found: Finished, stockOf: (piece: number) => number): Set<number> {
   const used = new Map<number, number>()
-  for (const join of joinsUsed(found)) {
-    for (const { piece } of join.routing.instances) used.set(piece, (used.get(piece) ?? 0) + 1)
-  }
+  const note = (piece: number): void => void used.set(piece, (used.get(piece) ?? 0) + 1)
+  for (const join of joinsUsed(found)) join.routing.instances.forEach((i) => note(i.piece))
+  for (const step of stepsOf(found)) step.terminators.forEach(note)
   return new Set([...used].filter(([piece, n]) => n > stockOf(piece)).map(([piece]) => piece))
 }

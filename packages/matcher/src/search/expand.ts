@@ -172,10 +172,10 @@ const entryOf = (
   sound: Pick<Step, 'soundRoute' | 'soundIn'>,
   left: SoundState,
 ): Entry => {
-  const { join, taken } = move
+  const { join, taken, terminators } = move
   const route = sound.soundRoute
   return {
-    step: { join, taken, ...sound },
+    step: { join, taken, terminators, ...sound },
     left,
     boxes: move.boxes + (route?.boxes ?? 0),
     pieces: move.pieces + (route?.pieces ?? 0),

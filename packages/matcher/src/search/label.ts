@@ -82,6 +82,8 @@ export interface Step {
   readonly join: Join
   readonly taken: Taken
   readonly soundRoute: SoundRoute | null
+  /** Terminators that end the lines, by sort. */
+  readonly terminators: readonly number[]
   /** Sound that came in by this step, by whatever way. */
   readonly soundIn: Sound
 }

@@ -1,4 +1,4 @@
-import { allTogether, type Condition } from '@coaxwain/models'
+import { allTogether, portOf, type Condition } from '@coaxwain/models'
 import { accept, type Taken } from '../compile/accept'
 import type { Face } from '../compile/face'
 import { leave, type Leaving } from '../compile/leave'
@@ -18,6 +18,8 @@ export interface Move extends Cost {
   /** The join brings the sound as well, from where the picture comes from. */
   readonly withSound: boolean
   readonly taken: Taken
+  /** Terminators that end the lines, by sort. */
+  readonly terminators: readonly number[]
   /** Null where the picture stays. */
   readonly leaving: Leaving | null
   readonly stand: Condition
@@ -78,6 +80,7 @@ const contentOf = (way: Way): string =>
     way.variant.powered,
     priceOf(way.variant),
     way.stand,
+    way.terminate.map((key) => portOf(way.variant.device, key).connector),
   ])
 
 function entrancesOf(ways: readonly Way[], apart: (way: Way) => boolean): Entrance[] {
@@ -145,6 +148,8 @@ export class MoveTable {
 
   private through(kin: Kin, join: Join, taken: Taken): Move[] {
     const [way] = kin
+    const terminators = this.terminatorsFor(way)
+    if (!terminators) return []
     const lumaOnly = join.picture === 'luma-only'
     return this.leavings(way, taken, lumaOnly).flatMap((leaving) => {
       const stand = allTogether(way.stand, taken.stand, leaving?.stand)
@@ -158,14 +163,29 @@ export class MoveTable {
         join,
         withSound: join.sound !== null,
         taken,
+        terminators,
         leaving,
         stand,
         boxes: inside && powered ? 1 : 0,
-        pieces: join.pieces + (inside && !powered ? 1 : 0),
+        pieces: join.pieces + terminators.length + (inside && !powered ? 1 : 0),
         doubt: unknown + (join.dcUnknown ? 1 : 0) + leastDoubt(way),
-        bought: join.bought + priceOf(way.variant),
+        bought: join.bought + this.priceOf(terminators) + priceOf(way.variant),
       }
     })
+  }
+
+  /** Null where a line would stay open for want of one. */
+  private terminatorsFor({ terminate, variant }: Way): number[] | null {
+    const found = terminate.map((key) => {
+      const { connector } = portOf(variant.device, key)
+      const { drawer } = this.joins
+      return drawer.owned.terminatorFor(connector) ?? drawer.terminatorFor(connector)
+    })
+    return found.every((t) => t !== null) ? found : null
+  }
+
+  private priceOf(terminators: readonly number[]): number {
+    return terminators.filter((t) => this.joins.drawer.pieces[t]?.bought).length
   }
 
   private leavings(way: Way, taken: Taken, lumaOnly: boolean): readonly (Leaving | null)[] {

@@ -180,10 +180,12 @@ export class Search {
 
 function scarcePieces(label: Label): Map<number, number> {
   const used = new Map<number, number>()
-  for (let at: Label | null = label; at; at = at.prev) {
-    for (const join of [at.step?.join, ...(at.step?.soundRoute?.joins ?? [])]) {
-      for (const [piece, n] of join?.scarce ?? []) used.set(piece, (used.get(piece) ?? 0) + n)
-    }
+  const note = (piece: number, n: number): void => void used.set(piece, (used.get(piece) ?? 0) + n)
+  for (let at: Label = label; at.prev && at.step; at = at.prev) {
+    const { join, soundRoute, terminators } = at.step
+    for (const { scarce } of [join, ...(soundRoute?.joins ?? [])])
+      for (const [piece, n] of scarce) note(piece, n)
+    for (const piece of terminators) note(piece, 1)
   }
   return used
 }

@@ -25,6 +25,7 @@ export const HOOKUP = {
   'step.join.orange': 'Orange: {from} {fromPort} to {to} {toPort}.',
   'step.join.grey': '[Grey]: {from} {fromPort} to {to} {toPort}.',
   'step.join.colours': '[Colour] to [colour] at both ends: {from} {fromPort} to {to} {toPort}.',
+  'step.end-line': '{name} on {to} {toPort}: the line ends there.',
   'step.not-the-green': 'Not the green {port}: that gives a [grey] picture.',
   'step.screw-home': 'Screw it home with your fingers.',
   'step.aerial-lugs-off':
@@ -190,6 +191,9 @@ export const HOOKUP = {
   'caution.direction-switch.more': 'On the wrong side there is no picture.',
   'caution.choose-by-hand': 'Choose the input of the {name} by hand.',
   'caution.choose-by-hand.more': 'Nothing on this [lead] wakes it.',
+  'caution.line-open': 'Nothing at the input of the {name} ends the line.',
+  'caution.line-open.more':
+    'The picture may be too bright; a 75 ohm terminator on a T piece ends it.',
   'caution.less-detail': 'High definition becomes an ordinary television picture.',
   'caution.less-detail.more': 'Small text will be hard to read.',
 } as const
@@ -232,6 +236,8 @@ export const OBSTACLES = {
   'obstacle.vision-polarity':
     'The {from} sends system {system}; the tuner of the {to} works the other way round and would show a negative picture.',
   'obstacle.not-taken': 'The input of the {to} does not take what the {from} gives.',
+  'obstacle.line-not-ended':
+    'The input of the {to} does not end its line, and there is no 75 ohm terminator for {port}: the picture would be far too bright.',
   'obstacle.out-of-reach':
     'The remote of the {to} is missing, and nobody has noted where {control} stands. Look on its screen and note it on the unit’s page.',
   'obstacle.no-lead':

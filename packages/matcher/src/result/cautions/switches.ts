@@ -60,6 +60,10 @@ const sharedSocket: Rule = (c) => {
     .map((p) => caution('shared-socket', { name: named(display(c)), port: p.label }))
 }
 
+/** An input of high impedance without a loop (formulas of video lines: about twice the amplitude). */
+const openLine: Rule = (c) =>
+  c.stops.filter((s) => s.way.openEnded).map((s) => caution('line-open', { name: named(s) }))
+
 /** Positions that decide whether anything comes at all. */
 export const SWITCHES: readonly Rule[] = [
   progressive,
@@ -67,4 +71,5 @@ export const SWITCHES: readonly Rule[] = [
   directionSwitch,
   chooseByHand,
   sharedSocket,
+  openLine,
 ]
