@@ -45,7 +45,7 @@ export function createSearch(
     hookups ??
     solver
       .soFar()
-      .map((solved) => buildHookup({ solved, frame: solver.frame, offAir: question.offAir }))
+      .map((solved) => buildHookup({ ...solved, frame: solver.frame, offAir: question.offAir }))
 
   const settle = (): void => {
     if (!solver.done || hookups) return

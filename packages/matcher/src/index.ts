@@ -7,3 +7,4 @@ export {
   type SearchOptions,
 } from './create-search'
 export { partUid, withParts, type Parts } from './reasons/purchases'
+export { createArrangementSearch, type ArrangementSearch } from './uses/create-arrangement-search'

@@ -23,6 +23,8 @@ export interface Material {
   readonly shape?: Shape | undefined
   readonly protection: Protection
   readonly sound?: Sound | undefined
+  /** The two sound tracks are two programmes, of which one is wanted. */
+  readonly twoProgrammes?: boolean | undefined
 }
 
 export interface Demands {

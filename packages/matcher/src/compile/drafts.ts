@@ -13,7 +13,7 @@ import {
 } from '@coaxwain/models'
 import { isPictureForm, type Circuit, type PictureForm } from '@coaxwain/signal'
 import { embedsSound } from './signal'
-import type { Draft, SoundEnd, SoundPlace } from './way'
+import { soundEnd, type Draft, type SoundEnd, type SoundPlace } from './way'
 
 /** The parts of a sound jack that may be used: both channels, each alone, mono. */
 function soundEnds(jack: Jack): SoundEnd[] {
@@ -40,8 +40,23 @@ function soundInputs(
   const optional = (fn.optional ?? []).map((o) => ({ jack: o.jack, stand: o.while ?? [] }))
   const needed = [...fn.needs, ...(fn.oneOf ?? [])].map((jack) => ({ jack, stand: [] }))
   return [...optional, ...needed].flatMap(({ jack, stand }) =>
-    endsOf(device, jack).map((end) => ({ end, stand })),
+    endsOf(device, jack)
+      .filter((end) => !isMonoSocket(jackOf(device, jack), end))
+      .map((end) => ({ end, stand })),
   )
+}
+
+/** With nothing in the other socket, a left socket that takes a whole mono sound puts it on both channels. */
+const isMonoSocket = (jack: Jack, { circuits }: SoundEnd): boolean => {
+  const portOf = (circuit: Circuit): Key | undefined =>
+    jack.contacts.find((c) => c.circuit === circuit)?.port
+  return circuits.join() === 'audio-l' && portOf('audio-mono') === portOf('audio-l')
+}
+
+/** What comes in on one channel alone does not go out on the other. */
+const crosses = ({ from, to, mono }: SoundPart): boolean => {
+  const [a, b] = [soundEnd(from)?.circuits.join(), soundEnd(to)?.circuits.join()]
+  return !mono && ((a === 'audio-l' && b === 'audio-r') || (a === 'audio-r' && b === 'audio-l'))
 }
 
 export const isSoundOnly = (device: DeviceModel, fn: ModelFunction): boolean =>
@@ -93,7 +108,7 @@ function outputsBeside(device: DeviceModel, part: SoundPart, inside: boolean): S
   return outputs.flatMap(({ to, give }) =>
     takenIn(device, { ...part, to, mono: give.sound === 'mono' }, inside).flatMap((taken) => {
       const stand = together(taken.stand, give.while)
-      return stand ? [{ ...taken, stand }] : []
+      return stand && !crosses(taken) ? [{ ...taken, stand }] : []
     }),
   )
 }
@@ -103,7 +118,8 @@ export function soundOnlyParts(device: DeviceModel, fn: ModelFunction): SoundPar
     fn.gives.flatMap((give) =>
       endsOf(device, give.jack).flatMap((to): SoundPart[] => {
         const both = together(stand, give.while)
-        return both ? [{ from, to, mono: give.sound === 'mono', fn, stand: both }] : []
+        const part = both && { from, to, mono: give.sound === 'mono', fn, stand: both }
+        return part && !crosses(part) ? [part] : []
       }),
     ),
   )

@@ -66,6 +66,7 @@ export class WayMaker {
       takeId: numberOf(this.takes, takeContent(device, draft)),
       leaveId: numberOf(this.leaves, leaveContent(device, draft)),
       variant,
+      lineStand: ending.stand,
       terminate: ending.terminate,
       openEnded: ending.open,
       leans,

@@ -37,6 +37,8 @@ export interface Way extends Draft {
   /** The same for ways whose outputs make the same of what was taken. */
   readonly leaveId: number
   readonly variant: Variant
+  /** The part of its positions that ends the line, or lets it go on. */
+  readonly lineStand: Condition
   /** Loop sockets that want a terminator, so that the line ends. */
   readonly terminate: readonly Key[]
   /** Nothing at this input ends the line. */

@@ -58,7 +58,7 @@ export function wholePicture(out: Face, into: Face): WantedWire[] | null {
  * into a luma contact. Decided by what arrives, not by a list of lookalikes.
  */
 export function lumaOnly(out: Face, into: Face): WantedWire[] | null {
-  if (into.form === null || formsAgree(out, into)) return null
+  if (into.form === null || out.form === 'rgbs' || formsAgree(out, into)) return null
   for (const want of into.picture) {
     for (const from of out.picture) {
       const arrival = arrivalAt(into.form, new Map([[want.circuit, from.circuit]]))
@@ -129,7 +129,7 @@ function oneWire(from: SoundContacts, to: SoundContacts): WantedSound | null {
   if (toLeft && toRight) return null
   const mono = from['audio-mono']
   const one = mono ?? from['audio-l'] ?? from['audio-r']
-  const own = from['audio-r'] && !mono ? toRight : toLeft
-  const target = toMono ?? own
+  // One channel is heard by whichever socket there is.
+  const target = toMono ?? toLeft ?? toRight
   return one && target ? { wires: [wire(one, target)], meeting: mono ? 'mono' : 'one' } : null
 }

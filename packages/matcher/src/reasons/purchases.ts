@@ -98,18 +98,20 @@ export class Shopping {
   purchases(now: Hookup | null): Purchase[] {
     const options = this.solver
       .soFar()
-      .filter(({ found }) => found.bought > 0)
+      .filter(({ wiring }) => wiring.found.bought > 0)
       .map((solved) => ({ solved, hookup: this.build(solved) }))
       .filter(({ hookup }) => now === null || isMore(hookup, now))
     const whole = options.filter(({ hookup }) => hookup.worksFully)
     const pool = whole.length > 0 ? whole : now === null ? options : []
     const bySize = [...pool].sort(
-      (a, b) => a.solved.found.bought - b.solved.found.bought || compareHookups(a.hookup, b.hookup),
+      (a, b) =>
+        a.solved.wiring.found.bought - b.solved.wiring.found.bought ||
+        compareHookups(a.hookup, b.hookup),
     )
     const byPicture = [...pool].sort(
       (a, b) =>
         b.hookup.axes.picture - a.hookup.axes.picture ||
-        a.solved.found.bought - b.solved.found.bought ||
+        a.solved.wiring.found.bought - b.solved.wiring.found.bought ||
         compareHookups(a.hookup, b.hookup),
     )
     const chosen = new Set([bySize[0], byPicture[0]].filter((o) => o !== undefined))
@@ -122,7 +124,7 @@ export class Shopping {
   }
 
   private build(solved: Solved): Hookup {
-    return buildHookup({ solved, frame: this.solver.frame, offAir: this.question.offAir })
+    return buildHookup({ ...solved, frame: this.solver.frame, offAir: this.question.offAir })
   }
 }
 

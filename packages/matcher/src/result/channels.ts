@@ -11,6 +11,8 @@ export interface ChosenChannel {
   readonly visionMhz: number
   /** Other channels on which it would work as well. */
   readonly orElse: readonly string[]
+  /** Channels that it offers as well and on which a station is received. */
+  readonly taken: readonly string[]
   /** A station is received on it. */
   readonly onAir: boolean
 }
@@ -33,6 +35,7 @@ export function chooseChannel(carrier: CarrierSet, offAir: readonly OffAir[]): C
     name: first.name,
     visionMhz: first.mhz,
     orElse: pool.slice(1).map((c) => c.name),
+    taken: free.length === 0 ? [] : all.filter((c) => !free.includes(c)).map((c) => c.name),
     onAir: free.length === 0,
   }
 }

@@ -8,14 +8,36 @@ interface End {
   readonly placed: Placed
 }
 
-/** Numbers the pieces of a hookup: two of one sort are two copies, cores of one lead share its number. */
-export class LinkMaker {
+interface Taken {
+  readonly model: Uid
+  readonly copy: number
+}
+
+/** Numbers the pieces that are used: two of one sort are two copies, cores of one lead share its number. */
+export class PieceStock {
   private readonly copies = new Map<Uid, number>()
   private readonly drawn = new Map<number, number>()
-  readonly links: Link[] = []
-  readonly ends: LineEnd[] = []
+  private readonly known = new Map<string, readonly Taken[]>()
 
   constructor(private readonly drawer: Drawer) {}
+
+  take(piece: number): Taken {
+    const model = this.draw(piece)
+    const copy = (this.copies.get(model) ?? 0) + 1
+    this.copies.set(model, copy)
+    return { model, copy }
+  }
+
+  /** The pieces of one join; the same ones when the same is plugged for another hookup. */
+  between({ routing, wires }: Join, from: End, to: End): readonly Taken[] {
+    const ports = wires.map((w) => [from.placed.ports[w.fromPort], to.placed.ports[w.toPort]])
+    const key = JSON.stringify([from.unit, to.unit, ports])
+    const known = this.known.get(key)
+    if (known) return known
+    const made = routing.instances.map(({ piece }) => this.take(piece))
+    this.known.set(key, made)
+    return made
+  }
 
   /** The next piece of a sort: its models in turn, each as often as it is there. */
   private draw(piece: number): Uid {
@@ -28,26 +50,27 @@ export class LinkMaker {
     }
     return models.at(-1)!.model
   }
+}
+
+/** Writes down what is plugged. */
+export class LinkMaker {
+  readonly links: Link[] = []
+  readonly ends: LineEnd[] = []
+
+  constructor(private readonly pieces: PieceStock) {}
 
   /** A terminator on a socket. */
   end(piece: number, at: PortRef): void {
-    this.ends.push({ ...at, ...this.take(piece) })
-  }
-
-  private take(piece: number): { model: Uid; copy: number } {
-    const model = this.draw(piece)
-    const copy = (this.copies.get(model) ?? 0) + 1
-    this.copies.set(model, copy)
-    return { model, copy }
+    this.ends.push({ ...at, ...this.pieces.take(piece) })
   }
 
   /** Adds the links of one join, and says which they are. */
   add(join: Join, from: End, to: End): number[] {
-    const copies = join.routing.instances.map(({ piece }) => this.take(piece))
+    const taken = this.pieces.between(join, from, to)
     const made: number[] = []
     join.wires.forEach((wire, i) => {
       const pieces = (join.routing.hops[i] ?? []).map((hop): PieceUse => ({
-        ...copies[hop.instance]!,
+        ...taken[hop.instance]!,
         wayRound: join.routing.instances[hop.instance]!.wayRound,
         inPlug: hop.inPlug,
         outPlug: hop.outPlug,

@@ -10,6 +10,7 @@ import { bestScore } from './measure'
 import type { Move } from './moves'
 import { Outlooks, type MovesFrom, type Outlook } from './outlook'
 import { Queue } from './queue'
+import { wiringOf } from './wiring'
 
 export interface SearchSpace {
   readonly starts: readonly Label[]
@@ -44,6 +45,8 @@ export class Search {
   done = false
   work = 0
   cut = false
+  /** Sorts of which chains that were dropped wanted more than there are. */
+  readonly short = { variants: new Set<string>(), pieces: new Set<number>() }
 
   constructor(private readonly space: SearchSpace) {
     this.outlooks = new Outlooks(space.starts, space)
@@ -126,9 +129,12 @@ export class Search {
   private goesRound(finished: Finished): boolean {
     const { joins, scarceUnits } = this.space
     if (!joins.hasScarce && scarceUnits.size === 0) return true
-    return (
-      'units' in assign(finished, (piece) => joins.drawer.pieces[piece]?.stock ?? 0, scarceUnits)
-    )
+    const stockOf = (piece: number): number => joins.drawer.pieces[piece]?.stock ?? 0
+    const result = assign(wiringOf(finished), stockOf, scarceUnits)
+    if ('unitOf' in result) return true
+    for (const id of result.short.variants) this.short.variants.add(id)
+    for (const piece of result.short.pieces) this.short.pieces.add(piece)
+    return false
   }
 
   private add(label: Label): void {
@@ -190,7 +196,7 @@ function scarcePieces(label: Label): Map<number, number> {
   return used
 }
 
-const soundStillThere = (label: Label): Sound =>
+export const soundStillThere = (label: Label): Sound =>
   label.sound.kind === 'waits' ? label.sound.sound : label.sig.sound
 
 /** Costs no more, and the picture and the sound have been through nothing worse. */

@@ -1,21 +1,36 @@
+import { jackOf, type DeviceModel, type Key } from '@coaxwain/models'
 import { channelsIn, touches, type Channel } from '@coaxwain/signal'
+import { AERIAL_LIMIT_DBMV, isolationDb } from '../../search/aerial'
+import { nodesOf } from '../../search/wiring'
 import type { PathStop } from '../stops'
-import { boxes, caution, display, named, source, type Rule } from './rule'
+import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
 
 const senders = (stops: readonly PathStop[]): readonly PathStop[] =>
   stops.filter((s) => s.sends !== null)
 
 const channels: Rule = (c) =>
   senders(c.stops).flatMap((s) => {
-    const channel = s.sends!.channel
-    if (channel.onAir) return [caution('channel-on-air', { channel: channel.name, name: named(s) })]
-    if (c.input.solved.found.aerial?.together)
-      return [caution('channel-stays-free', { channel: channel.name })]
+    const { channel } = s.sends!
     const [other] = channel.orElse
-    return other === undefined || (c.input.offAir.length > 0 && !c.input.solved.found.aerial)
-      ? []
-      : [caution('channel-may-be-used', { channel: channel.name, other })]
+    const [taken] = channel.taken
+    const details = { channel: channel.name }
+    if (channel.onAir) return [caution('channel-on-air', { ...details, name: named(s) })]
+    if (taken !== undefined) return [caution('channel-taken', { ...details, taken })]
+    if (c.input.wiring.found.aerial?.together) return [caution('channel-stays-free', details)]
+    return other !== undefined && (isUnscreened(c) || movesTogether(c))
+      ? [caution('channel-may-be-used', { ...details, other })]
+      : []
   })
+
+/** Flat 300 ohm line and screws pick up strong stations by themselves (common practice, no source). */
+const isUnscreened = (c: CautionInput): boolean =>
+  (display(c).way.into?.face.ports ?? []).some((p) => p.ohm >= 300)
+
+/** Another unit with a carrier of its own stands on the way of the aerial: all of them move or none. */
+const movesTogether = (c: CautionInput): boolean =>
+  c.input.wiring.aerial.some((n) =>
+    n.way.variant.device.functions.some((f) => f.gives.some((g) => (g.rf ?? []).length > 0)),
+  )
 
 /** One of the channels on offer has neighbours and another has none. */
 const neighbours: Rule = (c) =>
@@ -35,7 +50,7 @@ const neighbours: Rule = (c) =>
 
 /** The sideband of an unfiltered modulator falls on the channel below (47 CFR 15.115(b)(2) lets it). */
 const sideband: Rule = (c) =>
-  c.input.solved.found.aerial?.together
+  c.input.wiring.found.aerial?.together
     ? senders(c.stops)
         .filter((s) => s.way.out?.rf?.some((r) => r.sideband === 'double'))
         .map((s) => caution('channel-below', { name: named(s), channel: s.sends!.channel.name }))
@@ -64,6 +79,7 @@ const lossOnTheWay: Rule = (c) => {
   return loss <= -3 ? [caution('level-lost', { db: -loss })] : []
 }
 
+/** Which plan a tuner counts in, where it decides, or where nothing else is to be set. */
 const airOrCable: Rule = (c) =>
   c.hookup.settings.flatMap((s) => {
     const stop = c.stops.find((p) => p.unit.uid === s.unit)
@@ -71,7 +87,9 @@ const airOrCable: Rule = (c) =>
     if (!stop || control?.kind !== 'positions') return []
     const position = control.positions.find((p) => p.key === s.position)?.label ?? s.position
     const details = { name: named(stop), control: control.label, position }
-    if (control.role === 'tuner-plan') return [caution('air-or-cable', details)]
+    const plain = boxes(c).length === 0 && !c.input.wiring.found.aerial
+    if (control.role === 'tuner-plan')
+      return s.must || plain ? [caution('air-or-cable', details)] : []
     const bands = stop.variant.device.controls.some(
       (k) =>
         k.kind === 'tuned-to' &&
@@ -82,11 +100,52 @@ const airOrCable: Rule = (c) =>
 
 /** The aerial belongs to the box that receives digital stations, and not to the old set. */
 const aerialToBox: Rule = (c) => {
-  const use = c.input.solved.found.aerial
+  const use = c.input.wiring.found.aerial
   const digital = use?.fn.accepts.some((r) => (r.digital ?? []).length > 0)
-  return use && digital && use.variant !== display(c).variant
-    ? [caution('aerial-to-box', { name: use.variant.device.name, set: named(display(c)) })]
-    : []
+  if (!use || use.variant === display(c).variant) return []
+  const details = { name: use.variant.device.name, set: named(display(c)) }
+  if (digital) return [caution('aerial-to-box', details)]
+  return use.variant === source(c).variant ? [caution('aerial-first', details)] : []
+}
+
+/** Two ways in that meet without a switch. */
+function joinsWays(device: DeviceModel): readonly Key[] | null {
+  const free = device.functions.filter(
+    (f) => f.tunedBy === undefined && (f.while ?? []).length === 0 && f.gives.length > 0,
+  )
+  const ins = free.flatMap((f) =>
+    f.gives.some((g) => !g.rf && (g.while ?? []).length === 0)
+      ? f.needs.filter((key) => jackOf(device, key).form === 'rf')
+      : [],
+  )
+  const outs = new Set(free.flatMap((f) => f.gives.map((g) => g.jack)))
+  const shared = [...outs].some(
+    (out) => free.filter((f) => f.gives.some((g) => g.jack === out)).length > 1,
+  )
+  return shared ? [...new Set(ins)] : null
+}
+
+/** The least isolation between two of some jacks; none is recorded is none. */
+const leastApart = (device: DeviceModel, jacks: readonly Key[]): number => {
+  const ports = jacks.flatMap((key) => jackOf(device, key).contacts.map((x) => x.port))
+  const pairs = ports.flatMap((a) =>
+    ports.filter((b) => a !== b).map((b) => isolationDb(device, a, b) ?? 0),
+  )
+  return Math.min(...pairs)
+}
+
+/** A splitter or combiner on the shelf that must not join what the aerial and a modulator give. */
+const splitters: Rule = (c) => {
+  const level = senders(c.stops)[0]?.way.out?.rf?.[0]?.levelDbmv
+  if (level === undefined || !c.input.wiring.found.aerial) return []
+  const used = new Set(nodesOf(c.input.wiring).map((n) => n.way.variant.id))
+  return c.input.frame.shelf
+    .filter(({ id, device }) => {
+      const ways = used.has(id) ? null : joinsWays(device)
+      return ways !== null && level - leastApart(device, ways) > AERIAL_LIMIT_DBMV
+    })
+    .slice(0, 1)
+    .map(({ device }) => caution('splitter-radiates', { name: device.name }))
 }
 
 /** A socket for digital sound on a carrier looks like an aerial output (2.88 MHz, from memory). */
@@ -105,4 +164,5 @@ export const CARRIERS: readonly Rule[] = [
   airOrCable,
   aerialToBox,
   lookalikeRf,
+  splitters,
 ]

@@ -1,12 +1,14 @@
 import type { Caution } from '@coaxwain/shelf'
 import { CARRIERS } from './carriers'
+import { POSITIONS } from './positions'
 import { QUALITY } from './quality'
 import type { CautionInput } from './rule'
 import { SAFETY } from './safety'
+import { SOCKETS } from './sockets'
 import { SWITCHES } from './switches'
 
 /** Danger first, then what is lost, then what decides. */
-const RULES = [...SAFETY, ...QUALITY, ...CARRIERS, ...SWITCHES]
+const RULES = [...SAFETY, ...SOCKETS, ...QUALITY, ...POSITIONS, ...CARRIERS, ...SWITCHES]
 
 /** Everything about a hookup that a person must know before the first step. */
 export function cautionsOf(c: CautionInput): Caution[] {

@@ -19,7 +19,7 @@ const sound: Rule = (c) => {
   if (heard === 'half') return [caution('sound-half')]
   if (heard === 'none') return c.input.frame.best.sound ? [caution('silent')] : []
   // A set with one loudspeaker that takes both channels loses nothing that it could have played.
-  const arrives = c.input.solved.found.step.soundIn
+  const arrives = c.input.wiring.found.step.soundIn
   if (heard === 'stereo' || arrives === 'stereo' || !playsStereo(c)) return []
   return [caution('sound-folded'), ...(mixed(c) ? [caution('both-plugs')] : [])]
 }
@@ -98,14 +98,24 @@ const crossColour: Rule = (c) =>
 
 /** The picture's own lead carries no sound. */
 const soundApart: Rule = (c) => {
-  const ownSpeakers = display(c).variant.device.display?.loudspeakers !== 'none'
-  if (c.hookup.sound.sound === 'none') return []
-  if (!ownSpeakers) return [caution('no-loudspeaker', { name: named(display(c)) })]
+  const heard = c.hookup.sound.sound !== 'none'
+  const details = { name: named(display(c)) }
+  if (display(c).variant.device.display?.loudspeakers === 'none') {
+    if (heard) return [caution('no-loudspeaker', details)]
+    return playsSound(c) ? [caution('no-loudspeaker-here', details)] : []
+  }
+  if (!heard) return []
   const first = c.hookup.links[c.hookup.legs[0]?.links[0] ?? 0]
   const multi =
     first && first.circuits.length > 1 && first.circuits.every((x) => !x.from.startsWith('audio'))
-  return multi ? [caution('sound-apart')] : []
+  return multi || isMute(c) ? [caution('sound-apart')] : []
 }
+
+const playsSound = (c: CautionInput): boolean =>
+  source(c).variant.device.jacks.some((j) => j.form === 'sound' && j.dir === 'out')
+
+/** A DVI socket gives a picture alone. */
+const isMute = (c: CautionInput): boolean => source(c).way.from?.face.form === 'dvi'
 
 /** RGB must bring its sync along; component takes it from the luma wire. */
 const sync: Rule = (c) =>
@@ -135,9 +145,19 @@ const whiteBuzz: Rule = (c) =>
       ]),
   )
 
+/** A bilingual disc, or a voice and a band: one track is wanted and not both. */
+const programmes: Rule = (c) =>
+  c.input.frame.question.material.twoProgrammes === true ? [caution('two-programmes')] : []
+
+/** A light gun looks for the bright spot of a tube (common practice, no source). */
+const gun: Rule = (c) =>
+  c.input.frame.question.demands.aim === 'light-gun' ? [caution('gun-needs-tube')] : []
+
 /** What will be seen and heard that is less than it might be. */
 export const QUALITY: readonly Rule[] = [
   picture,
+  gun,
+  programmes,
   sound,
   soundApart,
   lessDetail,

@@ -59,15 +59,15 @@ const mainsDiffer: Rule = (c) => {
 
 const dcUnknown: Rule = (c) =>
   [
-    ...pathOf(c.input.solved.found.last).flatMap((l) => (l.step ? [l.step] : [])),
-    c.input.solved.found.step,
+    ...pathOf(c.input.wiring.found.last).flatMap((l) => (l.step ? [l.step] : [])),
+    c.input.wiring.found.step,
   ].some((s) => s.join.dcUnknown)
     ? [caution('check-dc')]
     : []
 
 /** What gets up to the aerial stays under the limit, or nobody knows (47 CFR 15.115(c)(1)). */
 const radiation: Rule = (c) => {
-  const use = c.input.solved.found.aerial
+  const use = c.input.wiring.found.aerial
   if (!use || use.radiatesDbmv === -Infinity) return []
   if (use.radiatesDbmv === null)
     return [caution('check-isolation', { name: use.variant.device.name })]

@@ -1,5 +1,4 @@
-import { SCANS, type ScanId } from '@coaxwain/signal'
-import { boxes, caution, display, named, source, type Rule } from './rule'
+import { caution, display, named, source, type Rule } from './rule'
 
 const directionSwitch: Rule = (c) =>
   c.stops.flatMap((s) =>
@@ -17,7 +16,7 @@ const directionSwitch: Rule = (c) =>
 const chooseByHand: Rule = (c) => {
   const end = display(c)
   const scart = (end.way.into?.face.ports ?? []).some((p) => p.connector === 'scart-socket')
-  const woken = c.input.solved.found.step.join.volts.includes('av-select')
+  const woken = c.input.wiring.found.step.join.volts.includes('av-select')
   return scart && !woken ? [caution('choose-by-hand', { name: named(end) })] : []
 }
 
@@ -28,24 +27,23 @@ const automatic: Rule = (c) =>
       .map(() => caution('moves-itself', { name: named(s) })),
   )
 
-/** A scan setting of the source that this display cannot follow. */
-const progressive: Rule = (c) => {
-  const facts = display(c).variant.device.display
-  const set = source(c).stand.map((s) => s.control)
-  const scanControl = source(c).variant.device.controls.find(
-    (k) => k.kind === 'positions' && k.role === 'scan' && set.includes(k.key),
+/** A box on the shelf that would switch over by itself, if this source sent a voltage. */
+const waits: Rule = (c) => {
+  const used = new Set(c.stops.map((s) => s.variant.id))
+  const ports = source(c).variant.device.ports.filter((p) =>
+    p.circuits.some((x) => x.circuit === 'rf' && x.dir !== 'in'),
   )
-  if (!facts || !scanControl || boxes(c).length > 0) return []
-  const beyond = (source(c).way.out?.picture ?? []).some(
-    (r) => r.scan !== 'same' && !follows(facts.deflection.lineKhz, r.scan),
-  )
-  return beyond
-    ? [caution('scan-too-fast', { name: named(source(c)), control: scanControl.label })]
-    : []
+  if (ports.length === 0 || ports.some((p) => (p.suppliesDcVolts ?? 0) !== 0)) return []
+  return c.input.frame.shelf
+    .filter(
+      ({ id, device }) =>
+        !used.has(id) &&
+        device.controls.some(
+          (k) => k.kind === 'auto' && k.positions.some((p) => p.cause.kind === 'voltage-at'),
+        ),
+    )
+    .map(({ device }) => caution('box-waits', { name: device.name, source: named(source(c)) }))
 }
-
-const follows = (spans: readonly (readonly [number, number])[], scan: ScanId): boolean =>
-  spans.some(([low, high]) => SCANS[scan].lineKhz >= low - 0.1 && SCANS[scan].lineKhz <= high + 0.1)
 
 /** One socket takes composite or luma, as the input is chosen. */
 const sharedSocket: Rule = (c) => {
@@ -66,8 +64,8 @@ const openLine: Rule = (c) =>
 
 /** Positions that decide whether anything comes at all. */
 export const SWITCHES: readonly Rule[] = [
-  progressive,
   automatic,
+  waits,
   directionSwitch,
   chooseByHand,
   sharedSocket,

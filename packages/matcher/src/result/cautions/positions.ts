@@ -1,0 +1,164 @@
+import {
+  together,
+  type AcceptRow,
+  type Condition,
+  type Control,
+  type PictureGive,
+} from '@coaxwain/models'
+import type { Caution } from '@coaxwain/shelf'
+import {
+  decode,
+  followsField,
+  followsLine,
+  isEncoded,
+  sameSoundSpacing,
+  SCANS,
+  type Colour,
+  type Deflection,
+  type ScanId,
+} from '@coaxwain/signal'
+import type { PathStop } from '../stops'
+import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
+
+type Switch = Extract<Control, { kind: 'positions' }>
+
+/** Switches of a unit that are set for this hookup and have positions that do not serve. */
+const decisive = (stop: PathStop, roles: readonly Switch['role'][]): Switch[] =>
+  stop.variant.device.controls.filter((k): k is Switch => {
+    if (k.kind !== 'positions' || !roles.includes(k.role)) return false
+    const wanted = stop.stand.find((c) => c.control === k.key)
+    return wanted !== undefined && k.positions.some((p) => !wanted.in.includes(p.key))
+  })
+
+/** How a unit stands with one switch in a position that does not serve. */
+function turned(stop: PathStop, control: Switch): Condition[] {
+  const wanted = stop.stand.find((c) => c.control === control.key)?.in ?? []
+  return control.positions
+    .filter((p) => !wanted.includes(p.key))
+    .map((p) => stop.stand.map((c) => (c.control === control.key ? { ...c, in: [p.key] } : c)))
+}
+
+const listsScan = (row: AcceptRow, scan: ScanId): boolean =>
+  row.scans === 'any' || row.scans.includes(scan)
+
+/** A row decodes this colour; what is monochrome loses nothing anywhere. */
+function decodes(rows: readonly AcceptRow[], colour: Colour): boolean {
+  if (!isEncoded(colour) || rows.some((r) => r.colours === 'any')) return true
+  return (
+    decode(
+      colour,
+      rows.flatMap((r) => (r.colours === 'any' ? [] : r.colours)),
+    ) === 'colour'
+  )
+}
+
+/** A standard switch of the display: on another position there is no colour, or a hiss for sound. */
+const ofDisplay: Rule = (c) => {
+  const end = display(c)
+  const { scan, colour, carrier } = end.sig.core
+  return decisive(end, ['standard']).flatMap((control) => {
+    const details = { name: named(end), control: control.label }
+    const left = turned(end, control).map((stand) =>
+      end.way.fn.accepts.filter((r) => together(r.while, stand) !== null),
+    )
+    const grey = left.some(
+      (rows) =>
+        !decodes(
+          rows.filter((r) => listsScan(r, scan)),
+          colour,
+        ),
+    )
+    const hiss = left.some((rows) => {
+      const systems = rows.flatMap((r) => r.systems ?? [])
+      return carrier !== null && !systems.some((s) => sameSoundSpacing(s, carrier.system))
+    })
+    return [
+      ...(grey ? [caution('standard-grey', details)] : []),
+      ...(hiss ? [caution('standard-hiss', details)] : []),
+    ]
+  })
+}
+
+/** A switch of the source: on another position it gives what this display does not follow. */
+const ofSource: Rule = (c) => {
+  const facts = display(c).variant.device.display
+  if (!facts || boxes(c).length > 0) return []
+  return decisive(source(c), ['scan', 'standard', 'mode', 'other']).flatMap((control) => {
+    const rows = turned(source(c), control).flatMap((stand) =>
+      (source(c).way.out?.picture ?? []).filter((r) => together(r.while, stand) !== null),
+    )
+    return rows.flatMap((row) => against(c, { control, row, deflection: facts.deflection }))
+  })
+}
+
+/** What only draws faster has a caution of its own: a progressive setting doubles the line rate. */
+const DOUBLED: readonly ScanId[] = ['525p60', '625p50']
+
+interface Turned {
+  readonly control: Switch
+  readonly row: PictureGive
+  readonly deflection: Deflection
+}
+
+function against(c: CautionInput, { control, row, deflection }: Turned): Caution[] {
+  if (row.scan === 'same') return []
+  const { lineKhz, fieldHz } = SCANS[row.scan]
+  const end = display(c)
+  const details = { name: named(source(c)), control: control.label, set: named(end) }
+  if (!followsLine(deflection, row.scan)) {
+    const doubled = DOUBLED.includes(row.scan) && isTelevision(end.sig.core.scan)
+    return [
+      doubled
+        ? caution('scan-too-fast', { name: details.name, control: control.label })
+        : caution('other-lines', { ...details, khz: lineKhz }),
+    ]
+  }
+  const rows = end.way.fn.accepts.filter((r) => listsScan(r, row.scan as ScanId))
+  return [
+    ...(followsField(deflection, row.scan)
+      ? []
+      : [caution('other-fields', { ...details, hz: Math.round(fieldHz) })]),
+    ...(row.colour === 'same' || rows.length === 0 || decodes(rows, row.colour)
+      ? []
+      : [caution('other-colour', details)]),
+  ]
+}
+
+/** Ordinary television lines, 15.6 to 15.75 kHz. */
+const isTelevision = (scan: ScanId): boolean => SCANS[scan].lineKhz < 15.75
+
+/** Trimmers that are known to stand wrong: a hold for another field rate, a level that is off. */
+const trimmers: Rule = (c) =>
+  c.stops.flatMap((s) =>
+    s.variant.device.controls.flatMap((k): Caution[] => {
+      if (k.kind !== 'trim' || k.stands === undefined || k.aim === undefined) return []
+      if (k.stands === k.aim) return []
+      const details = { name: named(s), control: k.label }
+      if (k.quantity === 'vertical-hold') return [caution('turn-hold', details)]
+      const isLevel = k.quantity === 'video-level' || k.quantity === 'sound-level'
+      const tooHigh = k.quantity === 'video-level' && k.stands > k.aim
+      return isLevel && !tooHigh ? [caution('set-level', details)] : []
+    }),
+  )
+
+/** A wide picture that is told of a wide screen arrives squeezed on a narrow one. */
+const shapes: Rule = (c) => {
+  const start = source(c)
+  const rows = start.way.out?.picture ?? []
+  const squeezing = rows.find((r) => r.shape === 'squeezed')?.while ?? []
+  const control = start.variant.device.controls.find((k) =>
+    squeezing.some((w) => w.control === k.key),
+  )
+  return start.narrowScreen && control
+    ? [caution('tell-shape', { name: named(start), control: control.label })]
+    : []
+}
+
+/** A switched load: the last input on the line has it, and no other. */
+const loads: Rule = (c) =>
+  c.hookup.settings.some((s) => s.why === 'ends-line') || (c.hookup.ends ?? []).length > 0
+    ? [caution('last-ends-line')]
+    : []
+
+/** Positions that spoil the picture or the sound while they stand elsewhere. */
+export const POSITIONS: readonly Rule[] = [ofDisplay, ofSource, trimmers, shapes, loads]
