@@ -149,7 +149,9 @@ module.exports = {
       name: 'own-repository-only',
       comment: 'Another subject is read through its service; its row types may be named',
       severity: 'error',
-      from: { path: '^apps/api/src/([^/]+)/(service|mapper|[^/]+-rules|bearing)\\.ts$' },
+      from: {
+        path: '^apps/api/src/([^/]+)/(service|[^/]+\\.service|mapper|[^/]+-rules|bearing)\\.ts$',
+      },
       to: {
         path: '^apps/api/src/[^/]+/(repository|[^/]+\\.repository)\\.ts$',
         pathNot: '^apps/api/src/$1/',
@@ -160,7 +162,7 @@ module.exports = {
       name: 'repositories-know-no-service',
       severity: 'error',
       from: { path: '^apps/api/src/[^/]+/(repository|[^/]+\\.repository)\\.ts$' },
-      to: { path: '^apps/api/src/(http/|[^/]+/(service|routes|mapper)\\.ts)' },
+      to: { path: '^apps/api/src/(http/|[^/]+/(service|[^/]+\\.service|routes|mapper)\\.ts)' },
     },
     ...layerRules,
     {

@@ -35,6 +35,7 @@ export const ACCESS: Readonly<Record<RouteName, Access>> = {
   deleteUnit: WRITERS,
   restoreUnit: WRITERS,
   changeUnitStates: WRITERS,
+  changeStatesOfUnits: WRITERS,
   changeUnitModifications: WRITERS,
   changeUnitStands: WRITERS,
   readSnapshot: ALL,

@@ -337,6 +337,14 @@ const WRONG: readonly Wrong[] = [
     faults: ['__proto__ unknown-field'],
   },
   {
+    what: 'a field with a name of thousands of letters, which comes back in part',
+    method: 'POST',
+    path: `${IN}/places`,
+    sending: { body: { name: 'a', ['k'.repeat(5000)]: 1 } },
+    status: 400,
+    faults: [`${'k'.repeat(60)} unknown-field`],
+  },
+  {
     what: 'an edit without a version',
     method: 'PATCH',
     path: UNIT,

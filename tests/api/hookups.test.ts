@@ -81,6 +81,33 @@ describe('a saved hookup', () => {
     expect((await client.get(`${IN}/hookups?unit=${UNITS.modulator}`)).body['total']).toBe(0)
   })
 
+  test('is named at its units among the first fifty, and counted with all others', async () => {
+    await save()
+    type Row = Record<string, unknown>
+    const { id, ...first } = (await rig.db('hookups').first()) as Row & { id: number }
+    const uses = (await rig.db('hookup_units').where({ hookup_id: id })) as Row[]
+    for (let i = 0; i < 60; i += 1) {
+      const title = `Copy ${String(i).padStart(2, '0')}`
+      const [copy] = await rig.db('hookups').insert({ ...first, uid: uidOf(`copy-${i}`), title })
+      const rows = uses.map(({ id: _, ...use }) => ({ ...use, hookup_id: copy }))
+      await rig.db('hookup_units').insert(rows)
+    }
+    const { body } = await (await rig.as('viewer')).get(`${IN}/units/${UNITS.player}`)
+    expect(body['neededByCount']).toBe(61)
+    const titles = (body['neededBy'] as { title: string }[]).map((h) => h.title)
+    expect([titles.length, titles[0], titles[49]]).toEqual([50, 'Copy 00', 'Copy 49'])
+  })
+
+  test('stays right when what it uses has been tried and works', async () => {
+    await save()
+    const client = await rig.as('owner')
+    await client.patch(`${IN}/units/${UNITS.player}/states`, 1, {
+      forms: [{ jack: 'composite', port: 'video', state: 'works' }],
+      functions: [{ function: 'plays', state: 'works' }],
+    })
+    expect(await labelNow()).toBe('still-right')
+  })
+
   test('stays right while nothing that bears on it changes', async () => {
     await save()
     const client = await rig.as('owner')

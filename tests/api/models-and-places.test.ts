@@ -106,6 +106,28 @@ describe('models', () => {
     expect(problemOf(again).code).toBe('key-reused')
   })
 
+  test('take no part that clashes with what was added to a unit', async () => {
+    const client = await rig.as('owner')
+    const unit = await client.post(`${IN}/units`, { model: MODELS.own })
+    const added = { ...extraPort, origin: 'added' }
+    const fitted = await client.put(`${IN}/units/${String(unit.body['uid'])}/modifications`, 1, {
+      modifications: [{ kind: 'added', ports: [added], jacks: [], functions: [] }],
+    })
+    expect(fitted.status, fitted.text).toBe(200)
+    const whole = player({ name: 'Own model' })
+    const clash = await client.put(OWN, 1, {
+      document: { ...whole, ports: [...whole.ports, extraPort] },
+    })
+    expect(clash.status).toBe(409)
+    expect(faultsOf(clash)).toEqual(['document clashes-with-fitting'])
+    expect(problemOf(clash).errors[0]?.detail).toContain('s-video')
+    const other = { ...extraPort, key: 's-video-2' }
+    const apart = await client.put(OWN, 1, {
+      document: { ...whole, ports: [...whole.ports, other] },
+    })
+    expect(apart.status, apart.text).toBe(200)
+  })
+
   test('with units are not deleted; without, they go and come back', async () => {
     const client = await rig.as('owner')
     const unit = await client.post(`${IN}/units`, { model: MODELS.own })
@@ -119,6 +141,25 @@ describe('models', () => {
     expect((await client.post(`${IN}/units`, { model: MODELS.own })).status).toBe(422)
     expect((await client.send('POST', `${OWN}/restore`, { version: 2 })).status).toBe(200)
     expect((await client.post(`${IN}/units`, { model: MODELS.own })).status).toBe(201)
+  })
+
+  test('of the longest names are paged through like all others', async () => {
+    const client = await rig.as('owner')
+    const maker = '\u8a66'.repeat(80)
+    for (const end of ['1', '2', '3']) {
+      const document = player({ maker, name: '\u9a13'.repeat(79) + end })
+      expect((await client.post(`${IN}/models`, { document })).status).toBe(201)
+    }
+    const seen: string[] = []
+    let cursor = ''
+    do {
+      const { status, body } = await client.get(`${IN}/models?limit=1${cursor}`)
+      expect(status).toBe(200)
+      seen.push(...(body['items'] as { name: string }[]).map((m) => m.name.slice(-1)))
+      cursor = body['next'] === null ? '' : `&cursor=${String(body['next'])}`
+    } while (cursor !== '')
+    expect(seen.slice(-3)).toEqual(['1', '2', '3'])
+    expect(seen).toHaveLength(8)
   })
 
   test('sent twenty times at once are made once', async () => {
@@ -160,6 +201,27 @@ describe('places', () => {
     expect(problemOf(loop).code).toBe('place-within-itself')
     const up = await client.patch(`${IN}/places/${PLACES.shelf}`, 1, { parent: null })
     expect(up.body).toMatchObject({ parent: null, version: 2 })
+  })
+
+  test('stand twenty deep in one another at most, moved ones with all that they hold', async () => {
+    const client = await rig.as('owner')
+    const chain = async (length: number): Promise<string[]> => {
+      const made: string[] = []
+      for (let i = 0; i < length; i += 1) {
+        const body = { name: `Box ${i}`, parent: made.at(-1) ?? null }
+        const box = await client.post(`${IN}/places`, body)
+        expect(box.status, box.text).toBe(201)
+        made.push(String(box.body['uid']))
+      }
+      return made
+    }
+    const high = await chain(20)
+    const deeper = await client.post(`${IN}/places`, { name: 'Tin', parent: high.at(-1) })
+    expect(faultsOf(deeper)).toEqual(['parent too-many'])
+    const [low] = await chain(3)
+    const move = (parent: string | undefined) => client.patch(`${IN}/places/${low}`, 1, { parent })
+    expect(faultsOf(await move(high[17]))).toEqual(['parent too-many'])
+    expect((await move(high[16])).status).toBe(200)
   })
 
   test('are deleted only when nothing stands there', async () => {

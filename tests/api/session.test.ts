@@ -127,6 +127,13 @@ test('fifty failures from one address stop further tries from it', async () => {
   expect(answers[50]).toBe(429)
 })
 
+test('a session that does not know since when somebody is signed in is over', async () => {
+  const client = await rig.as('owner')
+  expect((await client.get('/collections')).status).toBe(200)
+  await rig.db('sessions').update({ sess: rig.db.raw("json_remove(sess, '$.startedAt')") })
+  expect((await client.get('/collections')).status).toBe(401)
+})
+
 test('an idle session of a day and any session of thirty days is over', async () => {
   const client = await rig.as('owner')
   const month = 30 * 24 * 3600 * 1000

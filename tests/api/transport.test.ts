@@ -146,6 +146,28 @@ describe('odd requests', () => {
     expect(answer).toContain('431')
   })
 
+  test('whose body is slow to come are not given up for that', async () => {
+    const { cookie } = await rig.as('owner')
+    const body = JSON.stringify({ name: 'Loft' })
+    const { address } = rig.api
+    const status = await new Promise<number>((resolve, reject) => {
+      const sent = request(`${address}/api/v1/collections/${COLLECTION}/places`, {
+        method: 'POST',
+        headers: {
+          cookie: cookie ?? '',
+          origin: address,
+          'content-type': 'application/json',
+          'content-length': body.length,
+        },
+      })
+      sent.once('response', (response) => resolve(response.resume().statusCode ?? 0))
+      sent.once('error', reject)
+      sent.write(body.slice(0, 5))
+      setTimeout(() => sent.end(body.slice(5)), 6500)
+    })
+    expect(status).toBe(201)
+  })
+
   test('that trace are refused', async () => {
     const answer = await raw(
       'TRACE /api/v1/session HTTP/1.1\r\nHost: x\r\nConnection: close\r\n\r\n',

@@ -158,6 +158,8 @@ describe('the list of units', () => {
     ['rfOut=vhf', []],
     ['rfOutFromMhz=470&rfOutToMhz=480', [UNITS.modulator]],
     ['rfOutFromMhz=600&rfOutToMhz=700', []],
+    ['rfOutFromMhz=0&rfOutToMhz=100', []],
+    ['rfOutFromMhz=0', [UNITS.modulator]],
     ['connector=f-socket', [UNITS.modulator]],
     ['connector=phono-plug', [UNITS.lead]],
     ['form=composite&dir=in', [UNITS.modulator, UNITS.monitor]],

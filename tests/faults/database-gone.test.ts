@@ -25,8 +25,8 @@ let api: RunningApi
 
 beforeAll(async () => {
   server = await startTestServer(true)
+  await migrate(settingsOf(server))
   db = connectDatabase(settingsOf(server))
-  await migrate(db)
   await makeWorld(db)
   api = await startApi(db)
 })

@@ -10,8 +10,8 @@ beforeAll(async () => {
 afterAll(() => stopTestServer(server))
 
 test('the private server keeps every promise of the engine, and each broken one is named', async () => {
+  await migrate(settingsOf(server))
   const db = connectDatabase(settingsOf(server))
-  await migrate(db)
   expect(await engineFaults(db)).toEqual([])
   await db.raw('create table loose (word varchar(10)) engine=MyISAM')
   expect(await engineFaults(db)).toMatchObject([{ setting: 'table loose', found: 'MyISAM' }])

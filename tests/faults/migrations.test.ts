@@ -24,18 +24,18 @@ afterAll(() => Promise.all(open.map((db) => db.destroy())))
 
 test('migrations go up, down and up again', async () => {
   const db = connect()
-  await migrate(db)
+  await migrate(settings)
   const first = await tablesOf(db)
   await rollBackAll(db)
   expect((await tablesOf(db)).filter((t) => !t.startsWith('migration'))).toEqual([])
-  await migrate(db)
+  await migrate(settings)
   expect(await tablesOf(db)).toEqual(first)
   expect(await pendingMigrations(db)).toEqual([])
-  expect(await migrate(db)).toEqual([])
+  expect(await migrate(settings)).toEqual([])
 })
 
 test('of three that start at once exactly one migrates', async () => {
-  const done = await Promise.all([connect(), connect(), connect()].map(migrate))
+  const done = await Promise.all([settings, settings, settings].map(migrate))
   expect(done.filter((d) => d.length > 0)).toHaveLength(1)
 })
 
@@ -43,16 +43,16 @@ test('a run that was killed in the middle is taken up by the next', async () => 
   const db = connect()
   await db.raw('create table people (id bigint unsigned primary key)')
   await db.raw('drop table people')
-  await migrate(db)
+  await migrate(settings)
   await db('migrations').whereNot({ name: '0001-people' }).delete()
   await db('migrations_lock').update({ is_locked: 1 })
-  await migrate(db)
+  await migrate(settings)
   expect(await pendingMigrations(db)).toEqual([])
 })
 
 test('whoever holds the turn and is killed does not hold up the next', async () => {
   const db = connect()
-  await migrate(db)
+  await migrate(settings)
   await rollBackAll(db)
   const script = `
     import { connectDatabase } from '@coaxwain/database'
@@ -67,7 +67,7 @@ test('whoever holds the turn and is killed does not hold up the next', async () 
     { cwd: new URL('..', import.meta.url), stdio: ['ignore', 'pipe', 'inherit'] },
   )
   await new Promise<void>((resolve) => holder.stdout.once('data', () => resolve()))
-  const waiting = migrate(db)
+  const waiting = migrate(settings)
   setTimeout(() => holder.kill('SIGKILL'), 300)
   expect((await waiting).length).toBeGreaterThan(0)
 })

@@ -45,9 +45,9 @@ export async function createTestDatabase(server: DatabaseSettings, name: string)
   await root.raw('drop database if exists ??', [name])
   await root.raw('create database ?? character set utf8mb4 collate utf8mb4_unicode_ci', [name])
   await root.destroy()
-  const db = connectDatabase({ ...settingsOf(server), database: name })
-  await migrate(db)
-  return db
+  const settings = { ...settingsOf(server), database: name }
+  await migrate(settings)
+  return connectDatabase(settings)
 }
 
 const KEPT = ['migrations', 'migrations_lock', 'migration_turns', 'catalogue']

@@ -104,6 +104,18 @@ export const EXAMPLES: { readonly [N in RouteName]: Example<N> } = {
     version: 1,
     body: { forms: [{ jack: 'composite', port: 'video', state: 'works' }] },
   },
+  changeStatesOfUnits: {
+    params: IN,
+    body: {
+      units: [
+        {
+          unit: UNITS.player,
+          version: 1,
+          changes: { forms: [{ jack: 'composite', port: 'video', state: 'works' }] },
+        },
+      ],
+    },
+  },
   changeUnitModifications: {
     params: UNIT,
     version: 1,

@@ -1,8 +1,9 @@
-import { createServer, type Server } from 'node:http'
+import type { Server } from 'node:http'
 import type { AddressInfo } from 'node:net'
 import { checkHookup } from '@coaxwain/checker'
 import { createApp, type AppSettings } from '@coaxwain/api/app'
 import { compose } from '@coaxwain/api/compose'
+import { createHttpServer } from '@coaxwain/api/http-server'
 import { createLogger } from '@coaxwain/api/logger'
 import { findHookups } from '@coaxwain/api/matcher'
 import type { Knex } from 'knex'
@@ -51,7 +52,7 @@ export async function startApi(db: Knex, choices: Choices = {}): Promise<Running
     checkReplies: true,
     ...settings,
   })
-  const server = createServer({ maxHeaderSize: 16 * 1024 }, app)
+  const server = createHttpServer(app)
   await new Promise<void>((resolve) => server.listen(0, '127.0.0.1', resolve))
   const { port } = server.address() as AddressInfo
   return {

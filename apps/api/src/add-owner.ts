@@ -30,7 +30,7 @@ async function main(): Promise<void> {
   input.close()
   const db = connectDatabase(config.database)
   await waitForDatabase(db, createLogger(config.logLevel))
-  await migrate(db)
+  await migrate(config.database)
   const wish = { email, name, collection, passPhrase }
   const fault = await addOwner(together(db, createPeopleRepository), await createPasswords(), wish)
   await db.destroy()

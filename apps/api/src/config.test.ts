@@ -7,12 +7,17 @@ const server = {
   COAXWAIN_SECRET: SECRET,
   COAXWAIN_ORIGIN: 'https://shelf.invalid',
   COAXWAIN_DB_PASSWORD: 'x7',
+  COAXWAIN_TRUSTED_PROXIES: '127.0.0.1, 10.0.0.2',
 }
 const demo = { COAXWAIN_MODE: 'demo', COAXWAIN_SECRET: SECRET }
 
 describe('a server', () => {
   test('starts with secret, address and database', () => {
-    expect(readConfig(server)).toMatchObject({ mode: 'server', origin: 'https://shelf.invalid' })
+    expect(readConfig(server)).toMatchObject({
+      mode: 'server',
+      origin: 'https://shelf.invalid',
+      trustedProxies: ['127.0.0.1', '10.0.0.2'],
+    })
   })
 
   test('is what one gets without saying', () => {
@@ -26,6 +31,7 @@ describe('a server', () => {
     ['an example', { COAXWAIN_SECRET: `please-change-me-${SECRET}` }],
     ['plain http', { COAXWAIN_ORIGIN: 'http://shelf.invalid' }],
     ['no address', { COAXWAIN_ORIGIN: undefined }],
+    ['nothing in front that ends TLS', { COAXWAIN_TRUSTED_PROXIES: ' ,' }],
     ['a database without password', { COAXWAIN_DB_PASSWORD: '' }],
     ['a database that forgets', { COAXWAIN_DISPOSABLE_DATABASE: '1' }],
     ['people of the demonstration', { COAXWAIN_DEMO_FILE: '/somewhere.json' }],

@@ -19,6 +19,7 @@ const environment = z.object({
   COAXWAIN_SECRET: z.string().default(''),
   /** The address by which people reach the server, such as https://shelf.invalid. */
   COAXWAIN_ORIGIN: z.url({ protocol: /^https$/ }).optional(),
+  /** Addresses, with commas between them, of what ends TLS and passes requests on. */
   COAXWAIN_TRUSTED_PROXIES: z.string().default(''),
   COAXWAIN_CLIENT: z.string().optional(),
   COAXWAIN_DEMO_FILE: z.string().optional(),
@@ -29,6 +30,12 @@ const environment = z.object({
 
 export type Config = ReturnType<typeof readConfig>
 
+const namesIn = (list: string): string[] =>
+  list
+    .split(',')
+    .map((name) => name.trim())
+    .filter((name) => name !== '')
+
 function faultsOfServer(env: z.infer<typeof environment>): string[] {
   return [
     ...(secretIsWeak(env.COAXWAIN_SECRET)
@@ -38,6 +45,9 @@ function faultsOfServer(env: z.infer<typeof environment>): string[] {
       : []),
     ...(env.COAXWAIN_ORIGIN === undefined
       ? ['COAXWAIN_ORIGIN must be the https address of this server']
+      : []),
+    ...(namesIn(env.COAXWAIN_TRUSTED_PROXIES).length === 0
+      ? ['COAXWAIN_TRUSTED_PROXIES must name what ends TLS, or no cookie is ever set']
       : []),
     ...(env.COAXWAIN_DB_PASSWORD === '' ? ['COAXWAIN_DB_PASSWORD is missing'] : []),
     ...(env.COAXWAIN_DISPOSABLE_DATABASE === '1'
@@ -71,7 +81,7 @@ export function readConfig(source: NodeJS.ProcessEnv) {
     port: env.PORT,
     origin: env.COAXWAIN_ORIGIN === undefined ? null : new URL(env.COAXWAIN_ORIGIN).origin,
     secret: env.COAXWAIN_SECRET,
-    trustedProxies: env.COAXWAIN_TRUSTED_PROXIES.split(',').filter((p) => p.trim() !== ''),
+    trustedProxies: namesIn(env.COAXWAIN_TRUSTED_PROXIES),
     clientFolder: env.COAXWAIN_CLIENT ?? null,
     demoFile: env.COAXWAIN_DEMO_FILE ?? null,
     logLevel: env.COAXWAIN_LOG_LEVEL,

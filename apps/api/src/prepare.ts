@@ -50,7 +50,7 @@ function keepPhrases(file: string, phrases: Readonly<Record<string, string>>): v
 async function main(): Promise<void> {
   const db = connectDatabase(config.database)
   await waitForDatabase(db, logger)
-  const done = await migrate(db)
+  const done = await migrate(config.database)
   logger.info({ done }, 'schema')
   if (config.mode === 'demo' && config.demoFile !== null) {
     const phrases = passPhrasesFor(DEMO, knownPhrases(config.demoFile))

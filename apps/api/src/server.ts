@@ -1,4 +1,3 @@
-import { createServer } from 'node:http'
 import { checkHookup } from '@coaxwain/checker'
 import { connectDatabase, migrate } from '@coaxwain/database'
 import type { Knex } from 'knex'
@@ -6,11 +5,11 @@ import { createApp } from './app'
 import { compose } from './compose'
 import { readConfig } from './config'
 import { engineFaults } from './db/engine-settings'
+import { createHttpServer } from './http/http-server'
 import { createLogger } from './http/logger'
 import { findHookups } from './matcher'
 import { waitForDatabase } from './db/wait-for-database'
 
-const MOST_HEADER_BYTES = 16 * 1024
 const STOP_PATIENCE_MS = 10_000
 const CLOSE_IDLE_EVERY_MS = 50
 
@@ -41,7 +40,7 @@ async function mustBeSafe(db: Knex): Promise<void> {
 async function main(): Promise<void> {
   const db = connectDatabase(config.database)
   await waitForDatabase(db, logger)
-  const done = await migrate(db)
+  const done = await migrate(config.database)
   if (done.length > 0) logger.info({ done }, 'migrated')
   await mustBeSafe(db)
   const services = await compose({
@@ -53,16 +52,7 @@ async function main(): Promise<void> {
   })
   if (config.mode === 'server') await services.people.refuseDemoPeople()
   const app = createApp(services, { ...config, logger, checkReplies: false })
-  const server = createServer(
-    {
-      maxHeaderSize: MOST_HEADER_BYTES,
-      headersTimeout: 20_000,
-      requestTimeout: 300_000,
-      keepAliveTimeout: 65_000,
-      connectionsCheckingInterval: 5000,
-    },
-    app,
-  )
+  const server = createHttpServer(app)
 
   let stopping = false
   const stop = (): void => {

@@ -36,3 +36,13 @@ test.each<[string, object, string[]]>([
 ])('%s is told with its path', (_, change, expected) => {
   expect(faults(schema, { ...right, ...change })).toEqual(expected)
 })
+
+test('a key comes back in part only', () => {
+  const found = schema.safeParse({ ...right, ['k'.repeat(5000)]: 1 }, { reportInput: true })
+  const [fault] = found.error ? toFieldErrors(found.error) : []
+  expect(fault).toEqual({
+    path: 'k'.repeat(60),
+    code: 'unknown-field',
+    details: { name: 'k'.repeat(60) },
+  })
+})

@@ -12,7 +12,6 @@ export const answerReply = z.strictObject({
 export type AnswerReply = z.infer<typeof answerReply>
 
 export const answerRequest = z.strictObject({ question })
-export type AnswerRequest = z.infer<typeof answerRequest>
 
 /** How a saved hookup stands against today's shelf. */
 export const HOOKUP_LABELS = ['still-right', 'changed', 'unit-missing'] as const
@@ -64,4 +63,3 @@ export const newHookup = z.strictObject({
 export type NewHookup = z.infer<typeof newHookup>
 
 export const hookupChange = z.strictObject({ title: name(120) })
-export type HookupChange = z.infer<typeof hookupChange>

@@ -1,6 +1,7 @@
 import { DEMO } from '@coaxwain/demo'
+import { channelsOf, PLAN_IDS } from '@coaxwain/signal'
 import { expect, test } from 'vitest'
-import { modelDocument } from './model-document'
+import { modelDocument, planPart } from './model-document'
 
 const models = Object.entries(DEMO.models)
 
@@ -21,4 +22,13 @@ test('a field that nobody knows is refused, at any depth', () => {
   expect(modelDocument.safeParse({ ...device, ports: [{ ...first, x: 1 }, ...rest] }).success).toBe(
     false,
   )
+})
+
+test('every channel of every plan can be named, a span of millions cannot', () => {
+  const names = (plan: string, text: string) => planPart.safeParse({ plan, names: text }).success
+  for (const plan of PLAN_IDS) {
+    for (const { name } of channelsOf(plan)) expect(names(plan, name), name).toBe(true)
+  }
+  expect(names('us-broadcast', '14..69')).toBe(true)
+  expect(names('us-broadcast', '1..999999999')).toBe(false)
 })

@@ -51,14 +51,17 @@ const whole = (low: number, high: number) => z.int().min(low).max(high)
 const mhz = finite(0, 3000)
 const dbmv = finite(-80, 100)
 
+/** Spans such as `14..69` are counted out, so their ends stay as short as the names of any plan. */
+const channelNames = z
+  .string()
+  .min(1)
+  .max(400)
+  .regex(/^[A-Za-z0-9+/*'(), .-]+$/)
+  .refine((names) => !/\d{4}/.test(names), { params: { code: 'bad-format' } })
+
 export const planPart = z.strictObject({
   plan: z.enum(PLAN_IDS),
-  names: z
-    .string()
-    .min(1)
-    .max(400)
-    .regex(/^[A-Za-z0-9+/*'(), .-]+$/)
-    .optional(),
+  names: channelNames.optional(),
 })
 
 const condition = z
@@ -343,7 +346,6 @@ export const port: z.ZodType<Port> = portDocument
 export const jack: z.ZodType<Jack> = jackDocument
 export const modelFunction: z.ZodType<ModelFunction> = functionDocument
 export const deviceModel: z.ZodType<DeviceModel> = device
-export const pieceModel: z.ZodType<PieceModel> = piece
 
 /** A whole description as it is stored, one revision at a time. */
 export const modelDocument: z.ZodType<Model> = z.discriminatedUnion('type', [device, piece])

@@ -7,7 +7,6 @@ import { instant, line, name, queryFlag, uid, version } from './text'
 
 export const MODEL_KINDS = [...DEVICE_KINDS, ...PIECE_KINDS] as const
 export const modelKind = z.enum(MODEL_KINDS)
-export type ModelKind = z.infer<typeof modelKind>
 
 /** What lists and search boxes need of a model. */
 export const modelSummary = z.strictObject({
@@ -63,7 +62,6 @@ export const newModel = z.strictObject({ uid: uid.optional(), document: modelDoc
 export type NewModel = z.infer<typeof newModel>
 
 export const modelChange = z.strictObject({ document: modelDocument })
-export type ModelChange = z.infer<typeof modelChange>
 
 export const modelRevision = z.strictObject({
   model: uid,

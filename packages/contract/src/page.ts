@@ -4,10 +4,13 @@ import { queryNumber } from './text'
 export const PAGE_LIMIT = 200
 export const PAGE_DEFAULT = 50
 
+/** Room for the longest name there is, of 170 letters with three bytes each, in base64. */
+const CURSOR_LENGTH = 800
+
 /** Opaque; made by the server, good only for the same filters and order. */
 export const cursor = z
   .string()
-  .max(400)
+  .max(CURSOR_LENGTH)
   .regex(/^[A-Za-z0-9_-]+$/)
 
 export const pageQuery = {

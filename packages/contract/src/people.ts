@@ -8,10 +8,18 @@ export const localeCode = z.enum(['en-GB', 'en-US'])
 
 export const PASSWORD_LENGTH = { least: 15, most: 128 } as const
 
+/** As a person counts: what is one letter on screen may be two in memory. */
+export const passwordLength = (password: string): number => Array.from(password).length
+
 export const signIn = z.strictObject({
   email: line(254).min(1),
-  /** Length is checked again before anything is hashed; never cut. */
-  password: z.string().min(1).max(PASSWORD_LENGTH.most),
+  /** Never cut, and nothing longer is hashed. */
+  password: z
+    .string()
+    .min(1)
+    .refine((p) => passwordLength(p) <= PASSWORD_LENGTH.most, {
+      params: { code: 'too-long', details: { limit: PASSWORD_LENGTH.most } },
+    }),
 })
 export type SignIn = z.infer<typeof signIn>
 

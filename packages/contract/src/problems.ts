@@ -45,7 +45,6 @@ export const PROBLEMS = {
   internal: no(500),
   busy: later(503),
   'database-unavailable': later(503),
-  stopping: later(503),
 } as const satisfies Record<string, ProblemKind>
 
 export type ProblemCode = keyof typeof PROBLEMS
@@ -73,6 +72,7 @@ export const FIELD_FAULTS = [
   'not-yours-to-change',
   'unknown-reference',
   'in-use',
+  'clashes-with-fitting',
   'used-before',
   'quantity-of-device',
   'check-failed',

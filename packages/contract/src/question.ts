@@ -42,6 +42,7 @@ const questionDocument = z.strictObject({
     shape: z.enum(SHAPES).optional(),
     protection: z.enum(PROTECTIONS),
     sound: z.enum(SOUNDS).optional(),
+    twoProgrammes: z.boolean().optional(),
   }),
   display: z.strictObject({ unit: uid, input: key.optional() }),
   demands: z.strictObject({

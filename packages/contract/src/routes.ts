@@ -14,6 +14,7 @@ import { newPlace, place, placeChange, places } from './places'
 import type { Right } from './roles'
 import { uid } from './text'
 import {
+  manyStateChanges,
   modificationChange,
   newUnit,
   snapshot,
@@ -21,6 +22,7 @@ import {
   stateChange,
   unitChange,
   unitDetail,
+  unitDetails,
   unitPage,
   unitQuery,
 } from './units'
@@ -353,6 +355,18 @@ export const ROUTES = {
     status: 200,
     ifMatch: true,
     etag: true,
+  },
+  changeStatesOfUnits: {
+    ...PLAIN,
+    method: 'POST',
+    path: `${IN}/unit-states`,
+    who: 'shelf.write',
+    summary:
+      'Note what was tried on several units: all of it, or nothing; versions stand in the body',
+    params: OF_COLLECTION,
+    body: manyStateChanges,
+    reply: unitDetails,
+    status: 200,
   },
   changeUnitModifications: {
     ...PLAIN,

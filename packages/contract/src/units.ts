@@ -134,6 +134,8 @@ export const unitSummary = z.strictObject({
 })
 export type UnitSummary = z.infer<typeof unitSummary>
 
+export const MOST_NEEDED_BY = 50
+
 export const unitDetail = z.strictObject({
   ...unitSummary.shape,
   serial: line(80),
@@ -142,8 +144,8 @@ export const unitDetail = z.strictObject({
   functions: z.array(functionStateDocument),
   modifications: z.array(modification),
   stands,
-  /** Saved hookups that use it. */
-  neededBy: z.array(z.strictObject({ uid, title: z.string() })),
+  /** Saved hookups that use it, the first by title; `neededByCount` tells of them all. */
+  neededBy: z.array(z.strictObject({ uid, title: z.string() })).max(MOST_NEEDED_BY),
 })
 export type UnitDetail = z.infer<typeof unitDetail>
 
@@ -157,7 +159,6 @@ export const UNIT_SORTS = [
   'place',
   '-place',
 ] as const
-export type UnitSort = (typeof UNIT_SORTS)[number]
 
 /** VHF is 30-300 MHz, UHF 300-3000 MHz. Source: ITU-R V.431, bands 8 and 9. */
 export const RF_BANDS = { vhf: [30, 300], uhf: [300, 3000] } as const satisfies Record<
@@ -232,9 +233,20 @@ export const stateChange = z.strictObject({
 })
 export type StateChange = z.infer<typeof stateChange>
 
+/** Of several units at once, each with the version that was read. */
+export const manyStateChanges = z.strictObject({
+  units: z
+    .array(z.strictObject({ unit: uid, version, changes: stateChange }))
+    .min(1)
+    .max(50),
+})
+export type ManyStateChanges = z.infer<typeof manyStateChanges>
+
+/** The units as they are afterwards, in the order of the request. */
+export const unitDetails = z.strictObject({ items: z.array(unitDetail) })
+
 export const modificationChange = z.strictObject({ modifications: z.array(modification).max(20) })
 export type ModificationChange = z.infer<typeof modificationChange>
 
 /** Where controls stand now; replaces what was noted before. */
 export const standChange = z.strictObject({ stands })
-export type StandChange = z.infer<typeof standChange>

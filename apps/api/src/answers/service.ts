@@ -20,9 +20,11 @@ export type Checker = (
 /** Tells the people who run the server that the engine contradicts itself. */
 export type OnRefusal = (refused: {
   readonly question: Question
-  readonly snapshot: Snapshot
   readonly hookup: Hookup
   readonly findings: readonly unknown[]
+  /** Of the shelf that it was found on. */
+  readonly shelfVersion: number
+  readonly catalogueVersion: number
 }) => void
 
 export type AnswersService = ReturnType<typeof createAnswersService>
@@ -83,7 +85,8 @@ interface Needs {
 export function createAnswersService({ snapshots, findHookups, ...needs }: Needs) {
   const stands = (snapshot: Snapshot, question: Question, hookup: Hookup): boolean => {
     const { ok, findings } = needs.checkHookup(snapshot, question, hookup)
-    if (!ok) needs.onRefusal({ question, snapshot, hookup, findings })
+    const { shelfVersion, catalogueVersion } = snapshot
+    if (!ok) needs.onRefusal({ question, hookup, findings, shelfVersion, catalogueVersion })
     return ok
   }
 

@@ -1,32 +1,40 @@
 import type { Knex } from 'knex'
 import { AppError } from '../app-error'
 
-/** How a list is ordered. `column` is SQL, and only ever comes from a fixed table. */
-export interface Order {
+/** One way to order a list. */
+export interface Sorting<Row> {
+  /** SQL, which only ever comes from a fixed table. */
   readonly column: string
-  readonly descending: boolean
-  readonly tie: string
+  /** What that column holds in a row that was read. */
+  readonly value: (row: Row) => string
 }
 
 export interface PageWish {
-  readonly order: Order
+  /** A name out of the table of sortings; with `-` before it, backwards. */
+  readonly sort: string
   readonly limit: number
   readonly cursor: string | undefined
 }
 
+export interface Page<Row> {
+  readonly items: readonly Row[]
+  readonly next: string | null
+}
+
 const UID = /^[A-Za-z0-9_-]{22}$/
 
-/** Where the next page begins: the last row's sort value and uid, bound to the order they belong to. */
-const encode = (order: Order, value: string, uid: string): string =>
-  Buffer.from(JSON.stringify([order.column, order.descending, value, uid])).toString('base64url')
+/** Where the next page begins: the last row's sort value and uid, bound to the order that they belong to. */
+const encode = (sort: string, value: string, uid: string): string =>
+  Buffer.from(JSON.stringify([sort, value, uid])).toString('base64url')
 
-function decode(order: Order, cursor: string): [value: string, uid: string] {
+function decode(sort: string, cursor: string): [value: string, uid: string] {
   try {
     const found: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'))
-    if (Array.isArray(found) && found.length === 4) {
-      const [column, descending, value, uid] = found as unknown[]
-      const fits = column === order.column && descending === order.descending
-      if (fits && typeof value === 'string' && UID.test(String(uid))) return [value, String(uid)]
+    if (Array.isArray(found) && found.length === 3) {
+      const [of, value, uid] = found as unknown[]
+      if (of === sort && typeof value === 'string' && UID.test(String(uid))) {
+        return [value, String(uid)]
+      }
     }
   } catch {
     // Whatever it is, it is none of our cursors.
@@ -36,37 +44,42 @@ function decode(order: Order, cursor: string): [value: string, uid: string] {
   })
 }
 
-/** Restricts a query to what follows the cursor; one row more than wanted tells whether there is a next page. */
-export function onPage(query: Knex.QueryBuilder, wish: PageWish): Knex.QueryBuilder {
-  const { column, descending, tie } = wish.order
-  if (wish.cursor !== undefined) {
-    const [value, uid] = decode(wish.order, wish.cursor)
-    const beyond = descending ? '<' : '>'
-    void query.whereRaw(`(${column} ${beyond} ? or (${column} = ? and ${tie} > ?))`, [
-      value,
-      value,
-      uid,
-    ])
+/** Pages of one list; `tie` is the column that decides among equals. */
+export const createPages = <Row extends { readonly uid: string }>(
+  tie: string,
+  sortings: Readonly<Record<string, Sorting<Row>>>,
+) => {
+  const sortingOf = (sort: string): Sorting<Row> & { readonly descending: boolean } => {
+    const descending = sort.startsWith('-')
+    const found = sortings[descending ? sort.slice(1) : sort]
+    if (!found) throw new Error(`no order ${sort}`)
+    return { ...found, descending }
   }
-  return query
-    .orderByRaw(`${column} ${descending ? 'desc' : 'asc'}, ${tie} asc`)
-    .limit(wish.limit + 1)
-}
+  return {
+    /** Restricts a query to what follows the cursor; one row more than wanted tells whether more follows. */
+    onPage: (query: Knex.QueryBuilder, { sort, limit, cursor }: PageWish): Knex.QueryBuilder => {
+      const { column, descending } = sortingOf(sort)
+      if (cursor !== undefined) {
+        const [value, uid] = decode(sort, cursor)
+        const beyond = descending ? '<' : '>'
+        void query.whereRaw(`(${column} ${beyond} ? or (${column} = ? and ${tie} > ?))`, [
+          value,
+          value,
+          uid,
+        ])
+      }
+      return query
+        .orderByRaw(`${column} ${descending ? 'desc' : 'asc'}, ${tie} asc`)
+        .limit(limit + 1)
+    },
 
-export interface Page<Row> {
-  readonly items: readonly Row[]
-  readonly next: string | null
-}
-
-export function cutPage<Row extends { uid: string }>(
-  rows: readonly Row[],
-  wish: PageWish,
-  sortValue: (row: Row) => string,
-): Page<Row> {
-  const items = rows.slice(0, wish.limit)
-  const last = items.at(-1)
-  const more = rows.length > wish.limit && last
-  return { items, next: more ? encode(wish.order, sortValue(last), last.uid) : null }
+    cutPage: (rows: readonly Row[], { sort, limit }: PageWish): Page<Row> => {
+      const items = rows.slice(0, limit)
+      const last = items.at(-1)
+      const more = rows.length > limit && last
+      return { items, next: more ? encode(sort, sortingOf(sort).value(last), last.uid) : null }
+    },
+  }
 }
 
 /** A search text as plain words, each with the signs of LIKE made harmless. */

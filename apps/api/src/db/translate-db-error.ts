@@ -6,7 +6,6 @@ const ROW_CHANGED_SINCE = 1020
 const LOCK_TIMEOUT = 1205
 const DEADLOCK = 1213
 const STATEMENT_TIMEOUT = 1969
-const PARENT_MISSING = 1452
 /** Too many connections, shutdown in progress, connection killed. */
 const SERVER_AWAY: readonly number[] = [1040, 1053, 1927, 1129]
 
@@ -39,11 +38,6 @@ export const isRaceLost = (error: unknown): boolean =>
 /** A row with that key is already there; `index` is one of our own names. */
 export const isDuplicateOf = (error: unknown, index: string): boolean =>
   errnoOf(error) === DUPLICATE && ((error as DriverError).message ?? '').includes(`'${index}'`)
-
-/** A reference, by the name of its foreign key, points to nothing. */
-export const isMissingParent = (error: unknown, foreignKey: string): boolean =>
-  errnoOf(error) === PARENT_MISSING &&
-  ((error as DriverError).message ?? '').includes(`\`${foreignKey}\``)
 
 export function isDatabaseAway(error: unknown): boolean {
   const { code, name, message, fatal, errno } = error as DriverError

@@ -1,10 +1,13 @@
 import type { HookupLabel } from '@coaxwain/contract'
+import type { Model } from '@coaxwain/models'
 import {
+  doubtOf,
   fitted,
   mayLend,
   type Hookup,
   type Question,
   type Snapshot,
+  type TestState,
   type Uid,
   type Unit,
 } from '@coaxwain/shelf'
@@ -25,6 +28,7 @@ export function usedParts(hookup: Hookup): UsedPart[] {
     ...hookup.links.flatMap(({ from, to }) =>
       [from, to].map((end) => ({ unit: end.unit, part: 'port' as const, key: end.port })),
     ),
+    ...(hookup.ends ?? []).map((end) => ({ unit: end.unit, part: 'port' as const, key: end.port })),
     ...hookup.settings.map((s) => ({ unit: s.unit, part: 'control' as const, key: s.control })),
     ...hookup.legs.flatMap((leg) =>
       leg.stops.map((s) => ({ unit: s.unit, part: 'function' as const, key: s.function })),
@@ -52,28 +56,51 @@ export function usedPieces(hookup: Hookup): Map<Uid, number> {
   return new Map([...copies].map(([model, found]) => [model, found.size]))
 }
 
-/** What of a unit bears on a hookup: its model, what was done to it, and the states of what is used. */
+/** Descriptions are kept as long as they are used, and never change. */
+const known = new WeakMap<Model, string>()
+
+function modelFingerprint(model: Model | undefined): string | null {
+  if (!model) return null
+  const found = known.get(model) ?? fingerprint(model)
+  known.set(model, found)
+  return found
+}
+
+/** What a state means to a hookup: to have tried something and found it working changes nothing. */
+function worth(unit: Unit, state: TestState): 'good' | 'doubtful' | 'none' {
+  const doubt = doubtOf(unit, state)
+  return doubt === null ? 'none' : doubt > 1 ? 'doubtful' : 'good'
+}
+
+/** What of a unit bears on a hookup: its model, what was done to it, and what is known of the parts used. */
 export function unitFingerprint(snapshot: Snapshot, unit: Unit, hookup: Hookup): string {
   const parts = usedParts(hookup).filter((p) => p.unit === unit.uid)
   const used = (kind: PartKind): Set<string> =>
     new Set(parts.filter((p) => p.part === kind).map((p) => p.key))
   const [ports, functions] = [used('port'), used('function')]
+  const untried = worth(unit, 'untested')
+  const marks = [
+    ...unit.forms
+      .filter((f) => ports.has(f.port))
+      .map((f) => [worth(unit, f.state), 'form', f.jack, f.port]),
+    ...unit.functions
+      .filter((f) => functions.has(f.function))
+      .map((f) => [worth(unit, f.state), 'function', f.function]),
+  ]
   return fingerprint({
-    model: snapshot.models[unit.model],
-    working: unit.working,
+    model: modelFingerprint(snapshot.models[unit.model]),
     modifications: unit.modifications,
     remotePresent: unit.remotePresent,
-    forms: unit.forms
-      .filter((f) => ports.has(f.port))
-      .map(({ jack, port, state }) => ({ jack, port, state })),
-    functions: unit.functions
-      .filter((f) => functions.has(f.function))
-      .map(({ function: key, state }) => ({ key, state })),
+    untried,
+    marks: marks
+      .filter(([value]) => value !== untried)
+      .map((mark) => mark.join(' '))
+      .sort(),
   })
 }
 
 export const pieceFingerprint = (snapshot: Snapshot, model: Uid): string =>
-  fingerprint(snapshot.models[model] ?? null)
+  fingerprint(modelFingerprint(snapshot.models[model]))
 
 /** Leads and adapters of one model that may be used today. */
 const inTheDrawer = (snapshot: Snapshot, model: Uid): number =>
@@ -147,6 +174,15 @@ export function hookupMustFit(snapshot: Snapshot, hookup: Hookup): void {
         ? []
         : [{ path: 'hookup.links', code: 'unknown-reference', details: { name: model } }],
     ),
+    ...(hookup.sound.from === null || snapshot.units.some((u) => u.uid === hookup.sound.from)
+      ? []
+      : [
+          {
+            path: 'hookup.sound.from',
+            code: 'unknown-reference',
+            details: { name: hookup.sound.from },
+          },
+        ]),
     ...hookup.legs.flatMap((leg, i) =>
       leg.links.flatMap((link, j) =>
         hookup.links[link]
@@ -161,5 +197,5 @@ export function hookupMustFit(snapshot: Snapshot, hookup: Hookup): void {
       ),
     ),
   ]
-  if (errors.length > 0) throw new AppError('question-unsound', { errors })
+  if (errors.length > 0) throw new AppError('unknown-reference', { errors })
 }

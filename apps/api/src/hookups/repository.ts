@@ -1,7 +1,7 @@
 import type { Hookup, Question, Uid } from '@coaxwain/shelf'
 import type { Knex } from 'knex'
 import { parseJson } from '../db/json'
-import { cutPage, onPage, sqlInstant, type Page, type PageWish } from '../db/pages'
+import { createPages, sqlInstant, type Page, type PageWish } from '../db/pages'
 import type { Bearing, UsedPart } from './bearing'
 
 export interface HookupRow {
@@ -56,6 +56,11 @@ const toRow = (row: RawRow): HookupRow => ({
   ...row,
   question: parseJson<Question>(row.question),
   hookup: parseJson<Hookup>(row.hookup),
+})
+
+const { onPage, cutPage } = createPages<HookupRow>('hookups.uid', {
+  title: { column: 'hookups.title', value: (r) => r.title },
+  saved: { column: 'hookups.created_at', value: (r) => sqlInstant(r.savedAt) },
 })
 
 export type HookupsRepository = ReturnType<typeof createHookupsRepository>
@@ -119,10 +124,7 @@ export const createHookupsRepository = (db: Knex) => {
         onPage(filtered(collectionId, filters).select(COLUMNS), wish) as Promise<RawRow[]>,
         filtered(collectionId, filters).count('* as n').first() as Promise<{ n: number }>,
       ])
-      const page = cutPage(rows.map(toRow), wish, (r) =>
-        wish.order.column === 'hookups.title' ? r.title : sqlInstant(r.savedAt),
-      )
-      return { ...page, total: counted.n }
+      return { ...cutPage(rows.map(toRow), wish), total: counted.n }
     },
 
     /** Also finds what was deleted. */

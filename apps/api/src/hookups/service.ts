@@ -8,7 +8,6 @@ import {
 import type { Hookup, Question, Snapshot } from '@coaxwain/shelf'
 import { questionMustFit, type Checker } from '../answers/service'
 import { AppError, notFound } from '../app-error'
-import type { Order } from '../db/pages'
 import type { Together } from '../db/transact'
 import { isDuplicateOf } from '../db/translate-db-error'
 import type { Scope } from '../http/call'
@@ -34,19 +33,6 @@ interface Needs {
   readonly inOne: Together<HookupsRepository>
   readonly snapshots: SnapshotService
   readonly checkHookup: Checker
-}
-
-const order = (column: string, descending = false): Order => ({
-  column,
-  descending,
-  tie: 'hookups.uid',
-})
-
-const ORDERS: Readonly<Record<NonNullable<HookupQuery['sort']>, Order>> = {
-  title: order('hookups.title'),
-  '-title': order('hookups.title', true),
-  saved: order('hookups.created_at'),
-  '-saved': order('hookups.created_at', true),
 }
 
 function bearingsOf(snapshot: Snapshot, question: Question, hookup: Hookup) {
@@ -123,8 +109,7 @@ export function createHookupsService({ hookups, inOne, snapshots, checkHookup }:
 
     async list(scope: Scope, query: HookupQuery): Promise<HookupPage> {
       const { cursor, limit = PAGE_DEFAULT, sort = '-saved', ...filters } = query
-      const wish = { order: ORDERS[sort], limit, cursor }
-      const page = await hookups.list(scope.collectionId, filters, wish)
+      const page = await hookups.list(scope.collectionId, filters, { sort, limit, cursor })
       const now = await standings(scope, page.items)
       return {
         items: page.items.map((row) => toHookupSummary(row, now(row))),

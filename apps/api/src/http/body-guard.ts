@@ -1,3 +1,4 @@
+import { fieldPath, shownKey } from '@coaxwain/contract'
 import { AppError } from '../app-error'
 
 const MOST_DEPTH = 20
@@ -11,7 +12,7 @@ export function guardBody(value: unknown, path: readonly string[] = []): void {
   if (Array.isArray(value)) {
     if (value.length > MOST_ITEMS) {
       throw new AppError('invalid-request', {
-        errors: [{ path: path.join('.'), code: 'too-many', details: { limit: MOST_ITEMS } }],
+        errors: [{ path: fieldPath(path), code: 'too-many', details: { limit: MOST_ITEMS } }],
       })
     }
     value.forEach((item, i) => guardBody(item, [...path, String(i)]))
@@ -20,7 +21,13 @@ export function guardBody(value: unknown, path: readonly string[] = []): void {
   for (const key of Object.keys(value)) {
     if (FORBIDDEN_KEYS.includes(key)) {
       throw new AppError('invalid-request', {
-        errors: [{ path: [...path, key].join('.'), code: 'unknown-field', details: { name: key } }],
+        errors: [
+          {
+            path: fieldPath([...path, key]),
+            code: 'unknown-field',
+            details: { name: shownKey(key) },
+          },
+        ],
       })
     }
     guardBody((value as Record<string, unknown>)[key], [...path, key])

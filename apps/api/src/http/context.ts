@@ -15,6 +15,8 @@ declare global {
 
 declare module 'express-session' {
   interface SessionData {
+    /** Present while somebody is signed in. */
+    passport?: unknown
     startedAt?: number
   }
 }

@@ -16,11 +16,11 @@ import { asError } from './as-error'
 import { NotModified, Tagged, type AllHandlers, type Scope } from './call'
 import { guardBody } from './body-guard'
 import { personOf } from './context'
+import { startDeadline, stopDeadline } from './deadline'
 import { signIn, signOut, type Authenticator } from './sign-in'
 import { validate } from './validate'
 
 const BODY_LIMIT = '100kb'
-const KEY_LIMIT = 200
 
 export interface MountNeeds {
   readonly router: Router
@@ -38,19 +38,24 @@ type AnyHandler = (call: AnyCall) => Promise<unknown>
 
 const readJson = json({ limit: BODY_LIMIT, strict: true, type: 'application/json' })
 
+interface Admitted {
+  readonly params: unknown
+  readonly scope: Scope | null
+}
+
 /** Before the body is read: whoever may not do this need not send it. */
 async function admit(
   route: Route,
   req: Request,
   collections: CollectionsService,
-): Promise<Scope | null> {
-  if (route.who === 'anyone') return null
+): Promise<Admitted> {
   const person = personOf(req)
-  if (!person) throw new AppError('sign-in-required')
-  if (route.who === 'signed-in') return null
-  const scope = await collections.scopeOf(person, String(req.params['collection']))
+  if (route.who !== 'anyone' && !person) throw new AppError('sign-in-required')
+  const params = readParams(route, req)
+  if (route.who === 'anyone' || route.who === 'signed-in' || !person) return { params, scope: null }
+  const scope = await collections.scopeOf(person, params['collection'] as string)
   if (!hasRight(scope.role, route.who)) throw new AppError('forbidden')
-  return scope
+  return { params, scope }
 }
 
 function readVersion(route: Route, req: Request): number | null {
@@ -63,7 +68,7 @@ function readVersion(route: Route, req: Request): number | null {
 function idempotencyKey(req: Request, scope: Scope | null): string | null {
   const key = req.get('idempotency-key')
   if (key === undefined) return null
-  const from = [req.method, req.path, scope?.person.uid ?? '', key.slice(0, KEY_LIMIT)]
+  const from = [req.method, req.path, scope?.person.uid ?? '', key]
   return createHash('sha256').update(from.join('\0')).digest('base64url')
 }
 
@@ -76,20 +81,23 @@ async function readBody(route: Route, req: Request, res: Response): Promise<unkn
   }
   if (!req.is('application/json'))
     throw new AppError(some ? 'wrong-content-type' : 'malformed-json')
+  stopDeadline(res)
   await new Promise<void>((resolve, reject) => {
     readJson(req, res, (error?: unknown) =>
       error === undefined ? resolve() : reject(asError(error)),
     )
-  })
+  }).finally(() => startDeadline(req, res))
   guardBody(req.body)
-  return validate(route.body, req.body)
+  // Whoever else looks at the request sees what was judged, and nothing beside it.
+  req.body = validate(route.body, req.body)
+  return req.body as unknown
 }
 
 /** An id in an address that has the wrong form names nothing, like any other that is not there. */
-function readParams(route: Route, req: Request): unknown {
+function readParams(route: Route, req: Request): Readonly<Record<string, unknown>> {
   const found = route.params.safeParse({ ...req.params })
   if (!found.success) throw notFound()
-  return found.data
+  return found.data as Readonly<Record<string, unknown>>
 }
 
 function send(route: Route, res: Response, reply: unknown, checkReplies: boolean): void {
@@ -119,8 +127,7 @@ const toHandler =
   (name: RouteName, needs: MountNeeds): RequestHandler =>
   async (req, res) => {
     const route: Route = ROUTES[name]
-    const scope = await admit(route, req, needs.collections)
-    const params = readParams(route, req)
+    const { params, scope } = await admit(route, req, needs.collections)
     const query = validate(route.query, { ...req.query }, 'query.')
     const version = readVersion(route, req)
     const body = await readBody(route, req, res)

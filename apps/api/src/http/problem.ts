@@ -15,7 +15,7 @@ interface HttpFault {
   readonly status?: number
 }
 
-/** Faults found by the body parser and by the router itself. */
+/** Faults found by the body parser, by the router, and by what sends files. */
 function translateHttpFault(error: unknown): unknown {
   const { type, status } = error as HttpFault
   switch (type) {
@@ -31,7 +31,9 @@ function translateHttpFault(error: unknown): unknown {
     case 'entity.verify.failed':
       return new AppError('invalid-request')
     default:
-      return status === 400 ? new AppError('invalid-request', { cause: error }) : error
+      return status !== undefined && status >= 400 && status < 500
+        ? new AppError(status === 404 ? 'not-found' : 'invalid-request', { cause: error })
+        : error
   }
 }
 

@@ -32,7 +32,7 @@ export const securityHeaders = (behindTls: boolean): RequestHandler[] => [
     xFrameOptions: { action: 'deny' },
   }),
   (_req, res, next) => {
-    res.set('Permissions-Policy', 'camera=(self), geolocation=(), microphone=()')
+    res.set('Permissions-Policy', 'camera=(), geolocation=(), microphone=()')
     next()
   },
 ]

@@ -19,13 +19,11 @@ export interface SessionNeeds {
   readonly authenticator: Authenticator
 }
 
+/** A session in which somebody is signed in and that does not know since when counts as too old. */
 const endTooOld: RequestHandler = (req, _res, next) => {
-  const started = req.session.startedAt
-  if (started === undefined || Date.now() - started < ABSOLUTE_MS) {
-    next()
-    return
-  }
-  req.session.regenerate(next)
+  const { passport, startedAt = 0 } = req.session
+  if (passport === undefined || Date.now() - startedAt < ABSOLUTE_MS) next()
+  else req.session.regenerate(next)
 }
 
 /** Idle limit by the stored expiry, moved on with each request; absolute limit by the start. */

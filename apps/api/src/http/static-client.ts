@@ -1,7 +1,6 @@
 import { existsSync } from 'node:fs'
 import { join } from 'node:path'
 import express, { type Router } from 'express'
-import { AppError } from '../app-error'
 
 const NO_ROBOTS = 'User-agent: *\nDisallow: /\n'
 
@@ -28,7 +27,6 @@ export function staticClient(folder: string): Router {
       next()
       return
     }
-    if (!existsSync(document)) throw new AppError('not-found')
     res.set('Cache-Control', 'no-cache').sendFile(document)
   })
   return router

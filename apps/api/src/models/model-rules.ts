@@ -1,4 +1,5 @@
 import { checkModel, type Model } from '@coaxwain/models'
+import { fitted, type Modification } from '@coaxwain/shelf'
 import { AppError, type FieldTrouble } from '../app-error'
 import { partKeys, type Part, type PartKey } from './parts'
 
@@ -47,4 +48,29 @@ export function mustKeepKeys(
   if (again.length > 0) {
     throw new AppError('key-reused', { errors: again.map((k) => fault(k, 'used-before')) })
   }
+}
+
+/** Whatever was built into units must still make a whole with the new description. */
+export function mustBearFittings(
+  document: Model,
+  fittings: readonly (readonly Modification[])[],
+): void {
+  if (document.type !== 'device') return
+  const clashes = fittings.flatMap((modifications) =>
+    checkModel(
+      fitted(
+        document,
+        modifications.filter((m) => m.kind === 'added'),
+      ),
+    ),
+  )
+  const names = [...new Set(clashes.map(({ details }) => details.name))]
+  if (names.length === 0) return
+  throw new AppError('part-in-use', {
+    errors: names.map((name) => ({
+      path: 'document',
+      code: 'clashes-with-fitting',
+      details: { name },
+    })),
+  })
 }

@@ -1,10 +1,11 @@
 import type { ModelQuery } from '@coaxwain/contract'
 import type { Model } from '@coaxwain/models'
 import type { Knex } from 'knex'
-import { cutPage, likePatterns, onPage, sqlInstant, type Page, type PageWish } from '../db/pages'
+import { createPages, likePatterns, sqlInstant, type Page, type PageWish } from '../db/pages'
 import { parseJson } from '../db/json'
 import { bumpShelf } from '../db/versions'
-import { PART_TABLES, partKeys, partRows, type Part, type PartKey } from './parts'
+import { createModelUses } from './model-uses.repository'
+import { PART_TABLES, partKeys, partRows, type PartKey } from './parts'
 
 export interface ModelRow {
   readonly id: number
@@ -49,6 +50,11 @@ const COLUMNS = {
   changedAt: 'models.changed_at',
   deletedAt: 'models.deleted_at',
 }
+
+const { onPage, cutPage } = createPages<ModelRow>('models.uid', {
+  maker: { column: 'models.sort_name', value: (r) => r.sortName },
+  changed: { column: 'models.changed_at', value: (r) => sqlInstant(r.changedAt) },
+})
 
 export type ModelsRepository = ReturnType<typeof createModelsRepository>
 
@@ -155,6 +161,8 @@ export const createModelsRepository = (db: Knex) => {
   }
 
   return {
+    ...createModelUses(db),
+
     async list(
       collectionId: number,
       filters: Filters,
@@ -164,10 +172,7 @@ export const createModelsRepository = (db: Knex) => {
         onPage(filtered(collectionId, filters).select(COLUMNS), wish) as Promise<ModelRow[]>,
         filtered(collectionId, filters).count('* as n').first() as Promise<{ n: number }>,
       ])
-      const page = cutPage(rows, wish, (r) =>
-        wish.order.column === 'models.changed_at' ? sqlInstant(r.changedAt) : r.sortName,
-      )
-      return { ...page, total: counted.n }
+      return { ...cutPage(rows, wish), total: counted.n }
     },
 
     /** Every lead and adapter that a collection sees. */
@@ -187,8 +192,9 @@ export const createModelsRepository = (db: Knex) => {
     async facets(collectionId: number, ids: readonly number[]): Promise<Map<number, ModelFacets>> {
       const units = db('units')
         .where('units.collection_id', collectionId)
-        .whereNull('units.deleted_at')
+        .whereIn('units.model_home_key', [0, collectionId])
         .whereIn('units.model_id', ids)
+        .whereNull('units.deleted_at')
         .groupBy('units.model_id')
         .select('units.model_id as id', db.raw('cast(sum(units.quantity) as unsigned) as value'))
       const [aliases, ports, plugs, forms, functions, counts] = await Promise.all([
@@ -320,50 +326,11 @@ export const createModelsRepository = (db: Knex) => {
       return changed === 1
     },
 
-    async unitCount(collectionId: number, modelId: number): Promise<number> {
-      const row = (await db('units')
-        .where({ collection_id: collectionId, model_id: modelId })
-        .whereNull('deleted_at')
-        .count('* as n')
-        .first()) as { n: number }
-      return row.n
-    },
-
     /** Keys of a model that were made at any time. */
     async keysEver(modelId: number): Promise<PartKey[]> {
       return (await db('model_keys')
         .where({ model_id: modelId })
         .select('part', 'part_key as key')) as PartKey[]
-    },
-
-    /** Keys that states, stands, modifications or saved hookups of its units name. */
-    async keysInUse(modelId: number): Promise<PartKey[]> {
-      const of = (table: string, part: Part, column: string): Knex.QueryBuilder =>
-        db(table)
-          .join('units', (on) =>
-            on
-              .on('units.collection_id', `${table}.collection_id`)
-              .andOn('units.id', `${table}.unit_id`),
-          )
-          .where('units.model_id', modelId)
-          .select(db.raw('? as part', [part]), `${table}.${column} as key`)
-      const bypassed = of('unit_modifications', 'function', 'kind')
-        .clearSelect()
-        .select(
-          db.raw("'function' as part"),
-          db.raw("json_value(unit_modifications.document, '$.function') as `key`"),
-        )
-        .where('unit_modifications.kind', 'bypassed')
-      const inHookups = of('hookup_unit_parts', 'port', 'part_key')
-        .clearSelect()
-        .select('hookup_unit_parts.part', 'hookup_unit_parts.part_key as key')
-      return (await of('unit_form_states', 'port', 'port_key').union([
-        of('unit_form_states', 'jack', 'jack_key'),
-        of('unit_function_states', 'function', 'function_key'),
-        of('unit_stands', 'control', 'control_key'),
-        bypassed,
-        inHookups,
-      ])) as PartKey[]
     },
   }
 }

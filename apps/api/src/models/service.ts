@@ -8,30 +8,16 @@ import {
 } from '@coaxwain/contract'
 import type { Model } from '@coaxwain/models'
 import { AppError, notFound } from '../app-error'
-import type { Order } from '../db/pages'
 import type { Together } from '../db/transact'
 import { isDuplicateOf } from '../db/translate-db-error'
 import type { Scope } from '../http/call'
 import { fingerprint } from '../uid'
 import { mustHold, orLate, type At } from '../versioned'
 import { toModelDetail, toModelSummary } from './mapper'
-import { mustBeSound, mustKeepKeys } from './model-rules'
+import { mustBearFittings, mustBeSound, mustKeepKeys } from './model-rules'
 import type { ModelRow, ModelsRepository } from './repository'
 
 export type ModelsService = ReturnType<typeof createModelsService>
-
-const order = (column: string, descending: boolean): Order => ({
-  column,
-  descending,
-  tie: 'models.uid',
-})
-
-const ORDERS: Readonly<Record<NonNullable<ModelQuery['sort']>, Order>> = {
-  maker: order('models.sort_name', false),
-  '-maker': order('models.sort_name', true),
-  changed: order('models.changed_at', false),
-  '-changed': order('models.changed_at', true),
-}
 
 /** Revisions never change, so they may be kept; the least recently made go first. */
 const MOST_KEPT = 2000
@@ -124,8 +110,7 @@ export function createModelsService(models: ModelsRepository, inOne: Together<Mo
 
     async list(scope: Scope, query: ModelQuery): Promise<ModelPage> {
       const { cursor, limit = PAGE_DEFAULT, sort = 'maker', ...filters } = query
-      const wish = { order: ORDERS[sort], limit, cursor }
-      const page = await models.list(scope.collectionId, filters, wish)
+      const page = await models.list(scope.collectionId, filters, { sort, limit, cursor })
       const ids = page.items.map((r) => r.id)
       const facets = await models.facets(scope.collectionId, ids)
       const items = page.items.flatMap((row) => {
@@ -175,15 +160,17 @@ export function createModelsService(models: ModelsRepository, inOne: Together<Mo
       const before = await documentOf(row)
       const edit = async (repository: ModelsRepository): Promise<void> => {
         await repository.bumpShelf(scope.collectionId)
-        const units = await repository.unitCount(scope.collectionId, row.id)
+        const units = (await repository.unitCounts(scope.collectionId, row.id)).all
         if (before.type !== document.type && units > 0) {
           throw new AppError('model-in-use', { details: { units } })
         }
-        const used = await repository.keysInUse(row.id)
+        const used = await repository.keysInUse(scope.collectionId, row.id)
         const ever = await repository.keysEver(row.id)
+        const fittings = await repository.modificationsOfUnits(scope.collectionId, row.id)
         const target = { id: row.id, version: at.version }
         mustHold(await repository.update(scope.collectionId, target, document, scope.person.id))
         mustKeepKeys(before, document, used, ever)
+        mustBearFittings(document, fittings)
       }
       await orLate(
         () => inOne(edit),
@@ -196,7 +183,7 @@ export function createModelsService(models: ModelsRepository, inOne: Together<Mo
       const row = mustStand(await findOwn(scope, at.uid))
       const remove = async (repository: ModelsRepository): Promise<void> => {
         await repository.bumpShelf(scope.collectionId)
-        const units = await repository.unitCount(scope.collectionId, row.id)
+        const units = (await repository.unitCounts(scope.collectionId, row.id)).standing
         if (units > 0) throw new AppError('model-in-use', { details: { units } })
         const target = { id: row.id, version: at.version }
         mustHold(await repository.setDeleted(scope.collectionId, target, true, scope.person.id))

@@ -1,4 +1,4 @@
-import { PASSWORD_LENGTH } from '@coaxwain/contract'
+import { PASSWORD_LENGTH, passwordLength } from '@coaxwain/contract'
 import { COMMON_PARTS } from './common-parts'
 
 export const PASSWORD_FAULTS = ['too-short', 'too-long', 'repeats', 'common', 'personal'] as const
@@ -37,7 +37,7 @@ export function passwordFault(
   password: string,
   about: { readonly email: string; readonly collections: readonly string[] },
 ): PasswordFault | null {
-  const letters = Array.from(password).length
+  const letters = passwordLength(password)
   if (letters < PASSWORD_LENGTH.least) return 'too-short'
   if (letters > PASSWORD_LENGTH.most) return 'too-long'
   const text = plain(password)

@@ -1,40 +1,41 @@
 import type { Place } from '@coaxwain/contract'
-import type { PlaceRow } from './repository'
+import type { PlaceNode, PlaceRow } from './repository'
 
-const MOST_DEPTH = 50
+/** Places stand in one another this deep at most; no path is longer. */
+export const MOST_DEPTH = 20
 
-type Rows = ReadonlyMap<number, PlaceRow>
+type Nodes = ReadonlyMap<number, PlaceNode>
 
-export const byId = (rows: readonly PlaceRow[]): Rows => new Map(rows.map((r) => [r.id, r]))
+export const byId = (nodes: readonly PlaceNode[]): Nodes => new Map(nodes.map((n) => [n.id, n]))
 
 /** The place and everything that it stands in, outermost first. */
-export function ancestry(place: PlaceRow, rows: Rows): PlaceRow[] {
-  const found: PlaceRow[] = []
+export function ancestry(place: PlaceNode, known: Nodes): PlaceNode[] {
+  const found: PlaceNode[] = []
   for (
-    let at: PlaceRow | undefined = place;
+    let at: PlaceNode | undefined = place;
     at && found.length < MOST_DEPTH;
-    at = at.parentId === null ? undefined : rows.get(at.parentId)
+    at = at.parentId === null ? undefined : known.get(at.parentId)
   ) {
     found.unshift(at)
   }
   return found
 }
 
-export const toPlace = (row: PlaceRow, rows: Rows): Place => ({
+export const toPlace = (row: PlaceRow, known: Nodes): Place => ({
   uid: row.uid,
   name: row.name,
-  parent: (row.parentId === null ? undefined : rows.get(row.parentId))?.uid ?? null,
-  path: ancestry(row, rows).map((p) => p.name),
+  parent: (row.parentId === null ? undefined : known.get(row.parentId))?.uid ?? null,
+  path: ancestry(row, known).map((p) => p.name),
   version: row.version,
   units: row.units,
 })
 
 /** Paths by the id of the place, for lists of what stands there. */
 export const pathsOf = (
-  rows: readonly PlaceRow[],
+  nodes: readonly PlaceNode[],
 ): Map<number, { uid: string; path: string[] }> => {
-  const known = byId(rows)
+  const known = byId(nodes)
   return new Map(
-    rows.map((r) => [r.id, { uid: r.uid, path: ancestry(r, known).map((p) => p.name) }]),
+    nodes.map((n) => [n.id, { uid: n.uid, path: ancestry(n, known).map((p) => p.name) }]),
   )
 }

@@ -1,11 +1,15 @@
 import type { Knex } from 'knex'
 import { bumpShelf } from '../db/versions'
 
-export interface PlaceRow {
+/** A place and what it stands in. */
+export interface PlaceNode {
   readonly id: number
   readonly uid: string
   readonly parentId: number | null
   readonly name: string
+}
+
+export interface PlaceRow extends PlaceNode {
   readonly version: number
   readonly madeFrom: string | null
   readonly deleted: boolean
@@ -51,6 +55,19 @@ export const createPlacesRepository = (db: Knex) => {
         .whereNull('places.deleted_at')
         .orderBy(['places.name', 'places.uid'])) as RawRow[]
       return rows.map(toRow)
+    },
+
+    /** The same without counting, for paths. */
+    async nodes(collectionId: number): Promise<PlaceNode[]> {
+      return (await db('places')
+        .where('places.collection_id', collectionId)
+        .whereNull('places.deleted_at')
+        .select(
+          'places.id',
+          'places.uid',
+          'places.parent_id as parentId',
+          'places.name',
+        )) as PlaceNode[]
     },
 
     async find(collectionId: number, uid: string): Promise<PlaceRow | null> {

@@ -5,12 +5,24 @@ import { isDuplicateOf } from '../db/translate-db-error'
 import type { Scope } from '../http/call'
 import { fingerprint } from '../uid'
 import { mustHold, orLate, type At } from '../versioned'
-import { ancestry, byId, pathsOf, toPlace } from './mapper'
+import { ancestry, byId, MOST_DEPTH, pathsOf, toPlace } from './mapper'
 import type { PlaceRow, PlacesRepository } from './repository'
 
 export type PlacesService = ReturnType<typeof createPlacesService>
 
-const MOST_DEPTH = 20
+const MOST_PLACES = 2000
+
+const tooMany = (path: string, limit: number): AppError =>
+  new AppError('invalid-request', { errors: [{ path, code: 'too-many', details: { limit } }] })
+
+/** How deep the places go that stand in this one, with itself. */
+function heightOf(place: PlaceRow, rows: readonly PlaceRow[]): number {
+  const known = byId(rows)
+  const chains = rows.map((r) => ancestry(r, known).map((p) => p.id))
+  return Math.max(
+    ...chains.filter((c) => c.includes(place.id)).map((c) => c.length - c.indexOf(place.id)),
+  )
+}
 
 export function createPlacesService(places: PlacesRepository, inOne: Together<PlacesRepository>) {
   const read = async (scope: Scope, uid: string): Promise<Place> => {
@@ -29,14 +41,13 @@ export function createPlacesService(places: PlacesRepository, inOne: Together<Pl
     if (parent === null) return null
     const row = rows.find((r) => r.uid === parent)
     if (!row) throw unknownReference('parent')
-    const above = ancestry(row, byId(rows))
+    const known = byId(rows)
+    const above = ancestry(row, known)
     if (child && above.some((p) => p.id === child.id)) {
       throw new AppError('place-within-itself', { details: { name: child.name } })
     }
-    if (above.length >= MOST_DEPTH) {
-      throw new AppError('invalid-request', {
-        errors: [{ path: 'parent', code: 'too-many', details: { limit: MOST_DEPTH } }],
-      })
+    if (above.length + (child ? heightOf(child, rows) : 1) > MOST_DEPTH) {
+      throw tooMany('parent', MOST_DEPTH)
     }
     return row
   }
@@ -55,6 +66,7 @@ export function createPlacesService(places: PlacesRepository, inOne: Together<Pl
         await inOne(async (repository) => {
           await repository.bumpShelf(scope.collectionId)
           const rows = await repository.list(scope.collectionId)
+          if (rows.length >= MOST_PLACES) throw tooMany('name', MOST_PLACES)
           const parent = parentOf(rows, wish.parent ?? null, null)
           const parentId = parent?.id ?? null
           await repository.insert(scope.collectionId, { uid, name: wish.name, parentId, madeFrom })
@@ -108,15 +120,15 @@ export function createPlacesService(places: PlacesRepository, inOne: Together<Pl
 
     /** Where units stand, by the id of the place. */
     async paths(scope: Scope): Promise<ReturnType<typeof pathsOf>> {
-      return pathsOf(await places.list(scope.collectionId))
+      return pathsOf(await places.nodes(scope.collectionId))
     },
 
     /** A place with everything inside it, or null when there is no such place. */
     async within(scope: Scope, uid: string): Promise<number[] | null> {
-      const rows = await places.list(scope.collectionId)
-      const known = byId(rows)
-      const found = rows.filter((r) => ancestry(r, known).some((p) => p.uid === uid))
-      return found.length === 0 ? null : found.map((r) => r.id)
+      const nodes = await places.nodes(scope.collectionId)
+      const known = byId(nodes)
+      const found = nodes.filter((n) => ancestry(n, known).some((p) => p.uid === uid))
+      return found.length === 0 ? null : found.map((n) => n.id)
     },
   }
 }

@@ -17,41 +17,56 @@ interface Needs {
 const MOST_KEPT = 20
 const TRIES = 5
 
-const same = (
-  a: { shelfVersion: number; catalogueVersion: number },
-  b: { shelfVersion: number; catalogueVersion: number },
-): boolean => a.shelfVersion === b.shelfVersion && a.catalogueVersion === b.catalogueVersion
+interface Versions {
+  readonly shelfVersion: number
+  readonly catalogueVersion: number
+}
+
+const same = (a: Versions, b: Versions): boolean =>
+  a.shelfVersion === b.shelfVersion && a.catalogueVersion === b.catalogueVersion
 
 export function createSnapshotService({ versions, units, models }: Needs) {
   /** Keyed by collection and versions, so that no process can hold a stale one. */
   const kept = new Map<string, Snapshot>()
+  /** Whoever asks for one that is being put together waits for that. */
+  const underWay = new Map<string, Promise<Snapshot | null>>()
 
-  const build = async (scope: Scope): Promise<Snapshot> => {
+  const keep = (key: string, snapshot: Snapshot): Snapshot => {
+    kept.set(key, snapshot)
+    for (const oldest of kept.keys()) {
+      if (kept.size <= MOST_KEPT) break
+      kept.delete(oldest)
+    }
+    return snapshot
+  }
+
+  /** Null when something moved meanwhile: every write bumps a version. */
+  const build = async (scope: Scope, at: Versions, key: string): Promise<Snapshot | null> => {
+    const [shelf, pieces] = await Promise.all([units.everything(scope), models.pieces(scope)])
+    if (!same(at, await versions.versions(scope.collectionId))) return null
+    return keep(key, {
+      ...at,
+      models: Object.fromEntries([...pieces, ...shelf.models]),
+      units: shelf.units,
+    })
+  }
+
+  const read = async (scope: Scope): Promise<Snapshot> => {
     for (let tries = 0; tries < TRIES; tries += 1) {
-      const before = await versions.versions(scope.collectionId)
-      const key = `${scope.collectionId} ${snapshotEtag(before.shelfVersion, before.catalogueVersion)}`
+      const at = await versions.versions(scope.collectionId)
+      const key = `${scope.collectionId} ${snapshotEtag(at.shelfVersion, at.catalogueVersion)}`
       const known = kept.get(key)
       if (known) return known
-      const [shelf, pieces] = await Promise.all([units.everything(scope), models.pieces(scope)])
-      // Every write bumps a version, so equal versions before and after mean that nothing moved between.
-      if (!same(before, await versions.versions(scope.collectionId))) continue
-      const found: Snapshot = {
-        ...before,
-        models: Object.fromEntries([...pieces, ...shelf.models]),
-        units: shelf.units,
-      }
-      kept.set(key, found)
-      for (const oldest of kept.keys()) {
-        if (kept.size <= MOST_KEPT) break
-        kept.delete(oldest)
-      }
-      return found
+      const running = underWay.get(key) ?? build(scope, at, key).finally(() => underWay.delete(key))
+      underWay.set(key, running)
+      const found = await running
+      if (found) return found
     }
     throw new AppError('busy', { retryAfterSeconds: 1 })
   }
 
   return {
-    read: build,
+    read,
 
     async etag(scope: Scope): Promise<string> {
       const now = await versions.versions(scope.collectionId)

@@ -1,18 +1,10 @@
-import type { FormState, FunctionState, Modification } from '@coaxwain/shelf'
+import { MOST_NEEDED_BY } from '@coaxwain/contract'
 import type { Knex } from 'knex'
-import { parseJson } from '../db/json'
-import { cutPage, onPage, sqlInstant, type Page, type PageWish } from '../db/pages'
+import { createPages, sqlInstant, type Page, type PageWish } from '../db/pages'
 import { bumpShelf } from '../db/versions'
-import { addedParts } from './added-parts'
 import { filterUnits, type UnitFilters } from './unit-filters.repository'
-import type {
-  FormFound,
-  FunctionFound,
-  NewUnitRow,
-  Overlays,
-  UnitFields,
-  UnitRow,
-} from './unit-rows'
+import { createUnitOverlays, keyColumns, type UnitKey } from './unit-overlays.repository'
+import type { NewUnitRow, UnitFields, UnitRow } from './unit-rows'
 
 const COLUMNS = {
   id: 'units.id',
@@ -40,27 +32,19 @@ const COLUMNS = {
   modelName: 'models.name',
   market: 'models.market',
   revision: 'models.revision',
-  modelDeletedAt: 'models.deleted_at',
   placeName: 'places.name',
 }
 
-type RawRow = Omit<UnitRow, 'remotePresent' | 'modelDeleted'> & {
-  readonly remotePresent: number
-  readonly modelDeletedAt: Date | null
-}
+type RawRow = Omit<UnitRow, 'remotePresent'> & { readonly remotePresent: number }
 
-const toRow = ({ modelDeletedAt, ...row }: RawRow): UnitRow => ({
-  ...row,
-  remotePresent: row.remotePresent === 1,
-  modelDeleted: modelDeletedAt !== null,
+const toRow = (row: RawRow): UnitRow => ({ ...row, remotePresent: row.remotePresent === 1 })
+
+const { onPage, cutPage } = createPages<UnitRow>('units.uid', {
+  name: { column: 'units.sort_name', value: (r) => r.sortName },
+  added: { column: 'units.created_at', value: (r) => sqlInstant(r.addedAt) },
+  changed: { column: 'units.changed_at', value: (r) => sqlInstant(r.changedAt) },
+  place: { column: "coalesce(places.name, '')", value: (r) => r.placeName ?? '' },
 })
-
-const SORT_VALUES: Readonly<Record<string, (row: UnitRow) => string>> = {
-  'units.sort_name': (r) => r.sortName,
-  'units.created_at': (r) => sqlInstant(r.addedAt),
-  'units.changed_at': (r) => sqlInstant(r.changedAt),
-  "coalesce(places.name, '')": (r) => r.placeName ?? '',
-}
 
 const FIELDS: Readonly<Record<keyof UnitFields, string>> = {
   label: 'label',
@@ -82,37 +66,7 @@ const toColumns = (fields: UnitFields): Record<string, unknown> =>
     }),
   )
 
-interface Evidence {
-  readonly on: string | null
-  readonly how: string | null
-  readonly by: string | null
-}
-
-const toEvidence = ({ on, how, by }: Evidence) => ({
-  ...(on === null ? {} : { on }),
-  ...(how === null ? {} : { how }),
-  ...(by === null ? {} : { by }),
-})
-
-const EVIDENCE = { state: 'state', on: 'found_on', how: 'how', by: 'by_name' }
-
-const foundColumns = (found: FormFound | FunctionFound) => ({
-  state: found.state,
-  found_on: found.on,
-  how: found.how,
-  by_person_id: found.byId,
-  by_name: found.byName,
-})
-
 export type UnitsRepository = ReturnType<typeof createUnitsRepository>
-
-/** Where a unit is: its collection, and itself. */
-export interface UnitKey {
-  readonly collectionId: number
-  readonly unitId: number
-}
-
-const keyColumns = (key: UnitKey) => ({ collection_id: key.collectionId, unit_id: key.unitId })
 
 export const createUnitsRepository = (db: Knex) => {
   const neededByCount = db('hookup_units')
@@ -125,24 +79,9 @@ export const createUnitsRepository = (db: Knex) => {
 
   const columns = () => ({ ...COLUMNS, neededByCount: neededByCount.clone() })
 
-  const overlayRows = async <Row extends { unitId: number }>(
-    table: string,
-    columns: Readonly<Record<string, string>>,
-    scope: { readonly collectionId: number; readonly unitIds: readonly number[] | 'all' },
-  ): Promise<Map<number, Row[]>> => {
-    const query = db(table)
-      .where(`${table}.collection_id`, scope.collectionId)
-      .orderBy(`${table}.id`)
-      .select({ unitId: `${table}.unit_id`, ...columns })
-    if (scope.unitIds !== 'all') void query.whereIn(`${table}.unit_id`, [...scope.unitIds])
-    const found = new Map<number, Row[]>()
-    for (const row of (await query) as Row[]) {
-      found.set(row.unitId, [...(found.get(row.unitId) ?? []), row])
-    }
-    return found
-  }
-
   return {
+    ...createUnitOverlays(db),
+
     async list(
       collectionId: number,
       filters: UnitFilters,
@@ -152,9 +91,7 @@ export const createUnitsRepository = (db: Knex) => {
         onPage(filterUnits(db, collectionId, filters).select(columns()), wish) as Promise<RawRow[]>,
         filterUnits(db, collectionId, filters).count('* as n').first() as Promise<{ n: number }>,
       ])
-      const value = SORT_VALUES[wish.order.column]
-      if (!value) throw new Error(`no sort value for ${wish.order.column}`)
-      return { ...cutPage(rows.map(toRow), wish, value), total: counted.n }
+      return { ...cutPage(rows.map(toRow), wish), total: counted.n }
     },
 
     /** Every unit that has not been deleted. */
@@ -166,73 +103,51 @@ export const createUnitsRepository = (db: Knex) => {
     },
 
     /** Also finds what was deleted. */
-    async find(collectionId: number, uid: string): Promise<UnitRow | null> {
-      const row = (await db('units')
+    async find(collectionId: number, uids: readonly string[]): Promise<UnitRow[]> {
+      const rows = (await db('units')
         .join('models', 'models.id', 'units.model_id')
         .leftJoin('places', 'places.id', 'units.place_id')
-        .where({ 'units.collection_id': collectionId, 'units.uid': uid })
-        .first(columns())) as RawRow | undefined
-      return row ? toRow(row) : null
+        .where('units.collection_id', collectionId)
+        .whereIn('units.uid', [...uids])
+        .select(columns())) as RawRow[]
+      return rows.map(toRow)
     },
 
-    async overlays(
+    /** The first saved hookups by the id of the unit that they use; its count tells of them all. */
+    async neededBy(
       collectionId: number,
-      unitIds: readonly number[] | 'all',
-    ): Promise<(unitId: number) => Overlays> {
-      const scope = { collectionId, unitIds }
-      const [forms, functions, modifications, stands] = await Promise.all([
-        overlayRows<
-          { unitId: number; jack: string; port: string; state: FormState['state'] } & Evidence
-        >('unit_form_states', { jack: 'jack_key', port: 'port_key', ...EVIDENCE }, scope),
-        overlayRows<{ unitId: number; function: string; state: FunctionState['state'] } & Evidence>(
-          'unit_function_states',
-          { function: 'function_key', ...EVIDENCE },
-          scope,
-        ),
-        overlayRows<{ unitId: number; document: unknown }>(
-          'unit_modifications',
-          { document: 'document' },
-          scope,
-        ),
-        overlayRows<{ unitId: number; control: string; position: string }>(
-          'unit_stands',
-          { control: 'control_key', position: 'position' },
-          scope,
-        ),
-      ])
-      return (id) => ({
-        forms: (forms.get(id) ?? []).map((f) => ({
-          jack: f.jack,
-          port: f.port,
-          state: f.state,
-          ...toEvidence(f),
-        })),
-        functions: (functions.get(id) ?? []).map((f) => ({
-          function: f.function,
-          state: f.state,
-          ...toEvidence(f),
-        })),
-        modifications: (modifications.get(id) ?? []).map((m) =>
-          parseJson<Modification>(m.document),
-        ),
-        stands: Object.fromEntries((stands.get(id) ?? []).map((s) => [s.control, s.position])),
-      })
-    },
-
-    async neededBy(key: UnitKey): Promise<{ uid: string; title: string }[]> {
-      return (await db('hookup_units')
+      unitIds: readonly number[],
+    ): Promise<Map<number, { uid: string; title: string }[]>> {
+      const ranked = db('hookup_units')
         .join('hookups', (on) =>
           on
             .on('hookups.collection_id', 'hookup_units.collection_id')
             .andOn('hookups.id', 'hookup_units.hookup_id'),
         )
-        .where({
-          'hookup_units.collection_id': key.collectionId,
-          'hookup_units.unit_id': key.unitId,
-        })
+        .where('hookup_units.collection_id', collectionId)
+        .whereIn('hookup_units.unit_id', [...unitIds])
         .whereNull('hookups.deleted_at')
-        .orderBy(['hookups.title', 'hookups.uid'])
-        .select('hookups.uid', 'hookups.title')) as { uid: string; title: string }[]
+        .select(
+          'hookup_units.unit_id as unitId',
+          'hookups.uid',
+          'hookups.title',
+          db.raw(
+            'row_number() over (partition by hookup_units.unit_id order by hookups.title, hookups.uid) as nth',
+          ),
+        )
+      const rows = (await db(ranked.as('ranked'))
+        .where('ranked.nth', '<=', MOST_NEEDED_BY)
+        .orderBy(['ranked.unitId', 'ranked.nth'])
+        .select('ranked.unitId', 'ranked.uid', 'ranked.title')) as {
+        unitId: number
+        uid: string
+        title: string
+      }[]
+      const found = new Map<number, { uid: string; title: string }[]>()
+      for (const { unitId, ...hookup } of rows) {
+        found.set(unitId, [...(found.get(unitId) ?? []), hookup])
+      }
+      return found
     },
 
     /** Keys of the unit that a saved hookup names. */
@@ -251,11 +166,13 @@ export const createUnitsRepository = (db: Knex) => {
       return row?.id ?? null
     },
 
-    async modelStands(modelId: number): Promise<boolean> {
-      return (
-        (await db('models').where({ id: modelId }).whereNull('deleted_at').first('id')) !==
-        undefined
-      )
+    /** The latest revision; null when the model was deleted. */
+    async modelRevision(modelId: number): Promise<number | null> {
+      const row = (await db('models')
+        .where({ id: modelId })
+        .whereNull('deleted_at')
+        .first('revision')) as { revision: number } | undefined
+      return row?.revision ?? null
     },
 
     /** The next number of the collection; its row is locked by the bump before. */
@@ -321,54 +238,6 @@ export const createUnitsRepository = (db: Knex) => {
         changed_by: at.by,
       })
       return changed === 1
-    },
-
-    async setFormStates(key: UnitKey, found: readonly FormFound[]): Promise<void> {
-      for (const f of found) {
-        const at = { ...keyColumns(key), jack_key: f.jack, port_key: f.port }
-        await db('unit_form_states').where(at).delete()
-        if (f.state !== 'untested') {
-          await db('unit_form_states').insert({ ...at, ...foundColumns(f) })
-        }
-      }
-    },
-
-    async setFunctionStates(key: UnitKey, found: readonly FunctionFound[]): Promise<void> {
-      for (const f of found) {
-        const at = { ...keyColumns(key), function_key: f.function }
-        await db('unit_function_states').where(at).delete()
-        if (f.state !== 'untested') {
-          await db('unit_function_states').insert({ ...at, ...foundColumns(f) })
-        }
-      }
-    },
-
-    async setModifications(key: UnitKey, wanted: readonly Modification[]): Promise<void> {
-      await db('unit_modifications').where(keyColumns(key)).delete()
-      await db('unit_added_parts').where(keyColumns(key)).delete()
-      if (wanted.length === 0) return
-      await db('unit_modifications').insert(
-        wanted.map((m, position) => ({
-          ...keyColumns(key),
-          position,
-          kind: m.kind,
-          document: JSON.stringify(m),
-        })),
-      )
-      const parts = wanted.flatMap(addedParts)
-      if (parts.length > 0) {
-        await db('unit_added_parts').insert(parts.map((p) => ({ ...keyColumns(key), ...p })))
-      }
-    },
-
-    async setStands(key: UnitKey, stands: Readonly<Record<string, string>>): Promise<void> {
-      await db('unit_stands').where(keyColumns(key)).delete()
-      const rows = Object.entries(stands).map(([control, position]) => ({
-        ...keyColumns(key),
-        control_key: control,
-        position,
-      }))
-      if (rows.length > 0) await db('unit_stands').insert(rows)
     },
   }
 }

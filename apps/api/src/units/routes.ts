@@ -17,6 +17,10 @@ export const unitRoutes = (units: UnitsService) =>
     changeUnitStates: ({ scope, params, version, body }) =>
       units.changeStates(scope, { uid: params.unit, version }, body),
 
+    changeStatesOfUnits: async ({ scope, body }) => ({
+      items: await units.changeStatesOfMany(scope, body),
+    }),
+
     changeUnitModifications: ({ scope, params, version, body }) =>
       units.changeModifications(scope, { uid: params.unit, version }, body),
 

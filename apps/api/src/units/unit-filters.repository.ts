@@ -118,7 +118,7 @@ const RESTRICTIONS: readonly Restriction[] = [
   [(f) => f.state, (db, query, f) => byState(db, query, f.state ?? '')],
   [(f) => f.present, (_, query) => void query.whereNotIn('units.holding', ['sold', 'gone'])],
   [(f) => f.placeIds, (_, query, f) => void query.whereIn('units.place_id', f.placeIds ?? [])],
-  [(f) => f.rfOut ?? f.rfOutFromMhz ?? f.rfOutToMhz, byRfOutput],
+  [(f) => [f.rfOut, f.rfOutFromMhz, f.rfOutToMhz].some((v) => v !== undefined), byRfOutput],
 ]
 
 /** Units of one collection under the filters of a list. */

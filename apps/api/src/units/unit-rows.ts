@@ -34,7 +34,6 @@ export interface UnitRow {
   readonly modelName: string
   readonly market: string
   readonly revision: number
-  readonly modelDeleted: boolean
   readonly neededByCount: number
 }
 
@@ -45,8 +44,6 @@ export interface Overlays {
   readonly modifications: readonly Modification[]
   readonly stands: Readonly<Record<string, string>>
 }
-
-export const NO_OVERLAYS: Overlays = { forms: [], functions: [], modifications: [], stands: {} }
 
 export interface NewUnitRow {
   readonly uid: string

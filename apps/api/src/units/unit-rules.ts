@@ -23,11 +23,15 @@ export const mustBeCountable = (type: 'device' | 'piece', quantity: number | und
 const repeated = (words: readonly string[], path: string): FieldTrouble[] =>
   words.flatMap((w, i) => (words.indexOf(w) < i ? [fault(`${path}.${i}`, 'given-twice')] : []))
 
-/** States may be noted only of jacks, ports and functions that the unit has. */
-export function statesMustFit(device: DeviceModel, change: StateChange): void {
+/** One request has one wish for each unit. */
+export const mustNameEachOnce = (uids: readonly string[]): void =>
+  refuse(repeated(uids, 'units').map((f) => ({ ...f, path: `${f.path}.unit` })))
+
+/** States may be noted only of jacks, ports and functions that the unit has; paths begin with `path`. */
+export function statesMustFit(device: DeviceModel, change: StateChange, path = ''): void {
   const forms = change.forms ?? []
   const functions = change.functions ?? []
-  refuse([
+  const faults = [
     ...repeated(
       forms.map((f) => `${f.jack} ${f.port}`),
       'forms',
@@ -48,7 +52,8 @@ export function statesMustFit(device: DeviceModel, change: StateChange): void {
         ? []
         : [fault(`functions.${i}.function`, 'unknown-function', f.function)],
     ),
-  ])
+  ]
+  refuse(faults.map((f) => ({ ...f, path: path + f.path })))
 }
 
 /** The device with what was added, and with what was bypassed still there. */

@@ -22,7 +22,7 @@ export const PROBLEMS = {
   'problem.model-in-use':
     'Nothing was changed: {units|# unit is|# units are} of this model. Delete them first, or keep the model.',
   'problem.part-in-use':
-    'Nothing was saved: what is marked is named by a noted state or a saved hookup. Keep it, or mark the [socket] as retired instead.',
+    'Nothing was saved: what is marked is needed by a noted state, a saved hookup or a part that was added to a unit. Keep it, or mark the [socket] as retired instead.',
   'problem.key-reused':
     'Nothing was saved: a key that was used before cannot come back for something else. Choose another key.',
   'problem.place-in-use':
@@ -40,7 +40,7 @@ export const PROBLEMS = {
   'problem.model-unsound':
     'The model was not saved: its description does not hold together. Put right what is marked.',
   'problem.unit-unsound':
-    'The unit was not changed: what was sent does not fit its model. Put right what is marked.',
+    'Nothing was saved: what was sent does not fit the unit and its model. Put right what is marked.',
   'problem.question-unsound':
     'This cannot be answered: it names something that is not on the shelf. Choose again what is marked.',
   'problem.unknown-reference':
@@ -59,7 +59,6 @@ export const PROBLEMS = {
     'The server took too long, and it is not known whether anything was saved. Wait a moment, look, then try again.',
   'problem.database-unavailable':
     'The database cannot be reached just now. What you typed is still here; try again in a few seconds.',
-  'problem.stopping': 'The server is being restarted. Try again in a few seconds.',
 
   'field.required': 'This is needed.',
   'field.unknown-field': 'There is no field of this name here: {name}.',
@@ -79,6 +78,8 @@ export const PROBLEMS = {
   'field.not-yours-to-change': 'Your part in this collection does not cover this field.',
   'field.unknown-reference': 'There is nothing of that kind in this collection.',
   'field.in-use': '{name} is named by a noted state or a saved hookup, so it has to stay.',
+  'field.clashes-with-fitting':
+    '{name} does not go together with what was added to a unit of this model.',
   'field.used-before': '{name} was the key of something else before. Choose another key.',
   'field.quantity-of-device':
     'Of a device there is one to a unit; only [leads] and small parts are counted.',
