@@ -3,6 +3,7 @@ import { channelsIn, type Channel } from '@coaxwain/signal'
 import { compileDrawer, type Drawer } from '../join/drawer'
 import { JoinTable } from '../join/join'
 import { MoveTable } from '../search/moves'
+import { StateGraph } from '../search/states'
 import { carriersOf } from './carriers'
 import { FaceTable } from './face'
 import { CoreTable } from './signal'
@@ -28,6 +29,8 @@ export interface Supply {
   readonly joins: JoinTable
   /** Moves into every box, whether or not it is left out of a question. */
   readonly moves: MoveTable
+  /** Where they lead to, for every question at once. */
+  readonly states: StateGraph
 }
 
 /** What of a shelf is there for one question. */
@@ -97,7 +100,8 @@ export class CompiledShelf {
     const joins = new JoinTable(drawer, new Set())
     const boxes = this.offerings.flatMap((o) => o.boxes)
     const moves = new MoveTable(joins, boxes, this.cores, () => false)
-    const made = { drawer, joins, moves }
+    const states = new StateGraph((face, core) => moves.of(face, core).best)
+    const made = { drawer, joins, moves, states }
     this.supplies.set(key, made)
     return made
   }

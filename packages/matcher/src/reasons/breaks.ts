@@ -37,7 +37,11 @@ export function breaksAt(way: Way, core: Core, ends: Ends): Obstacle[] {
   }
   const deflection = device.display?.deflection
   if (way.fn.kind === 'shows' && deflection) found.push(...deflectionBreaks(deflection, core, ends))
-  if (found.some((o) => o.code === 'line-rate')) return found
+  const isOutOfBand = (o: Obstacle): boolean => o.code === 'band'
+  if (found.some((o) => o.code === 'line-rate'))
+    return way.fn.tunedBy === undefined
+      ? found
+      : [...found, ...tunerBreaks(way, core, ends).filter(isOutOfBand)]
   if (way.fn.tunedBy !== undefined) return onceEach([...found, ...tunerBreaks(way, core, ends)])
   if (core.form !== way.into?.face.form) return found
   return onceEach([...found, ...rowBreaks(way, core, ends)])

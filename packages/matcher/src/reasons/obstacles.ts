@@ -1,12 +1,12 @@
 import { portOf } from '@coaxwain/models'
 import type { Obstacle } from '@coaxwain/shelf'
-import { fits, mates } from '@coaxwain/signal'
+import { familyOf, fits, isSingle, mates, type Connector } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
 import type { Way } from '../compile/way'
 import { PICTURE, type Join, type JoinTable } from '../join/join'
 import type { Expander } from '../search/expand'
 import type { Label } from '../search/label'
-import type { MovesFrom } from '../search/outlook'
+import type { MovesFrom } from '../search/states'
 import { breaksAt, gunBreaks, obstacle, type Ends } from './breaks'
 
 export interface ReasonTools {
@@ -63,12 +63,21 @@ export function obstaclesBetween(
     (a): a is Attempt => a !== null && a.broken.length > 0 && rulesOf(a).length <= MOST_BROKEN,
   )
   if (tools.best) return beside(broken, tools.best)
+  const gun = tools.lightGun ? gunSeesNothing(pictures, ends) : []
   if (broken.length === 0)
-    return distinct(pictures.flatMap((l) => ends.flatMap((e) => apart(l, e))))
-  const nearest = broken.sort(
+    return distinct([...gun, ...pictures.flatMap((l) => ends.flatMap((e) => apart(l, e)))])
+  const nearest = [...broken].sort(
     (a, b) => a.broken.length - b.broken.length || a.boxes - b.boxes || a.pieces - b.pieces,
   )
-  return distinct(harmFirst(nearest.flatMap((a) => a.broken))).slice(0, MOST_REASONS)
+  const found = harmFirst([...gun, ...nearest.flatMap((a) => a.broken)])
+  return distinct(found).slice(0, MOST_REASONS)
+}
+
+/** Without an answer a light gun has none either: whatever brings the picture here draws it anew. */
+const gunSeesNothing = (pictures: readonly Label[], ends: readonly Way[]): Obstacle[] => {
+  const [label] = pictures
+  const [end] = ends
+  return label && end ? [obstacle('light-gun', { ...endsOf(label.way, end) })] : []
 }
 
 /** What looks easier than the answer and is not. */
@@ -169,24 +178,44 @@ function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
 const leadBreaks = (label: Label, way: Way, join: Join | undefined): Obstacle[] =>
   join
     ? []
-    : [obstacle('no-lead', { ...endsOf(label.way, way), form: label.way.from?.face.form ?? '' })]
+    : way.into?.face.ports.some((p) => p.connector === 'whip')
+      ? [obstacle('whip-only', { ...endsOf(label.way, way) })]
+      : [obstacle('no-lead', { ...endsOf(label.way, way), form: label.way.from?.face.form ?? '' })]
 
-const misfits = (out: Face, into: Face, { joins }: ReasonTools): boolean =>
-  wrongWiring(out, into) || joins.wrongWires(out, into)
+const misfits = (out: Face, into: Face, tools: ReasonTools): boolean =>
+  wrongWiring(out, into) || wrongWires(out, into, tools)
+
+/** Wires that somebody might lay because the plugs fit: straight, or by a lead with the same plug at each end. */
+const wrongWires = (out: Face, into: Face, { joins, best }: ReasonTools): boolean =>
+  joins.wrongWires(out, into) ||
+  (best === null &&
+    out.ports.some(({ connector }) => {
+      const family = familyOf(connector)
+      return (
+        !isSingle(connector) &&
+        into.ports.some((b) => familyOf(b.connector) === family) &&
+        joins.drawer.owned.pieces.some(({ piece }) =>
+          [piece.a, piece.b].every((end) => end.length === 1 && isOf(end[0]?.connector, family)),
+        )
+      )
+    }))
+
+const isOf = (connector: Connector | undefined, family: string): boolean =>
+  connector !== undefined && familyOf(connector) === family
 
 /** What a plug that goes in and is wired differently inside does; null where there is none. */
 function wrongPlug(
   label: Label,
   way: Way,
   join: Join | undefined,
-  { joins }: ReasonTools,
+  tools: ReasonTools,
 ): Obstacle[] | null {
   const out = label.way.from!.face
   const into = way.into!.face
   const ends = endsOf(label.way, way)
   if (wrongWiring(out, into))
     return [obstacle('japanese-21-pin', { ...ends }, { harmful: true, lookalike: true })]
-  if (join || out.form === into.form || !joins.wrongWires(out, into)) return null
+  if (join || out.form === into.form || !wrongWires(out, into, tools)) return null
   const forms = { fromForm: out.form ?? '', toForm: into.form ?? '' }
   const wrong = obstacle('wrong-circuits', { ...ends, ...forms }, { lookalike: true })
   return [wrong, ...ratesAt(way, label, ends)]

@@ -25,11 +25,19 @@ export interface Move extends Cost {
   readonly stand: Condition
 }
 
-/** All moves from one state, and those of them that no other beats. */
-export interface Moves {
+/** Moves that lead to the same and can be told apart by their cost alone. */
+export interface MoveGroup {
   readonly all: readonly Move[]
+  /** Those that no other of them beats. */
   readonly best: readonly Move[]
-  readonly variants: ReadonlySet<string>
+}
+
+/** All moves from one state. */
+export interface Moves {
+  readonly groups: ReadonlyMap<string, MoveGroup>
+  readonly best: readonly Move[]
+  /** Which of the groups have a variant among their best. */
+  readonly bestOf: ReadonlyMap<string, readonly string[]>
 }
 
 /** What is worked out once per pair of numbers. */
@@ -55,7 +63,7 @@ interface Entrance {
   readonly takes: readonly (readonly Kin[])[]
 }
 
-function groupBy<K, T>(things: readonly T[], keyOf: (thing: T) => K): [T, ...T[]][] {
+function groupBy<K, T>(things: readonly T[], keyOf: (thing: T) => K): Map<K, [T, ...T[]]> {
   const groups = new Map<K, [T, ...T[]]>()
   for (const thing of things) {
     const key = keyOf(thing)
@@ -63,7 +71,7 @@ function groupBy<K, T>(things: readonly T[], keyOf: (thing: T) => K): [T, ...T[]
     if (group) group.push(thing)
     else groups.set(key, [thing])
   }
-  return [...groups.values()]
+  return groups
 }
 
 const kindOf = (place: Way['soundFrom']): string =>
@@ -85,13 +93,13 @@ const contentOf = (way: Way): string =>
 
 function entrancesOf(ways: readonly Way[], apart: (way: Way) => boolean): Entrance[] {
   const kinOf = (alike: readonly Way[]): Kin[] =>
-    groupBy(alike, (way) => (apart(way) ? way.id : contentOf(way))).map((kin) =>
+    [...groupBy(alike, (way) => (apart(way) ? way.id : contentOf(way))).values()].map((kin) =>
       kin.sort((a, b) => leastDoubt(a) - leastDoubt(b)),
     )
   const open = ways.filter((way) => way.into !== null)
-  return groupBy(open, (way) => way.into!.face).map((alike) => ({
-    face: alike[0].into!.face,
-    takes: groupBy(alike, (way) => way.takeId).map(kinOf),
+  return [...groupBy(open, (way) => way.into!.face)].map(([face, alike]) => ({
+    face,
+    takes: [...groupBy(alike, (way) => way.takeId).values()].map(kinOf),
   }))
 }
 
@@ -115,11 +123,8 @@ export class MoveTable {
   of(face: Face, core: Core): Moves {
     return this.known.get(face.id, core.id, () => {
       const all = this.entrances.flatMap((entrance) => this.into(entrance, face, core))
-      return {
-        all,
-        best: unbeaten(all, this.apart),
-        variants: new Set(all.flatMap((m) => m.kin.map((way) => way.variant.id))),
-      }
+      const groups = groupsOf(all, this.apart)
+      return { groups, best: [...groups.values()].flatMap((g) => g.best), bestOf: bestOf(groups) }
     })
   }
 
@@ -227,15 +232,32 @@ export function movedBy(move: Move, isLeftOut: (way: Way) => boolean): Move | nu
 }
 
 /** Of moves that lead to the same, those that no other beats on every cost. */
-export function unbeaten(moves: readonly Move[], apart: (way: Way) => boolean): Move[] {
-  const groups = new Map<string, Move[]>()
+export function unbeaten(moves: readonly Move[]): readonly Move[] {
+  let kept: Move[] = []
   for (const move of moves) {
-    const key = keyOf(move, apart(move.way) || move.join.scarce.size > 0)
-    const kept = groups.get(key)
-    if (!kept) groups.set(key, [move])
-    else if (!kept.some((k) => noWorseCost(k, move))) {
-      groups.set(key, [...kept.filter((k) => !noWorseCost(move, k)), move])
+    if (kept.some((k) => noWorseCost(k, move))) continue
+    kept = kept.filter((k) => !noWorseCost(move, k))
+    kept.push(move)
+  }
+  return kept
+}
+
+function groupsOf(
+  moves: readonly Move[],
+  apart: (way: Way) => boolean,
+): ReadonlyMap<string, MoveGroup> {
+  const groups = groupBy(moves, (move) => keyOf(move, apart(move.way) || move.join.scarce.size > 0))
+  return new Map([...groups].map(([key, all]) => [key, { all, best: unbeaten(all) }]))
+}
+
+function bestOf(groups: ReadonlyMap<string, MoveGroup>): ReadonlyMap<string, readonly string[]> {
+  const found = new Map<string, string[]>()
+  for (const [key, { best }] of groups) {
+    for (const id of new Set(best.map(({ way }) => way.variant.id))) {
+      const keys = found.get(id)
+      if (keys) keys.push(key)
+      else found.set(id, [key])
     }
   }
-  return [...groups.values()].flat()
+  return found
 }

@@ -1,11 +1,11 @@
-import { LIMITS } from '@coaxwain/shelf'
-import { FORM_MHZ, RF_SYSTEMS, SOUND_RANK, TIER, type PictureForm } from '@coaxwain/signal'
+import { FORM_MHZ, RF_SYSTEMS, SOUND_RANK, type PictureForm } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
 import type { Core } from '../compile/signal'
 import type { Way } from '../compile/way'
 import { fromLoudspeakers } from './measure'
 import type { Label } from './label'
 import type { Move } from './moves'
+import { tierInto, type MovesFrom, type State, type StateGraph, type Stride } from './states'
 
 /** What a chain still has to pay at least, and the best it can still become. */
 export interface Outlook {
@@ -19,19 +19,6 @@ export interface Outlook {
   readonly lumaMhz: number
   readonly sound: number
 }
-
-/** A picture at an output: all that decides where it can go. */
-interface State {
-  readonly face: Face
-  readonly core: Core
-  readonly ends: readonly Move[]
-  next: { readonly move: Move; readonly to: State }[]
-  /** The least that must have been bought to get here. */
-  bought: number
-  outlook: Outlook | null
-}
-
-export type MovesFrom = (face: Face, core: Core) => readonly Move[]
 
 /** Composite of the 625-line systems keeps 5 MHz (ITU-R BT.470). */
 const WIDEST_COMPOSITE_MHZ = 5
@@ -47,35 +34,34 @@ function mhzInto(way: Way): number {
   return widths.length === 0 ? Infinity : Math.max(...widths)
 }
 
-const tierInto = (move: Move): number =>
-  TIER[move.join.picture === 'luma-only' ? 'luma-only' : (move.way.into?.face.form ?? 'none')]
-
 const keyOf = (face: Face, core: Core): number => face.id * 65_536 + core.kind
+
+interface Seen {
+  readonly state: State
+  /** The best into the display from here; null where no lead goes there. */
+  readonly end: Outlook | null
+  outlook: Outlook | null
+  /** States that lead here, each by its stride. */
+  readonly before: { readonly seen: Seen; readonly stride: Stride }[]
+}
 
 /**
  * Explores every picture that can come about at all, costs aside, and spreads backwards from the display what
  * each still has to pay at least; every axis by itself, so that it never promises too little.
  */
 export class Outlooks {
-  private readonly states = new Map<string, State>()
+  private readonly seen = new Map<State, Seen>()
   private readonly byKind = new Map<number, Outlook>()
-  private edge: State[] = []
-  private depth = 0
 
   constructor(
-    starts: readonly Label[],
+    private readonly starts: readonly Label[],
     private readonly space: {
-      /** Moves into boxes. */
-      readonly moves: MovesFrom
+      readonly states: StateGraph
       /** Moves into the display. */
       readonly ends: MovesFrom
       readonly outsideSpeakers: boolean
-      /** Chains that need more than so many purchases are not followed. */
-      readonly mostBought: number
     },
-  ) {
-    for (const { way, sig } of starts) this.visit(way.from!.face, sig.core, 0)
-  }
+  ) {}
 
   /** Null where the display cannot be reached. */
   at(face: Face, core: Core): Outlook | null {
@@ -84,77 +70,55 @@ export class Outlooks {
 
   /** Explores in slices; ends with the outlooks known. */
   *explore(): Generator<void> {
-    while (this.edge.length > 0 && this.depth <= LIMITS.boxesInLeg) {
-      const layer = this.edge
-      this.edge = []
-      for (const state of layer) {
-        this.grow(state)
-        yield
+    const { states } = this.space
+    const waiting = this.starts.map(({ way, sig }) => this.see(states.at(way.from!.face, sig.core)))
+    const met = new Set(waiting)
+    for (const from of waiting) {
+      for (const stride of states.stridesFrom(from.state)) {
+        const to = this.see(stride.to)
+        to.before.push({ seen: from, stride })
+        if (met.has(to)) continue
+        met.add(to)
+        waiting.push(to)
       }
-      this.depth++
+      yield
     }
     this.spread()
   }
 
-  private visit(face: Face, core: Core, bought: number): State {
-    const key = `${face.id} ${core.id}`
-    const known = this.states.get(key)
-    if (known && known.bought <= bought) return known
-    const made = known ?? {
-      face,
-      core,
-      next: [],
-      ends: this.space.ends(face, core),
-      bought,
-      outlook: null,
-    }
-    made.bought = bought
-    this.states.set(key, made)
-    this.edge.push(made)
+  private see(state: State): Seen {
+    const known = this.seen.get(state)
+    if (known) return known
+    const end = this.space
+      .ends(state.face, state.core)
+      .map((move) => this.atEnd(move))
+      .reduce<Outlook | null>((all, one) => (all ? best(all, one) : one), null)
+    const made: Seen = { state, end, outlook: end, before: [] }
+    this.seen.set(state, made)
     return made
   }
 
-  private grow(state: State): void {
-    if (this.depth >= LIMITS.boxesInLeg) return
-    state.next = []
-    for (const move of this.space.moves(state.face, state.core)) {
-      const { leaving, way } = move
-      const bought = state.bought + move.bought
-      if (leaving && way.from && bought <= this.space.mostBought)
-        state.next.push({ move, to: this.visit(way.from.face, leaving.core, bought) })
-    }
-  }
-
   private spread(): void {
-    const states = [...this.states.values()].reverse()
-    for (let changed = true; changed;) {
-      changed = false
-      for (const state of states) {
-        const seen = this.look(state)
-        if (!seen || (state.outlook && same(seen, state.outlook))) continue
-        state.outlook = seen
-        changed = true
+    const all = [...this.seen.values()]
+    const waiting = all.filter((s) => s.end !== null)
+    const queued = new Set(waiting)
+    for (const at of waiting) {
+      queued.delete(at)
+      for (const { seen, stride } of at.before) {
+        const beyond = before(stride, at.outlook!)
+        const outlook = seen.outlook ? best(seen.outlook, beyond) : beyond
+        if (seen.outlook && same(seen.outlook, outlook)) continue
+        seen.outlook = outlook
+        if (queued.has(seen)) continue
+        queued.add(seen)
+        waiting.push(seen)
       }
     }
-    for (const { face, core, outlook } of states) {
-      const key = keyOf(face, core)
+    for (const { state, outlook } of all) {
+      const key = keyOf(state.face, state.core)
       const known = this.byKind.get(key)
       if (outlook) this.byKind.set(key, known ? best(known, outlook) : outlook)
     }
-  }
-
-  private look(state: State): Outlook | null {
-    let seen: Outlook | null = null
-    for (const move of state.ends) {
-      const end = this.atEnd(move)
-      seen = seen ? best(seen, end) : end
-    }
-    for (const { move, to } of state.next) {
-      if (!to.outlook) continue
-      const beyond = before(move, to.outlook)
-      seen = seen ? best(seen, beyond) : beyond
-    }
-    return seen
   }
 
   private atEnd(move: Move): Outlook {
@@ -176,14 +140,14 @@ export class Outlooks {
   }
 }
 
-const before = (move: Move, after: Outlook): Outlook => ({
+const before = (stride: Stride, after: Outlook): Outlook => ({
   units: after.units + 1,
-  boxes: after.boxes + move.boxes,
-  pieces: after.pieces + move.pieces,
-  doubt: after.doubt + move.doubt,
-  bought: after.bought + move.bought,
-  tier: Math.min(after.tier, TIER[move.leaving?.poorest ?? 'none'], tierInto(move)),
-  lumaMhz: Math.min(after.lumaMhz, move.leaving?.lumaMhz ?? 0),
+  boxes: after.boxes + stride.boxes,
+  pieces: after.pieces + stride.pieces,
+  doubt: after.doubt + stride.doubt,
+  bought: after.bought + stride.bought,
+  tier: Math.min(after.tier, stride.tier),
+  lumaMhz: Math.min(after.lumaMhz, stride.lumaMhz),
   sound: after.sound,
 })
 

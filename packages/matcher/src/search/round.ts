@@ -9,7 +9,7 @@ import { Expander } from './expand'
 import { Finisher } from './finish'
 import { waysIn, type Layout } from './layout'
 import { MoveTable, movedBy, unbeaten, type Move } from './moves'
-import type { MovesFrom } from './outlook'
+import type { MovesFrom } from './states'
 import type { SearchSpace } from './search'
 import { SoundRoutes } from './sound-route'
 
@@ -60,13 +60,13 @@ export function beginRound(
   const finisher = new Finisher({ demands, speakers, aerials, sounds, expander })
   const apart = (way: Way): boolean => aerials !== null || scarceUnits.has(way.variant.id)
   const special = aerials !== null || scarceUnits.size > 0 || joins.hasScarce
-  const table = new MoveTable(joins, boxes, cores, apart)
-  const moves: MovesFrom = special
-    ? (face, core) => table.of(face, core).best
+  const moves = special
+    ? bestOfTable(new MoveTable(joins, boxes, cores, apart))
     : withoutSome(layout.supply.moves, layout.present, joins, cores)
   const last = new MoveTable(joins, layout.ends, cores, () => false)
   const space = {
     starts: layout.labels,
+    states: layout.supply.states,
     moves,
     ends: (face: Face, core: Core) => last.of(face, core).best.filter((m) => finisher.canEnd(m)),
     joins,
@@ -79,6 +79,11 @@ export function beginRound(
   return { joins, moves, expander, space }
 }
 
+const bestOfTable =
+  (table: MoveTable): MovesFrom =>
+  (face, core) =>
+    table.of(face, core).best
+
 /** The moves of the whole shelf, but for the units that one question leaves out. */
 function withoutSome(
   shared: MoveTable,
@@ -86,26 +91,29 @@ function withoutSome(
   joins: JoinTable,
   cores: CoreTable,
 ): MovesFrom {
-  const table = new MoveTable(
-    joins,
-    own.flatMap((o) => o.boxes),
-    cores,
-    () => false,
-  )
-  const known = new Map<string, readonly Move[]>()
+  const remaining = own.flatMap((o) => o.boxes)
+  const table = new MoveTable(joins, remaining, cores, () => false)
+  const isTouched = (way: Way): boolean => touched.has(way.variant.id)
   const find = (face: Face, core: Core): readonly Move[] => {
-    const { all, best, variants } = shared.of(face, core)
-    const added = table.of(face, core).best
-    const hit = [...touched].some((id) => variants.has(id))
-    if (!hit && added.length === 0) return best
-    const isTouched = (way: Way): boolean => touched.has(way.variant.id)
-    const left = hit ? all.flatMap((m) => movedBy(m, isTouched) ?? []) : best
-    return unbeaten([...left, ...added], () => false)
+    const { groups, best, bestOf } = shared.of(face, core)
+    const hit = new Set([...touched].flatMap((id) => bestOf.get(id) ?? []))
+    // What is not among the best is beaten by one that stays.
+    if (hit.size === 0) return best
+    const instead = table.of(face, core).groups
+    return [...groups].flatMap(([key, group]) => {
+      if (!hit.has(key)) return group.best
+      const left = group.all.flatMap((m) => movedBy(m, isTouched) ?? [])
+      return unbeaten([...left, ...(instead.get(key)?.all ?? [])])
+    })
   }
+  const known = new Map<number, readonly Move[]>()
   return (face, core) => {
-    const key = `${face.id} ${core.id}`
+    const key = face.id * MOST_CORES + core.id
     const moves = known.get(key) ?? find(face, core)
     known.set(key, moves)
     return moves
   }
 }
+
+/** More kinds of pictures than any shelf brings about. */
+const MOST_CORES = 2 ** 24

@@ -8,12 +8,14 @@ import { Front } from './front'
 import { noWorseCost, plus, type Finished, type Label } from './label'
 import { bestScore } from './measure'
 import type { Move } from './moves'
-import { Outlooks, type MovesFrom, type Outlook } from './outlook'
+import { Outlooks, type Outlook } from './outlook'
 import { Queue } from './queue'
+import type { MovesFrom, StateGraph } from './states'
 import { wiringOf } from './wiring'
 
 export interface SearchSpace {
   readonly starts: readonly Label[]
+  readonly states: StateGraph
   /** Moves into boxes. */
   readonly moves: MovesFrom
   /** Moves into the display. */

@@ -17,7 +17,7 @@ const channels: Rule = (c) =>
     if (channel.onAir) return [caution('channel-on-air', { ...details, name: named(s) })]
     if (taken !== undefined) return [caution('channel-taken', { ...details, taken })]
     if (c.input.wiring.found.aerial?.together) return [caution('channel-stays-free', details)]
-    return other !== undefined && (isUnscreened(c) || movesTogether(c))
+    return other !== undefined && (isUnscreened(c) || isReceivedHere(c))
       ? [caution('channel-may-be-used', { ...details, other })]
       : []
   })
@@ -26,11 +26,19 @@ const channels: Rule = (c) =>
 const isUnscreened = (c: CautionInput): boolean =>
   (display(c).way.into?.face.ports ?? []).some((p) => p.ohm >= 300)
 
-/** Another unit with a carrier of its own stands on the way of the aerial: all of them move or none. */
-const movesTogether = (c: CautionInput): boolean =>
-  c.input.wiring.aerial.some((n) =>
-    n.way.variant.device.functions.some((f) => f.gives.some((g) => (g.rf ?? []).length > 0)),
-  )
+/** Stations come down the same lead, if only past a switch. */
+const isReceivedHere = (c: CautionInput): boolean =>
+  c.input.wiring.found.aerial !== null && c.input.offAir.some((o) => o.kind === 'analogue')
+
+/** Where FM radio is heard: 88 to 108 MHz (47 CFR 73.201). */
+const FM_MHZ = [88, 108] as const
+
+/** A carrier in the FM band shares it with strong stations. */
+const inFmBand: Rule = (c) =>
+  senders(c.stops)
+    .map((s) => s.sends!.channel)
+    .filter(({ visionMhz }) => visionMhz > FM_MHZ[0] && visionMhz < FM_MHZ[1])
+    .map((channel) => caution('in-fm-band', { channel: channel.name }))
 
 /** One of the channels on offer has neighbours and another has none. */
 const neighbours: Rule = (c) =>
@@ -157,6 +165,7 @@ const lookalikeRf: Rule = (c) =>
 /** What belongs to channels, bands and aerials. */
 export const CARRIERS: readonly Rule[] = [
   channels,
+  inFmBand,
   neighbours,
   sideband,
   idleCarriers,

@@ -1,4 +1,5 @@
 import {
+  jackOf,
   together,
   type AcceptRow,
   type Condition,
@@ -30,6 +31,12 @@ const decisive = (stop: PathStop, roles: readonly Switch['role'][]): Switch[] =>
     return wanted !== undefined && k.positions.some((p) => !wanted.in.includes(p.key))
   })
 
+/** How many positions do; where an automatic one does as well as the right one, nobody need be told. */
+const serving = (stop: PathStop, control: Switch): number =>
+  control.positions.filter((p) =>
+    stop.stand.some((c) => c.control === control.key && c.in.includes(p.key)),
+  ).length
+
 /** How a unit stands with one switch in a position that does not serve. */
 function turned(stop: PathStop, control: Switch): Condition[] {
   const wanted = stop.stand.find((c) => c.control === control.key)?.in ?? []
@@ -57,6 +64,7 @@ const ofDisplay: Rule = (c) => {
   const end = display(c)
   const { scan, colour, carrier } = end.sig.core
   return decisive(end, ['standard']).flatMap((control) => {
+    if (serving(end, control) > 1) return []
     const details = { name: named(end), control: control.label }
     const left = turned(end, control).map((stand) =>
       end.way.fn.accepts.filter((r) => together(r.while, stand) !== null),
@@ -85,10 +93,19 @@ const ofSource: Rule = (c) => {
   if (!facts || boxes(c).length > 0) return []
   return decisive(source(c), ['scan', 'standard', 'mode', 'other']).flatMap((control) => {
     const rows = turned(source(c), control).flatMap((stand) =>
-      (source(c).way.out?.picture ?? []).filter((r) => together(r.while, stand) !== null),
+      fromSocket(c).filter((r) => together(r.while, stand) !== null),
     )
     return rows.flatMap((row) => against(c, { control, row, deflection: facts.deflection }))
   })
+}
+
+/** All that the source can give by the socket that is used, in whatever form. */
+function fromSocket(c: CautionInput): PictureGive[] {
+  const { way, variant } = source(c)
+  const used = way.from?.ports ?? []
+  return way.fn.gives
+    .filter(({ jack }) => jackOf(variant.device, jack).contacts.some((x) => used.includes(x.port)))
+    .flatMap((g) => g.picture ?? [])
 }
 
 /** What only draws faster has a caution of its own: a progressive setting doubles the line rate. */
@@ -101,28 +118,34 @@ interface Turned {
 }
 
 function against(c: CautionInput, { control, row, deflection }: Turned): Caution[] {
-  if (row.scan === 'same') return []
-  const { lineKhz, fieldHz } = SCANS[row.scan]
+  const { scan, colour } = row
+  if (scan === 'same') return []
   const end = display(c)
   const details = { name: named(source(c)), control: control.label, set: named(end) }
-  if (!followsLine(deflection, row.scan)) {
-    const doubled = DOUBLED.includes(row.scan) && isTelevision(end.sig.core.scan)
+  const rolls = !followsField(deflection, scan)
+  // The two television rates differ by 0.7 %: what stops such a picture is its field rate.
+  const bothTelevision = isTelevision(scan) && isTelevision(end.sig.core.scan)
+  if (!followsLine(deflection, scan) && !(rolls && bothTelevision))
     return [
-      doubled
+      isDoubled(c, scan)
         ? caution('scan-too-fast', { name: details.name, control: control.label })
-        : caution('other-lines', { ...details, khz: lineKhz }),
+        : caution('other-lines', { ...details, khz: SCANS[scan].lineKhz }),
     ]
-  }
-  const rows = end.way.fn.accepts.filter((r) => listsScan(r, row.scan as ScanId))
+  const rows = end.way.fn.accepts.filter((r) => listsScan(r, scan))
+  const grey = colour !== 'same' && rows.length > 0 && !decodes(rows, colour)
   return [
-    ...(followsField(deflection, row.scan)
-      ? []
-      : [caution('other-fields', { ...details, hz: Math.round(fieldHz) })]),
-    ...(row.colour === 'same' || rows.length === 0 || decodes(rows, row.colour)
-      ? []
-      : [caution('other-colour', details)]),
+    ...(rolls
+      ? [caution('other-fields', { ...details, hz: Math.round(SCANS[scan].fieldHz) })]
+      : []),
+    ...(grey ? [caution('other-colour', details)] : []),
   ]
 }
+
+/** The progressive setting of a player. */
+const isDoubled = (c: CautionInput, scan: ScanId): boolean =>
+  source(c).variant.device.kind !== 'computer' &&
+  DOUBLED.includes(scan) &&
+  isTelevision(display(c).sig.core.scan)
 
 /** Ordinary television lines, 15.6 to 15.75 kHz. */
 const isTelevision = (scan: ScanId): boolean => SCANS[scan].lineKhz < 15.75

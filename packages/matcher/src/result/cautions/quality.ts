@@ -56,15 +56,14 @@ const wide: Rule = (c) =>
 
 const FEW_LINES: readonly ScanId[] = ['262p60', '312p50']
 
+/** Forms of sets that may be digital inside. */
+const isFine = (form: string): boolean => ['component', 'hdmi', 'dvi', 'rgbhv'].includes(form)
+
 /** Pictures of 262 or 312 lines are not what a flat set or a converter expects (common practice, no source). */
 const fewLines: Rule = (c) => {
   const flat = display(c).variant.device.display?.screen === 'flat'
   const turned = boxes(c).some(
-    (s) =>
-      s.way.in !== null &&
-      s.way.into?.face.form !== s.way.from?.face.form &&
-      s.sig.core.form !== 'rf' &&
-      s.way.into?.face.form !== 'rf',
+    (s) => isFine(s.sig.core.form) && s.way.into?.face.form !== s.sig.core.form,
   )
   const { way, stand } = source(c)
   const few = (way.out?.picture ?? []).some(
@@ -75,13 +74,17 @@ const fewLines: Rule = (c) => {
 
 /** Games answer to the hand: delay and lines matter. */
 const isGame = (c: CautionInput): boolean =>
+  isPlayed(c) && source(c).variant.device.kind !== 'computer'
+
+const isPlayed = (c: CautionInput): boolean =>
   ['console', 'computer'].includes(source(c).variant.device.kind) ||
   FEW_LINES.includes(source(c).sig.core.scan)
 
 const delay: Rule = (c) => {
   const facts = display(c).variant.device.display
-  const late = facts?.screen === 'flat' || facts?.storesFields === true || !display(c).sig.direct
-  return late && isGame(c) ? [caution('delay')] : []
+  const slow = facts?.screen === 'flat' || facts?.storesFields === true
+  const late = (slow && isPlayed(c)) || (!display(c).sig.direct && isGame(c))
+  return late ? [caution('delay')] : []
 }
 
 /** A converter that makes interlaced pictures makes no true 240-line ones. */

@@ -1,5 +1,5 @@
 import { portOf, type DeviceModel, type Port } from '@coaxwain/models'
-import type { Unit } from '@coaxwain/shelf'
+import type { Caution, Unit } from '@coaxwain/shelf'
 import { familyOf, isSingle, mates, type Connector } from '@coaxwain/signal'
 import type { Variant } from '../../compile/variant'
 import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
@@ -17,16 +17,16 @@ const present = ({ input: { frame } }: CautionInput): readonly Variant[] => [
 ]
 
 /** Sockets recorded as dead on whatever takes part or might: named, so that nobody tries them. */
-const dead: Rule = (c) =>
-  present(c)
-    .flatMap(({ device, units }) =>
-      units.flatMap((unit) =>
-        deadPorts(unit, device).map((p) =>
-          caution('socket-dead', { name: device.name, port: p.label }),
-        ),
-      ),
-    )
-    .slice(0, MOST_DEAD)
+function dead(c: CautionInput): Caution[] {
+  const found: Caution[] = []
+  for (const { device, units } of present(c)) {
+    for (const port of units.flatMap((unit) => deadPorts(unit, device))) {
+      found.push(caution('socket-dead', { name: device.name, port: port.label }))
+      if (found.length >= MOST_DEAD) return found
+    }
+  }
+  return found
+}
 
 const usedPorts = (
   c: CautionInput,
@@ -61,7 +61,8 @@ const samePlug = (a: Connector, b: Connector): boolean =>
 const channelSocket: Rule = (c) => {
   const { device } = source(c).variant
   const set = display(c).variant.device
-  const channels = device.ports.filter((p) => carries(p, 'rf', 'out'))
+  const used = source(c).way.from?.ports ?? []
+  const channels = device.ports.filter((p) => carries(p, 'rf', 'out') && used.includes(p.key))
   const [first] = channels.flatMap((port) =>
     set.ports
       .filter((p) => carries(p, 'cvbs', 'in') && samePlug(p.connector, port.connector))

@@ -1,0 +1,133 @@
+import { LIMITS, type Hookup, type Question } from '@coaxwain/shelf'
+import { TIER } from '@coaxwain/signal'
+import type { Face } from './compile/face'
+import type { CompiledShelf } from './compile/shelf'
+import type { Core } from './compile/signal'
+import { buildHookup } from './result/build'
+import { assign } from './search/assign'
+import type { Finished, Label } from './search/label'
+import { layOut, type Layout } from './search/layout'
+import type { Move } from './search/moves'
+import { beginRound } from './search/round'
+import type { SearchSpace } from './search/search'
+import { wiringOf } from './search/wiring'
+
+/** One step of a picture between two nodes, with all that it costs. */
+export interface Arc {
+  readonly from: number
+  readonly to: number
+  readonly boxes: number
+  readonly pieces: number
+  readonly doubt: number
+  /** By how much the form on this step is below the best there is. */
+  readonly tiersBelow: number
+}
+
+/** Everything that the search of one question can walk over, as a plain graph. */
+export interface ArcMap {
+  /** Node 0 is the source, node 1 the display. */
+  readonly nodes: number
+  readonly arcs: readonly Arc[]
+  /** The hookup along a path of arcs, by their numbers; null where it lacks a unit, a piece or a position. */
+  hookup(path: readonly number[]): Hookup | null
+}
+
+export const START = 0
+export const DISPLAY = 1
+
+const HIGHEST = Math.max(...Object.values(TIER))
+
+/**
+ * The compiled arcs that a question can reach, for comparing other searches with ours over the same facts.
+ * Throws when the question names a unit that is not on the shelf, or a lead.
+ */
+export function arcsOf(shelf: CompiledShelf, question: Question): ArcMap {
+  for (const _ of shelf.compile());
+  return new Explored(shelf, question)
+}
+
+interface State {
+  readonly node: number
+  readonly face: Face
+  readonly core: Core
+}
+
+class Explored implements ArcMap {
+  readonly arcs: Arc[] = []
+  private readonly moves: (Move | null)[] = []
+  private readonly states = new Map<string, State>()
+  private readonly layout: Layout
+  private readonly space: Omit<SearchSpace, 'budget'>
+
+  constructor(
+    shelf: CompiledShelf,
+    private readonly question: Question,
+  ) {
+    this.layout = layOut(shelf, question)
+    const none = { units: new Set<string>(), pieces: new Set<number>() }
+    this.space = beginRound(shelf, question, this.layout, none).space
+    let edge = this.space.starts.flatMap(({ way, sig }) =>
+      this.put(START, way.from!.face, sig.core, null),
+    )
+    for (let depth = 0; edge.length > 0; depth++)
+      edge = edge.flatMap((state) => this.grow(state, depth < LIMITS.boxesInLeg))
+  }
+
+  get nodes(): number {
+    return this.states.size + 2
+  }
+
+  private grow({ node, face, core }: State, further: boolean): State[] {
+    for (const move of this.space.ends(face, core)) this.add(node, DISPLAY, move)
+    const moves = further ? this.space.moves(face, core) : []
+    return moves.flatMap((move) => {
+      const { leaving, way } = move
+      return leaving && way.from ? this.put(node, way.from.face, leaving.core, move) : []
+    })
+  }
+
+  /** An arc into a state, which is given back when it is new. */
+  private put(from: number, face: Face, core: Core, move: Move | null): State[] {
+    const key = stateKey(face, core)
+    const known = this.states.get(key)
+    const state = known ?? { node: this.nodes, face, core }
+    this.states.set(key, state)
+    this.add(from, state.node, move)
+    return known ? [] : [state]
+  }
+
+  private add(from: number, to: number, move: Move | null): void {
+    const { boxes, pieces, doubt } = move ?? { boxes: 0, pieces: 0, doubt: 0 }
+    const tiersBelow = move ? HIGHEST - TIER[move.way.into?.face.form ?? 'none'] : 0
+    this.arcs.push({ from, to, boxes, pieces, doubt, tiersBelow })
+    this.moves.push(move)
+  }
+
+  hookup(path: readonly number[]): Hookup | null {
+    const found = this.follow(path)
+    if (!found) return null
+    const wiring = wiringOf(found)
+    const { frame } = this.layout
+    const stockOf = (piece: number): number => frame.drawer.pieces[piece]?.stock ?? 0
+    const result = assign(wiring, stockOf, new Set())
+    if (!('unitOf' in result)) return null
+    return buildHookup({ wiring, unitOf: result.unitOf, frame, offAir: this.question.offAir })
+  }
+
+  private follow(path: readonly number[]): Finished | null {
+    const { starts, expander, finisher } = this.space
+    const begin = this.arcs[path[0]!]!.to
+    const moves = path.slice(1).map((n) => this.moves[n]!)
+    let labels: readonly Label[] = starts.filter(
+      ({ way, sig }) => this.states.get(stateKey(way.from!.face, sig.core))!.node === begin,
+    )
+    for (const move of moves.slice(0, -1))
+      labels = labels.flatMap((label) =>
+        expander.entries(label, move).flatMap((entry) => expander.leave(label, move, entry)),
+      )
+    const last = moves.at(-1)!
+    return labels.flatMap((label) => finisher.finish(label, last, () => true))[0] ?? null
+  }
+}
+
+const stateKey = (face: Face, core: Core): string => `${face.id} ${core.id}`
