@@ -175,6 +175,7 @@ describe('the drawing', () => {
   it('says no more than the list: every join and setting of it is a step', async () => {
     const visitor = await open('desk', EXAMPLE_ANSWER)
     const { page } = visitor
+    await page.locator('.drawing-scroll .step-number').first().waitFor()
     const drawn = await page
       .locator('.drawing-scroll .step-number text')
       .evaluateAll((texts) =>

@@ -165,7 +165,7 @@ const STATES: readonly State[] = [
     name: 'all answers side by side',
     size: 'desk',
     page: PAGES['answer'] ?? '',
-    reach: (page) => click(page, 'more answer'),
+    reach: (page) => click(page, 'answers'),
   },
 ]
 

@@ -2,6 +2,8 @@ import { format, type Details } from './format'
 import type { Locale } from './locale'
 import { APP } from './messages/app'
 import { ASK } from './messages/ask'
+import { CAUTIONS } from './messages/cautions'
+import { CHECK } from './messages/check'
 import { GENERAL } from './messages/general'
 import { HOOKUP, OBSTACLES, PURCHASES } from './messages/hookup'
 import { MODELS } from './messages/models'
@@ -18,6 +20,8 @@ export const MESSAGES = {
   ...APP,
   ...ASK,
   ...HOOKUP,
+  ...CAUTIONS,
+  ...CHECK,
   ...OBSTACLES,
   ...PURCHASES,
   ...MODELS,

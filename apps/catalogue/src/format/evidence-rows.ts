@@ -1,6 +1,7 @@
 import type { UnitDetail } from '@coaxwain/contract'
 import type { DeviceModel } from '@coaxwain/models'
 import { worst, type Evidence, type TestState } from '@coaxwain/shelf'
+import { formTitles } from './form-titles'
 import type { Speak } from './words'
 
 /** A form of a unit, or one of its functions, with what is known of it. */
@@ -33,14 +34,14 @@ const newest = (records: readonly Evidence[]): Evidence | null =>
 /** A row for every form, in the order of the model. Its state is the worst of its sockets that were tried. */
 export function formRows(device: DeviceModel, unit: States, say: Speak): EvidenceRow[] {
   const ways = new Set(device.jacks.map((j) => j.dir))
+  const titles = formTitles(device, say)
   return device.jacks.map((jack): EvidenceRow => {
     const ports = [...new Set(jack.contacts.map((c) => c.port))]
     const records = unit.forms.filter((f) => f.jack === jack.key && ports.includes(f.port))
     const tried = ports.map(
       (p) => records.find((r) => r.port === p)?.state ?? ('untested' as const),
     )
-    const plain = say(`form.${jack.form}`)
-    const form = jack.label ? say('unit.form-label', { form: plain, label: jack.label }) : plain
+    const form = titles.get(jack.key) ?? jack.form
     return {
       key: `form ${jack.key}`,
       title: ways.size > 1 ? say(`unit.form-${jack.dir}`, { form }) : form,

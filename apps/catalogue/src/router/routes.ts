@@ -1,3 +1,4 @@
+import type { Right } from '@coaxwain/contract'
 import type { MessageCode } from '@coaxwain/wording'
 import type { RouteRecordRaw } from 'vue-router'
 import { PAGES } from './names'
@@ -10,6 +11,8 @@ declare module 'vue-router' {
     place?: 'hookups' | 'shelf' | 'models'
     /** May be seen without being signed in. */
     open?: boolean
+    /** A form that only this right can save: others are told so before they fill it in. */
+    needs?: Right
   }
 }
 
@@ -44,7 +47,7 @@ const inCollection: RouteRecordRaw[] = [
     path: 'shelf/add',
     name: PAGES.addUnit,
     component: () => import('../views/UnitFormView.vue'),
-    meta: { title: 'page.add-unit', place: 'shelf' },
+    meta: { title: 'page.add-unit', place: 'shelf', needs: 'shelf.write' },
   },
   {
     path: `shelf/:unit(${UID})`,
@@ -56,7 +59,7 @@ const inCollection: RouteRecordRaw[] = [
     path: `shelf/:unit(${UID})/edit`,
     name: PAGES.editUnit,
     component: () => import('../views/UnitFormView.vue'),
-    meta: { title: 'page.edit-unit', place: 'shelf' },
+    meta: { title: 'page.edit-unit', place: 'shelf', needs: 'shelf.hold' },
   },
   {
     path: 'models',
@@ -68,7 +71,7 @@ const inCollection: RouteRecordRaw[] = [
     path: 'models/add',
     name: PAGES.addModel,
     component: () => import('../views/ModelFormView.vue'),
-    meta: { title: 'page.add-model', place: 'models' },
+    meta: { title: 'page.add-model', place: 'models', needs: 'models.write' },
   },
   {
     path: `models/:model(${UID})`,
@@ -80,7 +83,7 @@ const inCollection: RouteRecordRaw[] = [
     path: `models/:model(${UID})/edit`,
     name: PAGES.editModel,
     component: () => import('../views/ModelFormView.vue'),
-    meta: { title: 'page.edit-model', place: 'models' },
+    meta: { title: 'page.edit-model', place: 'models', needs: 'models.write' },
   },
 ]
 

@@ -6,26 +6,37 @@ import { shallowRef } from 'vue'
 import { call } from '../api/client'
 import type { Failure } from '../api/failure'
 import { createUid } from '../api/uid'
+import { useSnapshot } from './snapshot'
+
+const MOST_ANSWERS = 24
 
 /** Answers that were asked for, and hookups that were kept. */
 export const useHookups = defineStore('hookups', () => {
   const saved = shallowRef<readonly HookupSummary[]>([])
   const savedTotal = shallowRef(0)
   const next = shallowRef<string | null>(null)
-  const last = shallowRef<{ key: string; reply: AnswerReply } | null>(null)
+  const snapshot = useSnapshot()
+  /** Answers that still hold for the shelf as it is known here, the newest last. */
+  const answers = new Map<string, AnswerReply>()
 
-  /** The same question about the same shelf is not asked twice in a row. */
+  /** The same question about the same shelf is not asked again, unless the search was cut short. */
   async function ask(
     collection: string,
     question: Question,
-    shelfVersion: number,
+    signal?: AbortSignal,
   ): Promise<Result<AnswerReply, Failure>> {
     const key = JSON.stringify([collection, question])
-    const known = last.value
-    if (known?.key === key && known.reply.shelfVersion === shelfVersion) return ok(known.reply)
-    const reply = await call('ask', { params: { collection }, body: { question } })
+    const known = answers.get(key)
+    if (known && snapshot.isAt(known)) return ok(known)
+    const reply = await call('ask', { params: { collection }, body: { question }, signal })
     if (!reply.ok) return err(reply.problem)
-    last.value = { key, reply: reply.value }
+    answers.delete(key)
+    if (!reply.value.answer.complete) return ok(reply.value)
+    answers.set(key, reply.value)
+    for (const oldest of answers.keys()) {
+      if (answers.size <= MOST_ANSWERS) break
+      answers.delete(oldest)
+    }
     return ok(reply.value)
   }
 

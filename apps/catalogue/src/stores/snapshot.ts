@@ -36,6 +36,11 @@ export const useSnapshot = defineStore('snapshot', () => {
     return reply
   }
 
+  /** Whether an answer was worked out on the very shelf that is held here. */
+  const isAt = (versions: Pick<Snapshot, 'shelfVersion' | 'catalogueVersion'>): boolean =>
+    versions.shelfVersion === snapshot.value.shelfVersion &&
+    versions.catalogueVersion === snapshot.value.catalogueVersion
+
   /** Loads unless this collection is here already. */
   const ensure = async (collection: string): Promise<Result<void, Failure>> =>
     of.value === collection ? ok(undefined) : load(collection)
@@ -45,5 +50,5 @@ export const useSnapshot = defineStore('snapshot', () => {
     of.value = null
   }
 
-  return { snapshot, lookup, ready, failure, load, ensure, markStale }
+  return { snapshot, lookup, ready, failure, isAt, load, ensure, markStale }
 })

@@ -1,5 +1,6 @@
 import type {
   BodyOf,
+  ManyStateChanges,
   NewUnit,
   Place,
   QueryOf,
@@ -20,6 +21,9 @@ import { useSnapshot } from './snapshot'
 export type UnitFilters = QueryOf<'listUnits'>
 
 const PAGE = '60'
+const NUMBERS_PAGE = '200'
+/** A larger shelf shows its units without numbers from there on. */
+const MOST_NUMBER_PAGES = 10
 
 /** The units of a collection: the list under the filters of the address, and one unit in full. */
 export const useUnits = defineStore('units', () => {
@@ -27,8 +31,11 @@ export const useUnits = defineStore('units', () => {
   const next = shallowRef<string | null>(null)
   const total = ref(0)
   const places = shallowRef<readonly Place[]>([])
+  const numbers = shallowRef<ReadonlyMap<string, number>>(new Map())
   const snapshot = useSnapshot()
   let asked = 0
+  /** The shelf, in the state in which its units were last numbered. */
+  let numbered = ''
 
   /** Only the newest of several running lists is shown. */
   async function list(
@@ -48,6 +55,34 @@ export const useUnits = defineStore('units', () => {
     total.value = reply.value.total
     return ok(undefined)
   }
+
+  /** The numbers by which two units of a model are told apart: asked once for each state of the shelf. */
+  async function ensureNumbers(collection: string): Promise<Result<void, Failure>> {
+    const state = `${collection} ${snapshot.snapshot.shelfVersion}`
+    if (numbered === state) return ok(undefined)
+    numbered = state
+    const found = new Map<string, number>()
+    let cursor: string | null = null
+    for (let i = 0; i < MOST_NUMBER_PAGES; i++) {
+      const reply: Awaited<ReturnType<typeof numbersPage>> = await numbersPage(collection, cursor)
+      if (numbered !== state) return ok(undefined)
+      if (!reply.ok) {
+        numbered = ''
+        return err(reply.problem)
+      }
+      for (const { uid, number } of reply.value.items) found.set(uid, number)
+      cursor = reply.value.next
+      if (cursor === null) break
+    }
+    numbers.value = found
+    return ok(undefined)
+  }
+
+  const numbersPage = (collection: string, cursor: string | null) =>
+    call('listUnits', {
+      params: { collection },
+      query: { type: 'device', limit: NUMBERS_PAGE, ...(cursor ? { cursor } : {}) },
+    })
 
   async function loadPlaces(collection: string): Promise<Result<void, Failure>> {
     const reply = await call('listPlaces', { params: { collection } })
@@ -94,23 +129,32 @@ export const useUnits = defineStore('units', () => {
   ): Promise<Result<UnitDetail, Failure>> =>
     written(call('changeUnitStates', { params: { collection, unit: uid }, body, version }))
 
-  /** Marks everything that a hookup used as working; stops at the first unit that refuses. */
+  /** Marks everything that a hookup used as working, on all of its units or on none. */
   async function noteWorked(
     collection: string,
     used: readonly UsedParts[],
     evidence: { readonly on: string; readonly how: string },
   ): Promise<Result<void, Failure>> {
+    const now = await Promise.all(used.map(({ unit }) => read(collection, unit)))
     const state = 'works' as const
-    for (const { unit, forms, functions } of used) {
-      const now = await read(collection, unit)
-      if (!now.ok) return err(now.problem)
-      const noted = await changeStates(collection, now.value, {
-        forms: forms.map((f) => ({ ...f, state, ...evidence })),
-        functions: functions.map((key) => ({ function: key, state, ...evidence })),
+    const units: ManyStateChanges['units'] = []
+    for (const [i, { unit, forms, functions }] of used.entries()) {
+      const reply = now[i]
+      if (!reply) continue
+      if (!reply.ok) return err(reply.problem)
+      units.push({
+        unit,
+        version: reply.value.version,
+        changes: {
+          forms: forms.map((f) => ({ ...f, state, ...evidence })),
+          functions: functions.map((key) => ({ function: key, state, ...evidence })),
+        },
       })
-      if (!noted.ok) return err(noted.problem)
     }
-    return ok(undefined)
+    const noted = await written(
+      call('changeStatesOfUnits', { params: { collection }, body: { units } }),
+    )
+    return noted.ok ? ok(undefined) : err(noted.problem)
   }
 
   const changeStands = (
@@ -141,7 +185,9 @@ export const useUnits = defineStore('units', () => {
     next,
     total,
     places,
+    numbers,
     list,
+    ensureNumbers,
     loadPlaces,
     createPlace,
     read,

@@ -7,7 +7,6 @@ export const APP = {
   'app.main-places': 'Places',
   'app.more': 'More',
   'app.back': 'Back',
-  'app.close': 'Close',
   'app.cancel': 'Cancel',
   'app.delete': 'Delete',
   'app.edit': 'Edit',
@@ -21,8 +20,7 @@ export const APP = {
   'app.try-again': 'Try again',
   'app.required': 'needed',
   'app.needed-note': 'Fields marked with a star are needed.',
-  'app.yes': 'yes',
-  'app.no': 'no',
+  'app.stop': 'Stop',
 
   'place.hookups': 'Hookups',
   'place.shelf': 'Shelf',
@@ -37,7 +35,6 @@ export const APP = {
   'rail.signed-in-as': 'Signed in as {name}',
   'rail.search': 'Search',
   'rail.search-model': 'model: {kind}',
-  'rail.search-label': 'Search units and models',
   'saving.saved': 'all saved',
   'saving.saving': 'saving ...',
   'saving.not-saved': 'not saved',
@@ -61,12 +58,10 @@ export const APP = {
 
   'sign-in.email': 'E-mail address',
   'sign-in.pass-phrase': 'Pass phrase',
-  'sign-in.show': 'Show the pass phrase',
   'sign-in.enter': 'Sign in',
   'sign-in.demo': 'People of the demonstration',
   'sign-in.demo-explains':
     'Choose one to fill in the address. The pass phrases were printed in the terminal when the demonstration started.',
-  'sign-in.demo-person': '{name}, {role} of {collection}',
   'sign-in.again': 'You were signed out. What you typed is kept: sign in to go on.',
 
   'role.owner': 'owner',
@@ -90,9 +85,15 @@ export const APP = {
   'not-found.home': 'Go to hookups',
   'no-collection.explains':
     'You are signed in, but no collection has taken you in yet. Ask its owner to invite you.',
+  'no-right.title': 'You can look, but not change',
+  'no-right.explains':
+    'This page is a form. In {collection} your role is {role:role}; saving it takes one of these roles: {role:roles}.',
+  'no-right.ask': 'An owner of the collection can give you another role.',
+  'no-right.look.hookups': 'Go to the hookups',
+  'no-right.look.shelf': 'Look at the shelf',
+  'no-right.look.models': 'Look at the models',
   'draft.restored': 'What you had typed before has been put back.',
   'draft.discard': 'Start afresh',
-  'draft.leave': 'What you typed is kept on this device until you save or start afresh.',
   'help.keyboard': 'Keys',
   'help.keyboard-search': '/ goes to the search box.',
   'help.marks': '[Sockets]',

@@ -242,6 +242,8 @@ export const OBSTACLES = {
     'The remote of the {to} is missing, and nobody has noted where {control} stands. Look on its screen and note it on the unit’s page.',
   'obstacle.no-lead':
     'Both have a fitting output and input, but no [lead] at hand joins the {from} to the {to}.',
+  'obstacle.whip-only':
+    'The {to} has a whip and no [socket]: nothing can be plugged in there, and to send the {from} to it through the air is not allowed.',
   'obstacle.no-common-form':
     'The {from} and the {to} have no form of picture in common, and nothing at hand turns one into the other.',
 } as const

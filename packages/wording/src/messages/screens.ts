@@ -9,6 +9,7 @@ export const SCREENS = {
   'drawing.unit': '{kind}; {place}',
   'drawing.leaves-as': 'leaves as',
   'drawing.shows': 'shows',
+  'drawing.sounds': 'sounds',
   'drawing.by-eye': 'by eye',
   'drawing.up': 'up',
   'drawing.down': 'down',
@@ -24,6 +25,7 @@ export const SCREENS = {
   'carried.sound.mono': 'sound in one',
   'carried.sound.half': 'one sound channel of two',
   'carried.sound.none': 'no sound',
+  'carried.sound-elsewhere': '{picture}; the sound comes from the {name}',
   'carried.in-colour': '[colour]',
   'carried.in-grey': 'black and white',
 
@@ -47,4 +49,9 @@ export const SCREENS = {
   'heard.mono': 'one loudspeaker',
   'heard.half': 'one channel of two',
   'heard.none': 'silence',
+
+  'sheet.do': 'Do this, in order',
+  'sheet.collection': 'collection',
+  'sheet.printed': 'printed',
+  'sheet.tested': 'tested',
 } as const

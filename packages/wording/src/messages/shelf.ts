@@ -19,6 +19,7 @@ export const SHELF = {
 
   'badge.worst': '{count} {state}',
   'badge.tried': '{tried} of {of} tried',
+  'badge.line': '{worst}, {tried}',
 
   'filter.set': '{name}: {value}',
   'filter.clear': 'Clear {name}',
@@ -61,12 +62,8 @@ export const SHELF = {
   'unit.quantity': 'How many',
   'unit.panel': 'Panel',
   'unit.gives': 'What each [socket] gives',
-  'unit.takes': 'takes {form}',
-  'unit.puts-out': 'gives {form}',
   'unit.does': 'What it does',
   'unit.no-record': 'no record yet',
-  'unit.evidence': '{date}, {how}',
-  'unit.by': '{evidence}, {name}',
   'unit.stands': 'As it stands now',
   'unit.stands-unknown': 'not noted',
   'unit.stands-change': 'Note where the controls stand',
@@ -93,7 +90,6 @@ export const SHELF = {
   'unit.needed-by': 'Needed by',
   'unit.needed-more': 'and {count} more',
   'unit.test-next': 'Test the next [socket]',
-  'unit.all-tested': 'Everything was tried',
   'unit.set-state': 'Set the state of {what}',
   'unit.form-label': '{form}, {label}',
   'unit.form-in': '{form}, in',

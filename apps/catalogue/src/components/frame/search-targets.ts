@@ -1,5 +1,6 @@
-import type { Snapshot } from '@coaxwain/shelf'
-import { fullName } from '../../format/lookup'
+import type { Snapshot, Uid } from '@coaxwain/shelf'
+import { fullName, type Lookup } from '../../format/lookup'
+import { optionLine } from '../../format/option-line'
 import type { Searchable } from '../../format/search'
 import type { Speak } from '../../format/words'
 import { PAGES, type PageName } from '../../router/names'
@@ -14,7 +15,12 @@ export interface SearchTarget extends Searchable {
 }
 
 /** Units first, with their places, then the models. */
-export function searchTargets(snapshot: Snapshot, say: Speak): SearchTarget[] {
+export function searchTargets(
+  snapshot: Snapshot,
+  lookup: Lookup,
+  numbers: ReadonlyMap<Uid, number>,
+  say: Speak,
+): SearchTarget[] {
   const units = snapshot.units.flatMap((unit): SearchTarget[] => {
     const model = snapshot.models[unit.model]
     if (!model) return []
@@ -23,7 +29,12 @@ export function searchTargets(snapshot: Snapshot, say: Speak): SearchTarget[] {
       {
         value: unit.uid,
         label: fullName(model),
-        note: unit.place === null ? kind : say('drawing.unit', { kind, place: unit.place }),
+        note: optionLine(
+          unit,
+          kind,
+          { device: lookup.device(unit.uid), number: numbers.get(unit.uid) },
+          say,
+        ),
         maker: model.maker,
         name: model.name,
         aliases: model.aliases,

@@ -1,5 +1,5 @@
 import type { Answer, Hookup, Question, TestState } from '@coaxwain/shelf'
-import { doubtsOf } from '../../format/doubts'
+import { doubtsOf, doubtWords } from '../../format/doubts'
 import type { Lookup } from '../../format/lookup'
 import { pickAnswers, type Merit } from '../../format/pick-answers'
 import type { Speak } from '../../format/words'
@@ -31,17 +31,12 @@ function toTab(
   context: { question: Question; lookup: Lookup; say: Speak },
 ): AnswerTab {
   const { question, lookup, say } = context
-  const { untested, intermittent } = doubtsOf(hookup, lookup)
+  const doubt = doubtWords(doubtsOf(hookup, lookup), say)
   return {
     value,
     title,
-    state: intermittent > 0 ? 'intermittent' : untested > 0 ? 'untested' : 'works',
-    doubt:
-      intermittent > 0
-        ? say('answer.intermittent', { count: intermittent })
-        : untested > 0
-          ? say('answer.untested', { count: untested })
-          : say('answer.all-tested'),
+    state: doubt.state,
+    doubt: doubt.words,
     through: throughWords(hookup, [question.source.unit, question.display.unit], lookup, say),
     summary: summaryWords(hookup, say),
   }

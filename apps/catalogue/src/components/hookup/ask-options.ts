@@ -1,6 +1,7 @@
 import type { DeviceModel, Model } from '@coaxwain/models'
 import type { Snapshot, Uid, Unit, WorkingState } from '@coaxwain/shelf'
 import { fullName, type Lookup } from '../../format/lookup'
+import { optionLine } from '../../format/option-line'
 import { createSearch, type Searchable } from '../../format/search'
 import type { Speak } from '../../format/words'
 
@@ -24,17 +25,23 @@ export const servesAs = (device: DeviceModel, end: End): boolean =>
 
 const isHere = (unit: Unit): boolean => unit.holding !== 'sold' && unit.holding !== 'gone'
 
+/** What options say beside what the shelf itself knows. */
+interface Wording {
+  readonly numbers: ReadonlyMap<Uid, number>
+  readonly say: Speak
+}
+
 /** Units that can stand at one end, by name; then models at that end of which there is no unit. */
 export function deviceOptions(
   snapshot: Snapshot,
   lookup: Lookup,
   end: End,
-  say: Speak,
+  { numbers, say }: Wording,
 ): DeviceOption[] {
   const owned = new Set(snapshot.units.filter(isHere).map((u) => u.model))
   const units = snapshot.units.filter(isHere).flatMap((unit) => {
     const device = lookup.device(unit.uid)
-    return device && servesAs(device, end) ? [ofUnit(unit, device, say)] : []
+    return device && servesAs(device, end) ? [ofUnit(unit, device, numbers.get(unit.uid), say)] : []
   })
   const models = Object.entries(snapshot.models).flatMap(([uid, model]) =>
     !owned.has(uid) && isDevice(model) && servesAs(model, end) ? [ofModel(uid, model, say)] : [],
@@ -64,18 +71,20 @@ const base = (device: DeviceModel, say: Speak) => ({
   device,
 })
 
-const ofUnit = (unit: Unit, device: DeviceModel, say: Speak): DeviceOption => {
-  const kind = say(`kind.${device.kind}`)
-  return {
-    ...base(device, say),
-    value: unit.uid,
-    unit: unit.uid,
-    doubt: DOUBT[unit.working],
-    model: unit.model,
-    place: unit.place,
-    note: unit.place === null ? kind : say('drawing.unit', { kind, place: unit.place }),
-  }
-}
+const ofUnit = (
+  unit: Unit,
+  device: DeviceModel,
+  number: number | undefined,
+  say: Speak,
+): DeviceOption => ({
+  ...base(device, say),
+  value: unit.uid,
+  unit: unit.uid,
+  doubt: DOUBT[unit.working],
+  model: unit.model,
+  place: unit.place,
+  note: optionLine(unit, say(`kind.${device.kind}`), { device, number }, say),
+})
 
 const ofModel = (uid: Uid, device: DeviceModel, say: Speak): DeviceOption => ({
   ...base(device, say),

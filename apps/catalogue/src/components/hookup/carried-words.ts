@@ -1,5 +1,6 @@
 import type { Hookup, Stop, Uid } from '@coaxwain/shelf'
 import type { Colour, Sound } from '@coaxwain/signal'
+import type { Lookup } from '../../format/lookup'
 import { capital, type Speak } from '../../format/words'
 
 const inColour = (colour: Colour, say: Speak): string =>
@@ -27,9 +28,14 @@ export function carriedWords(
   hookup: Hookup,
   unit: Uid,
   display: Uid,
-  say: Speak,
+  { lookup, say }: { readonly lookup: Lookup; readonly say: Speak },
 ): { lead: string; text: string } | null {
-  if (unit === display) return { lead: say('drawing.shows'), text: shownWords(hookup, say) }
+  if (unit === display) {
+    return { lead: say('drawing.shows'), text: shownWords(hookup, unit, lookup, say) }
+  }
+  if (unit === hookup.sound.from) {
+    return { lead: say('drawing.sounds'), text: capital(say(`heard.${hookup.sound.sound}`)) }
+  }
   const stops = hookup.legs
     .flatMap((l) => (l.purpose === 'aerial' ? [] : l.stops))
     .filter((s) => s.unit === unit)
@@ -58,12 +64,14 @@ export function carriedWords(
   }
 }
 
-/** Picture and sound at the end, in one line. */
-export const shownWords = (hookup: Hookup, say: Speak): string =>
-  say('carried.with-sound', {
-    picture: pictureWords(hookup, say),
-    sound: say(`heard.${hookup.sound.sound}`),
-  })
+/** Picture and sound at the display, in one line; loudspeakers elsewhere are named. */
+function shownWords(hookup: Hookup, display: Uid, lookup: Lookup, say: Speak): string {
+  const { sound, from } = hookup.sound
+  const picture = pictureWords(hookup, say)
+  return from === null || from === display
+    ? say('carried.with-sound', { picture, sound: say(`heard.${sound}`) })
+    : say('carried.sound-elsewhere', { picture, name: lookup.device(from)?.name ?? '' })
+}
 
 export function pictureWords(hookup: Hookup, say: Speak): string {
   const { quality, colour } = hookup.picture

@@ -2,10 +2,13 @@ import type { Hookup, HookupStep } from '@coaxwain/shelf'
 import type { Lookup } from '../../format/lookup'
 import type { Speak } from '../../format/words'
 import { positionLabel } from './control-spec'
+import { settingKey } from './sheet-words'
 import { settingNumber } from './step-plan'
 
 export interface SettingRow {
   readonly key: string
+  /** Tells this setting from any other, its position included. */
+  readonly stands: string
   readonly number: number | null
   readonly name: string
   readonly why: string
@@ -28,6 +31,7 @@ export function settingRows(
     const why = say(`why.${setting.why}`)
     return {
       key: `${setting.unit} ${setting.control}`,
+      stands: settingKey(setting),
       number: settingNumber(steps, i),
       name: say('answer.setting-name', {
         unit: device?.name ?? '',

@@ -25,15 +25,18 @@ export function throughWords(
   })
 }
 
+export const picturePart = (hookup: Hookup, say: Speak): string =>
+  say(hookup.picture.colour ? 'answer.in-colour' : 'answer.in-grey', {
+    sharpness: say(`sharpness.${hookup.picture.quality}`),
+  })
+
 /** Picture, sound and effort in one line. */
 export const summaryWords = (hookup: Hookup, say: Speak): string =>
   say('answer.summary', {
-    picture: say(hookup.picture.colour ? 'answer.in-colour' : 'answer.in-grey', {
-      sharpness: say(`sharpness.${hookup.picture.quality}`),
-    }),
+    picture: picturePart(hookup, say),
     sound: say(`answer.sound.${hookup.sound.sound}`),
-    boxes: hookup.axes.boxes,
-    pieces: hookup.axes.pieces,
+    boxes: say('answer.boxes', { count: hookup.axes.boxes }),
+    pieces: say('answer.pieces', { count: hookup.axes.pieces }),
   })
 
 export interface Expectation {

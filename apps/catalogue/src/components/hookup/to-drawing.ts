@@ -61,7 +61,9 @@ function toUnit(uid: Uid, source: DrawingSource): UnitInput[] {
       },
       moulded: isMoulded(device),
       pack: power ? { port: power.key, text: say('drawing.pack') } : null,
-      carried: source.carried ? carriedWords(hookup, uid, source.question.display.unit, say) : null,
+      carried: source.carried
+        ? carriedWords(hookup, uid, source.question.display.unit, source)
+        : null,
     },
   ]
 }

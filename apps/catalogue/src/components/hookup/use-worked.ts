@@ -1,5 +1,5 @@
 import type { Hookup } from '@coaxwain/shelf'
-import { ref } from 'vue'
+import { ref, watch } from 'vue'
 import { useCollection } from '../../composables/use-collection'
 import { useFailure } from '../../composables/use-failure'
 import { useToday } from '../../composables/use-today'
@@ -24,6 +24,9 @@ export function useWorked(hookup: () => Hookup) {
   const announcer = useAnnouncer()
   const outcome = ref<Outcome>('unknown')
   const busy = ref(false)
+
+  /** Another hookup has not been tried yet. */
+  watch(hookup, () => (outcome.value = 'unknown'))
 
   async function worked(): Promise<void> {
     busy.value = true

@@ -20,17 +20,17 @@ const DEMAND_WORDS = {
 const isDemand = (key: string): key is (typeof DEMANDS)[number] =>
   (DEMANDS as readonly string[]).includes(key)
 
-/** What matters, and which boxes on the way may not be used. */
+/** What matters, and which boxes on the way may not be used. Without a hookup only what can be given up. */
 export function whatIfs(
   question: Question,
-  hookup: Hookup | undefined,
+  hookup: Hookup | null,
   lookup: Lookup,
   say: Speak,
 ): WhatIf[] {
   const { demands, avoid, source, display } = question
   const ends = [source.unit, display.unit]
   const through = hookup ? unitOrder(hookup).filter((u) => !ends.includes(u)) : []
-  return [
+  const all = [
     ...DEMANDS.map((key) => ({ key, label: say(DEMAND_WORDS[key]), on: demands[key] === true })),
     ...[...new Set([...avoid, ...through])].flatMap((uid): WhatIf[] => {
       const device = lookup.device(uid)
@@ -40,6 +40,7 @@ export function whatIfs(
       ]
     }),
   ]
+  return hookup ? all : all.filter((item) => item.on)
 }
 
 /** The question with one switch thrown. */
