@@ -1,8 +1,9 @@
-import { LIMITS, type Hookup, type Question } from '@coaxwain/shelf'
+import { LIMITS, type Hookup, type Question, type Uid } from '@coaxwain/shelf'
 import { TIER } from '@coaxwain/signal'
 import type { Face } from './compile/face'
 import type { CompiledShelf } from './compile/shelf'
 import type { Core } from './compile/signal'
+import { leastDoubt } from './compile/way'
 import { buildHookup } from './result/build'
 import { assign } from './search/assign'
 import type { Finished, Label } from './search/label'
@@ -41,12 +42,15 @@ const HIGHEST = Math.max(...Object.values(TIER))
  * The compiled arcs that a question can reach, for comparing other searches with ours over the same facts.
  * Throws when the question names a unit that is not on the shelf, or a lead.
  */
-export function arcsOf(shelf: CompiledShelf, question: Question): ArcMap {
+export function arcsOf(shelf: CompiledShelf, question: Question, nodes: Nodes = 'units'): ArcMap {
   for (const _ of shelf.compile());
-  return new Explored(shelf, question)
+  return new Explored(shelf, question, nodes)
 }
 
-interface State {
+/** A node for each unit and picture that leaves it; or one for all units from which the same leaves. */
+export type Nodes = 'units' | 'sorts'
+
+interface Place {
   readonly node: number
   readonly face: Face
   readonly core: Core
@@ -55,49 +59,67 @@ interface State {
 class Explored implements ArcMap {
   readonly arcs: Arc[] = []
   private readonly moves: (Move | null)[] = []
-  private readonly states = new Map<string, State>()
+  private readonly places = new Map<string, Place>()
   private readonly layout: Layout
   private readonly space: Omit<SearchSpace, 'budget'>
 
   constructor(
     shelf: CompiledShelf,
     private readonly question: Question,
+    private readonly kindOfNodes: Nodes,
   ) {
     this.layout = layOut(shelf, question)
     const none = { units: new Set<string>(), pieces: new Set<number>() }
     this.space = beginRound(shelf, question, this.layout, none).space
     let edge = this.space.starts.flatMap(({ way, sig }) =>
-      this.put(START, way.from!.face, sig.core, null),
+      this.put(START, { unit: '', face: way.from!.face, core: sig.core }, null),
     )
     for (let depth = 0; edge.length > 0; depth++)
-      edge = edge.flatMap((state) => this.grow(state, depth < LIMITS.boxesInLeg))
+      edge = edge.flatMap((place) => this.grow(place, depth < LIMITS.boxesInLeg))
   }
 
   get nodes(): number {
-    return this.states.size + 2
+    return this.places.size + 2
   }
 
-  private grow({ node, face, core }: State, further: boolean): State[] {
+  private grow({ node, face, core }: Place, further: boolean): Place[] {
     for (const move of this.space.ends(face, core)) this.add(node, DISPLAY, move)
     const moves = further ? this.space.moves(face, core) : []
     return moves.flatMap((move) => {
       const { leaving, way } = move
-      return leaving && way.from ? this.put(node, way.from.face, leaving.core, move) : []
+      if (!leaving || !way.from) return []
+      const to = { face: way.from.face, core: leaving.core }
+      return this.takersOf(move).flatMap(({ unit, doubt }) =>
+        this.put(node, { unit, ...to }, move, doubt),
+      )
     })
   }
 
-  /** An arc into a state, which is given back when it is new. */
-  private put(from: number, face: Face, core: Core, move: Move | null): State[] {
-    const key = stateKey(face, core)
-    const known = this.states.get(key)
-    const state = known ?? { node: this.nodes, face, core }
-    this.states.set(key, state)
-    this.add(from, state.node, move)
-    return known ? [] : [state]
+  private takersOf({ kin, way, doubt }: Move): readonly { unit: Uid; doubt: number }[] {
+    if (this.kindOfNodes === 'sorts') return [{ unit: '', doubt }]
+    const others = doubt - leastDoubt(way)
+    return kin.flatMap(({ offers }) =>
+      offers.map((offer) => ({ unit: offer.unit.uid, doubt: others + offer.doubt })),
+    )
   }
 
-  private add(from: number, to: number, move: Move | null): void {
-    const { boxes, pieces, doubt } = move ?? { boxes: 0, pieces: 0, doubt: 0 }
+  /** An arc to a place, which is given back when it is new. */
+  private put(
+    from: number,
+    { unit, face, core }: { unit: Uid; face: Face; core: Core },
+    move: Move | null,
+    doubt = 0,
+  ): Place[] {
+    const key = placeKey(unit, face, core)
+    const known = this.places.get(key)
+    const place = known ?? { node: this.nodes, face, core }
+    this.places.set(key, place)
+    this.add(from, place.node, move, doubt)
+    return known ? [] : [place]
+  }
+
+  private add(from: number, to: number, move: Move | null, doubt = move?.doubt ?? 0): void {
+    const { boxes, pieces } = move ?? { boxes: 0, pieces: 0 }
     const tiersBelow = move ? HIGHEST - TIER[move.way.into?.face.form ?? 'none'] : 0
     this.arcs.push({ from, to, boxes, pieces, doubt, tiersBelow })
     this.moves.push(move)
@@ -119,7 +141,7 @@ class Explored implements ArcMap {
     const begin = this.arcs[path[0]!]!.to
     const moves = path.slice(1).map((n) => this.moves[n]!)
     let labels: readonly Label[] = starts.filter(
-      ({ way, sig }) => this.states.get(stateKey(way.from!.face, sig.core))!.node === begin,
+      ({ way, sig }) => this.places.get(placeKey('', way.from!.face, sig.core))!.node === begin,
     )
     for (const move of moves.slice(0, -1))
       labels = labels.flatMap((label) =>
@@ -130,4 +152,4 @@ class Explored implements ArcMap {
   }
 }
 
-const stateKey = (face: Face, core: Core): string => `${face.id} ${core.id}`
+const placeKey = (unit: Uid, face: Face, core: Core): string => `${unit} ${face.id} ${core.id}`

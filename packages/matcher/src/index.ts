@@ -8,4 +8,4 @@ export {
 } from './create-search'
 export { partUid, withParts, type Parts } from './reasons/purchases'
 export { createArrangementSearch, type ArrangementSearch } from './uses/create-arrangement-search'
-export { arcsOf, DISPLAY, START, type Arc, type ArcMap } from './arcs'
+export { arcsOf, DISPLAY, START, type Arc, type ArcMap, type Nodes } from './arcs'

@@ -58,11 +58,11 @@ export function accept(input: Input, arriving: Arriving, cores: CoreTable): Take
   const { fn } = input
   const rows = fn.accepts.length > 0 ? fn.accepts : ANYTHING
   const reached: readonly (Reached | null)[] = tunes(input, arriving.core)
+  const open = firstOfAll(rows.flatMap((row) => matches(row, input, arriving) ?? []))
   return reached.flatMap((reach) =>
-    rows.flatMap((row): Taken[] => {
-      const outcome = matches(row, input, arriving)
-      const stand = outcome && together(row.while, reach?.while)
-      if (!outcome || !stand) return []
+    open.flatMap(({ row, ...outcome }): Taken[] => {
+      const stand = together(row.while, reach?.while)
+      if (!stand) return []
       const core = reach
         ? cores.intern({ ...arriving.core, carrier: reach.carrier })
         : arriving.core
@@ -71,12 +71,33 @@ export function accept(input: Input, arriving: Arriving, cores: CoreTable): Take
   )
 }
 
+/** A row that takes a signal, and what it makes of it. */
+interface Match extends Pick<Taken, 'colour' | 'reducedHeight' | 'heard'> {
+  readonly row: AcceptRow
+  /** In full, its colour included. */
+  readonly full: boolean
+}
+
+/** Rows that come about under some positions: those before them in full, or alike, do not hold under all of theirs. */
+function firstOfAll(matching: readonly Match[]): Match[] {
+  const ordered = [...matching.filter((m) => m.full), ...matching.filter((m) => !m.full)]
+  return ordered.filter(
+    (m, i) => !ordered.slice(0, i).some((first) => holdsWherever(first.row, m.row)),
+  )
+}
+
+interface Conditional {
+  readonly while?: Condition | undefined
+}
+
+/** Under all positions under which one row holds, another does as well. */
+export const holdsWherever = (row: Conditional, other: Conditional): boolean =>
+  (row.while ?? []).every(({ control, in: wanted }) =>
+    (other.while ?? []).some((c) => c.control === control && c.in.every((p) => wanted.includes(p))),
+  )
+
 /** What one row makes of a signal; null when it is not for it. */
-function matches(
-  row: AcceptRow,
-  { fn, jack }: Input,
-  arriving: Arriving,
-): Pick<Taken, 'colour' | 'reducedHeight' | 'heard'> | null {
+function matches(row: AcceptRow, { fn, jack }: Input, arriving: Arriving): Match | null {
   const { core, volts } = arriving
   const meant =
     (!row.jacks || row.jacks.includes(jack)) &&
@@ -86,6 +107,8 @@ function matches(
   const seen = colourOf(row, arriving)
   if (!meant || tuned === 'nothing' || seen === 'nothing') return null
   return {
+    row,
+    full: seen === 'colour',
     colour: seen === 'colour' && row.outcome !== 'monochrome',
     reducedHeight: row.outcome === 'reduced-height',
     heard: tuned !== 'silent' && row.outcome !== 'silent',

@@ -99,6 +99,22 @@ export const variantKey = (device: DeviceModel, unit: Unit): string => {
     : JSON.stringify([unit.model, unit.modifications, stuck])
 }
 
+/** What is noted of a unit, but for its name and place; what works is before what nobody has tried. */
+const unitContent = ({ working, forms, functions, modifications, stands, remotePresent }: Unit) =>
+  JSON.stringify([
+    ORDER.indexOf(working),
+    ...[forms, functions, modifications, Object.entries(stands).sort(), remotePresent],
+  ])
+
+const ORDER: readonly Unit['working'][] = ['works', 'untested', 'faulty', 'parts-only']
+
+/** So that of units that do as well neither names nor their order on the shelf decide. */
+const unitsByContent = (units: readonly Unit[]): Unit[] =>
+  units
+    .map((unit) => ({ unit, content: unitContent(unit) }))
+    .sort((a, b) => (a.content < b.content ? -1 : a.content > b.content ? 1 : 0))
+    .map(({ unit }) => unit)
+
 /** All units that may be lent, put together by what they can do. */
 export function compileVariants(snapshot: Snapshot, bought: ReadonlySet<Uid>): Variant[] {
   const groups = new Map<string, Unit[]>()
@@ -113,7 +129,7 @@ export function compileVariants(snapshot: Snapshot, bought: ReadonlySet<Uid>): V
   const variants = [...groups].map(([id, units]) => ({
     ...variantOf(snapshot, units[0] as Unit, bought.has(units[0]!.uid)),
     id,
-    units,
+    units: unitsByContent(units),
   }))
   return byContent(variants)
 }

@@ -6,6 +6,7 @@ import {
   type Give,
   type Key,
 } from '@coaxwain/models'
+import { isSingle } from '@coaxwain/signal'
 import { draftsOf, isSoundOnly, soundDraftsOf } from './drafts'
 import type { FaceTable, Placed } from './face'
 import {
@@ -164,11 +165,17 @@ const sameButSound = (a: Way, b: Way): boolean =>
 const plugsOf = (placed: Placed | null): string =>
   (placed?.face.ports ?? []).map((p) => `${p.connector} ${p.mount}`).join()
 
+/** Left and right are contacts of one plug, which does not go elsewhere. */
+const isMultiway = (placed: Placed | null): boolean =>
+  (placed?.face.sound ?? []).some((c) => !isSingle(placed!.face.ports[c.port]!.connector))
+
 const leastOf = (way: Way): number => way.offers[0]?.doubt ?? Infinity
 
 /** The right channel alone is worth trying only where the left is worse off. */
 function rightInVain(way: Way, ways: readonly Way[]): boolean {
   if (!isRight(way.soundFrom) && !isRight(way.soundTo)) return false
+  if (isRight(way.soundFrom) && isMultiway(way.into)) return false
+  if (isRight(way.soundTo) && isMultiway(way.from)) return false
   return ways.some(
     (other) =>
       sameButSound(other, way) &&

@@ -58,7 +58,7 @@ export function wholePicture(out: Face, into: Face): WantedWire[] | null {
  * into a luma contact. Decided by what arrives, not by a list of lookalikes.
  */
 export function lumaOnly(out: Face, into: Face): WantedWire[] | null {
-  if (into.form === null || out.form === 'rgbs' || formsAgree(out, into)) return null
+  if (into.form === null || out.form === 'rgbs') return null
   for (const want of into.picture) {
     for (const from of out.picture) {
       const arrival = arrivalAt(into.form, new Map([[want.circuit, from.circuit]]))

@@ -56,7 +56,7 @@ export function obstaclesBetween(
   const passive = tools.whole ? [] : onePerWay(tools.boxes.filter((b) => b.fn.power === 'none'))
   const tried = pictures.flatMap((label) => [
     ...ends.map((end) => attempt(label, end, tools)),
-    ...boxes.flatMap((box) => throughOne(label, box, ends, tools)),
+    ...throughEach(label, boxes, ends, tools),
     ...passive.flatMap((box) => turnedRound(label, box, ends, tools)),
   ])
   const broken = tried.filter(
@@ -105,8 +105,8 @@ const onePerWay = (ways: readonly Way[]): Way[] => [
   ...new Map(ways.map((w) => [`${w.variant.id} ${w.fn.key} ${w.in} ${w.out?.jack}`, w])).values(),
 ]
 
-/** Boxes of which something plugs into the display. */
-function leadingOn({ boxes, joins }: ReasonTools, ends: readonly Way[]): Way[] {
+/** Boxes of which something plugs into the display, and that are not more effort than the answer. */
+function leadingOn({ boxes, joins, best }: ReasonTools, ends: readonly Way[]): Way[] {
   const known = new Map<Face, boolean>()
   const plugs = (out: Face): boolean =>
     ends.some(
@@ -116,8 +116,8 @@ function leadingOn({ boxes, joins }: ReasonTools, ends: readonly Way[]): Way[] {
           wrongWiring(out, into.face) ||
           joins.wrongWires(out, into.face)),
     )
-  return boxes.filter(({ from }) => {
-    if (!from) return false
+  return boxes.filter(({ from, variant }) => {
+    if (!from || (best && best.boxes === 0 && variant.powered)) return false
     const leadsOn = known.get(from.face) ?? plugs(from.face)
     known.set(from.face, leadsOn)
     return leadsOn
@@ -163,7 +163,8 @@ function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
   const into = way.into?.face
   if (!out || !into) return null
   const [join] = tools.joins.between(out, into, PICTURE)
-  if (!join && out.form !== into.form && !misfits(out, into, tools)) return null
+  const isOther = !join && out.form !== into.form
+  if (isOther && (takesBesides(way, out) || !misfits(out, into, tools))) return null
   const wrong = wrongPlug(label, way, join, tools)
   if (wrong) return { boxes: label.boxes, pieces: label.pieces, broken: wrong }
   const broken = [
@@ -181,6 +182,15 @@ const leadBreaks = (label: Label, way: Way, join: Join | undefined): Obstacle[] 
     : way.into?.face.ports.some((p) => p.connector === 'whip')
       ? [obstacle('whip-only', { ...endsOf(label.way, way) })]
       : [obstacle('no-lead', { ...endsOf(label.way, way), form: label.way.from?.face.form ?? '' })]
+
+/** The same socket takes this form as well, so that nothing is wrong with the plug. */
+const takesBesides = ({ variant, into }: Way, out: Face): boolean =>
+  variant.device.jacks.some(
+    (j) =>
+      j.dir === 'in' &&
+      j.form === out.form &&
+      j.contacts.some((c) => into?.ports.includes(c.port) === true),
+  )
 
 const misfits = (out: Face, into: Face, tools: ReasonTools): boolean =>
   wrongWiring(out, into) || wrongWires(out, into, tools)
@@ -258,6 +268,12 @@ const wrongWiring = (out: Face, into: Face): boolean =>
     into.ports.some((b) => fits(a.connector, b.connector) && !mates(a.connector, b.connector)),
   )
 
+/** Another way through the same box goes in where this one comes out, as through a splitter. */
+const worksBothWays = ({ variant, from }: Way, boxes: readonly Way[]): boolean =>
+  boxes.some(
+    (w) => w.variant === variant && w.into?.ports.some((p) => from?.ports.includes(p)) === true,
+  )
+
 /** A passive box that is made for the other direction. */
 function turnedRound(
   label: Label,
@@ -265,7 +281,7 @@ function turnedRound(
   ends: readonly Way[],
   tools: ReasonTools,
 ): (Attempt | null)[] {
-  if (!label.way.from || !box.from || !box.into) return []
+  if (!label.way.from || !box.from || !box.into || worksBothWays(box, tools.boxes)) return []
   const { from, into } = box
   if (tools.joins.between(label.way.from.face, from.face, PICTURE).length === 0) return []
   return ends.map((end) => {
@@ -286,24 +302,32 @@ function turnedRound(
   })
 }
 
-/** Into a box, breaking a rule there or not, and out of it into the display. */
-function throughOne(
+/** Into each box, breaking a rule there or not, and out of it into the display. */
+function throughEach(
   label: Label,
-  box: Way,
+  boxes: readonly Way[],
   ends: readonly Way[],
   tools: ReasonTools,
 ): (Attempt | null)[] {
-  const first = attempt(label, box, tools)
-  if (!first || rulesOf(first).length > MOST_BROKEN) return []
-  if (first.broken.length === 0) {
-    const { expander, moves } = tools
-    const into = moves(label.way.from!.face, label.sig.core).filter((move) => move.way === box)
-    const made = into.flatMap((move) =>
-      expander.entries(label, move).flatMap((entry) => expander.leave(label, move, entry)),
-    )
-    return made.flatMap((l) => ends.map((end) => attempt(l, end, tools)))
+  const { expander, moves } = tools
+  const into = new Map<Way, Label[]>()
+  const passed = (box: Way): readonly Label[] => {
+    if (into.size === 0)
+      for (const move of moves(label.way.from!.face, label.sig.core)) {
+        const made = expander
+          .entries(label, move)
+          .flatMap((entry) => expander.leave(label, move, entry))
+        into.set(move.way, [...(into.get(move.way) ?? []), ...made])
+      }
+    return into.get(box) ?? []
   }
-  // Whether the display would take what comes out cannot be known; that it fails here is the reason.
-  const powered = box.variant.powered ? 1 : 0
-  return [{ ...first, boxes: first.boxes + powered, pieces: first.pieces + 2 - powered }]
+  return boxes.flatMap((box) => {
+    const first = attempt(label, box, tools)
+    if (!first || rulesOf(first).length > MOST_BROKEN) return []
+    if (first.broken.length === 0)
+      return passed(box).flatMap((l) => ends.map((end) => attempt(l, end, tools)))
+    // Whether the display would take what comes out cannot be known; that it fails here is the reason.
+    const powered = box.variant.powered ? 1 : 0
+    return [{ ...first, boxes: first.boxes + powered, pieces: first.pieces + 2 - powered }]
+  })
 }

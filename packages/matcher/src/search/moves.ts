@@ -106,6 +106,7 @@ function entrancesOf(ways: readonly Way[], apart: (way: Way) => boolean): Entran
 /** Works out once per face and picture what can be done with it. */
 export class MoveTable {
   private readonly known = new Memo<Moves>()
+  private readonly made = new Memo<readonly Move[]>()
   private readonly taken = new Memo<readonly Taken[]>()
   private readonly left = new Memo<readonly Leaving[]>()
   private readonly entrances: readonly Entrance[]
@@ -122,10 +123,16 @@ export class MoveTable {
 
   of(face: Face, core: Core): Moves {
     return this.known.get(face.id, core.id, () => {
-      const all = this.entrances.flatMap((entrance) => this.into(entrance, face, core))
-      const groups = groupsOf(all, this.apart)
+      const groups = groupsOf(this.all(face, core), this.apart)
       return { groups, best: [...groups.values()].flatMap((g) => g.best), bestOf: bestOf(groups) }
     })
+  }
+
+  /** With those that others beat. */
+  all(face: Face, core: Core): readonly Move[] {
+    return this.made.get(face.id, core.id, () =>
+      this.entrances.flatMap((entrance) => this.into(entrance, face, core)),
+    )
   }
 
   private into({ face, takes }: Entrance, out: Face, core: Core): Move[] {

@@ -58,7 +58,7 @@ export class Outlooks {
     private readonly space: {
       readonly states: StateGraph
       /** Moves into the display. */
-      readonly ends: MovesFrom
+      readonly allEnds: MovesFrom
       readonly outsideSpeakers: boolean
     },
   ) {}
@@ -90,7 +90,7 @@ export class Outlooks {
     const known = this.seen.get(state)
     if (known) return known
     const end = this.space
-      .ends(state.face, state.core)
+      .allEnds(state.face, state.core)
       .map((move) => this.atEnd(move))
       .reduce<Outlook | null>((all, one) => (all ? best(all, one) : one), null)
     const made: Seen = { state, end, outlook: end, before: [] }

@@ -69,6 +69,7 @@ export function beginRound(
     states: layout.supply.states,
     moves,
     ends: (face: Face, core: Core) => last.of(face, core).best.filter((m) => finisher.canEnd(m)),
+    allEnds: (face: Face, core: Core) => last.all(face, core).filter((m) => finisher.canEnd(m)),
     joins,
     expander,
     finisher,

@@ -20,6 +20,8 @@ export interface SearchSpace {
   readonly moves: MovesFrom
   /** Moves into the display. */
   readonly ends: MovesFrom
+  /** With those that others beat. */
+  readonly allEnds: MovesFrom
   readonly joins: JoinTable
   readonly expander: Expander
   readonly finisher: Finisher

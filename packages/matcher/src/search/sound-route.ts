@@ -20,7 +20,16 @@ const better = (a: SoundRoute, b: SoundRoute): boolean =>
   a.boxes <= b.boxes &&
   a.pieces <= b.pieces &&
   a.doubt <= b.doubt &&
-  a.bought <= b.bought
+  a.bought <= b.bought &&
+  [...scarceIn(a)].every(([piece, n]) => n <= (scarceIn(b).get(piece) ?? 0))
+
+/** Pieces of scarce sorts that a route takes. */
+function scarceIn({ joins }: SoundRoute): Map<number, number> {
+  const used = new Map<number, number>()
+  for (const { scarce } of joins)
+    for (const [piece, n] of scarce) used.set(piece, (used.get(piece) ?? 0) + n)
+  return used
+}
 
 /** Keeps what no other route beats. */
 function pareto(routes: readonly SoundRoute[]): SoundRoute[] {

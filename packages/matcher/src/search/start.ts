@@ -8,7 +8,7 @@ import {
   type Quality,
   type Sound,
 } from '@coaxwain/signal'
-import { systemCarries } from '../compile/accept'
+import { holdsWherever, systemCarries } from '../compile/accept'
 import { carriersOf } from '../compile/carriers'
 import { wireMhz } from '../compile/leave'
 import { embedsSound, lesserSound, type Core, type CoreTable, type Sig } from '../compile/signal'
@@ -45,11 +45,20 @@ interface Given {
   readonly stand: Label['stand']
 }
 
+/** Of rows of one look that hold under the same positions, the first. */
+const firstOfLook = (rows: readonly PictureGive[]): PictureGive[] =>
+  rows.filter(
+    (row, i) =>
+      !rows
+        .slice(0, i)
+        .some((r) => r.scan === row.scan && r.colour === row.colour && holdsWherever(r, row)),
+  )
+
 function signalsOf(way: Way, material: Material, cores: CoreTable): Given[] {
   const give = way.out
   if (!give) return []
   const form = jackOf(way.variant.device, give.jack).form as PictureForm
-  return (give.picture ?? []).flatMap((row) => {
+  return firstOfLook(give.picture ?? []).flatMap((row) => {
     const plays = played(row, material)
     const stand = together(way.stand, row.while)
     if (!plays || !stand) return []
