@@ -17,6 +17,9 @@ const isLong = process.argv.includes('--long')
 /** `npm test -- api unit` runs these suites alone. */
 const chosen = process.argv.slice(2).filter((a) => !a.startsWith('--'))
 
+/** What a test wants to be printed even where it passes. */
+const TOLD = 'told: '
+
 const bin = (name) => inRoot('node_modules/.bin', name)
 
 /** A check that passes or fails as a whole. */
@@ -38,7 +41,8 @@ const SUITES = [
   project('unit', 'packages', 'apps/api/src', 'database'),
   project('architecture', 'tests/architecture'),
   project('reference', 'tests/reference'),
-  project('laws', 'tests/laws', 'tests/enumeration'),
+  project('enumeration', 'tests/enumeration'),
+  project('laws', 'tests/laws'),
   project('cases', 'tests/cases'),
   project('web', 'apps/catalogue/src'),
 ]
@@ -93,6 +97,8 @@ async function counted(name, env, folder) {
   if (!existsSync(file))
     return { passed: 0, failed: 1, output: `${name} gave no report:\n${output}` }
   const { passed, failed, notes } = countReport(JSON.parse(readFileSync(file, 'utf8')))
+  for (const line of output.split('\n'))
+    if (line.startsWith(TOLD)) say(`  ${line.slice(TOLD.length)}`)
   const silent = status !== 0 && failed === 0
   const none = passed + failed === 0
   const bad = failed > 0 || silent || none

@@ -63,7 +63,8 @@ export default defineConfig({
       onDatabase('faults', ['tests/faults/**/*.test.ts']),
       plain('architecture', ['tests/architecture/**/*.test.ts']),
       plain('reference', ['tests/reference/**/*.test.ts']),
-      plain('laws', ['tests/laws/**/*.test.ts', 'tests/enumeration/**/*.test.ts']),
+      plain('laws', ['tests/laws/**/*.test.ts']),
+      plain('enumeration', ['tests/enumeration/**/*.test.ts']),
       plain('cases', ['tests/cases/**/*.test.ts']),
       {
         test: {

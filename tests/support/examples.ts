@@ -1,6 +1,6 @@
 import type { BodyOf, ParamsOf, QueryOf, RouteName } from '@coaxwain/contract'
 import { findHookups } from '@coaxwain/matcher'
-import type { Hookup, Question, Snapshot, Unit } from '@coaxwain/shelf'
+import { chainOf, type Hookup, type Question, type Snapshot, type Unit } from '@coaxwain/shelf'
 import { lead, modulator, monitor, player } from './models'
 import { uidOf } from './uids'
 import { COLLECTION, emailOf, MODELS, PASS_PHRASE, PLACES, UNITS } from './world'
@@ -128,6 +128,7 @@ export const EXAMPLES: { readonly [N in RouteName]: Example<N> } = {
   },
   readSnapshot: { params: IN },
   ask: { params: IN, body: { question: question() } },
+  checkChain: { params: IN, body: { question: question(), chain: chainOf(hookup()) } },
   listHookups: { params: IN },
   readHookup: { params: HOOKUP, before: 'save-hookup' },
   saveHookup: {

@@ -8,7 +8,7 @@ import type { Matcher, Stocker } from './answers/service'
 const SLICE_MS = 20
 const STEPS_AT_ONCE = 10
 /** After that the best so far is the answer, and says that it is not complete. */
-const PATIENCE_MS = 2000
+const PATIENCE_MS = 5000
 
 /** As long as a snapshot is kept, so is what has been worked out for it. */
 const compiled = new WeakMap<Snapshot, CompiledShelf>()

@@ -2,7 +2,7 @@ import type { Circuit } from './circuits'
 
 /**
  * Families of connectors. A family has a socket and a plug, except the loose ends: screws take spade lugs
- * or bare wire, and a whip takes nothing.
+ * or bare wire, a clamp takes the stripped end of coaxial cable, and a whip takes nothing.
  */
 export const CONNECTOR_FAMILIES = [
   'phono',
@@ -30,7 +30,7 @@ export const CONNECTOR_FAMILIES = [
 
 export type ConnectorFamily = (typeof CONNECTOR_FAMILIES)[number]
 
-export const LOOSE_CONNECTORS = ['screws', 'spades', 'bare', 'whip'] as const
+export const LOOSE_CONNECTORS = ['screws', 'spades', 'bare', 'clamp', 'stripped', 'whip'] as const
 export type LooseConnector = (typeof LOOSE_CONNECTORS)[number]
 
 export type Connector = `${ConnectorFamily}-socket` | `${ConnectorFamily}-plug` | LooseConnector
@@ -130,7 +130,10 @@ function joinable(
 ): boolean {
   if (isLoose(a) || isLoose(b)) {
     const pair = [a, b]
-    return pair.includes('screws') && (pair.includes('spades') || pair.includes('bare'))
+    return (
+      (pair.includes('screws') && (pair.includes('spades') || pair.includes('bare'))) ||
+      (pair.includes('clamp') && pair.includes('stripped'))
+    )
   }
   if (isPlug(a) === isPlug(b)) return false
   const plug = familyOf(isPlug(a) ? a : b)

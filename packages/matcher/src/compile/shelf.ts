@@ -100,7 +100,7 @@ export class CompiledShelf {
     const joins = new JoinTable(drawer, new Set())
     const boxes = this.offerings.flatMap((o) => o.boxes)
     const moves = new MoveTable(joins, boxes, this.cores, () => false)
-    const states = new StateGraph((face, core) => moves.of(face, core).best)
+    const states = new StateGraph(moves)
     const made = { drawer, joins, moves, states }
     this.supplies.set(key, made)
     return made

@@ -44,6 +44,10 @@ export interface Moves {
 class Memo<T> {
   private readonly rows = new Map<number, Map<number, T>>()
 
+  has(first: number, second: number): boolean {
+    return this.rows.get(first)?.has(second) === true
+  }
+
   get(first: number, second: number, make: () => T): T {
     let row = this.rows.get(first)
     if (!row) this.rows.set(first, (row = new Map<number, T>()))
@@ -133,6 +137,17 @@ export class MoveTable {
     return this.made.get(face.id, core.id, () =>
       this.entrances.flatMap((entrance) => this.into(entrance, face, core)),
     )
+  }
+
+  /** Works the moves from one state out in slices. */
+  *prepare(face: Face, core: Core): Generator<void> {
+    if (this.made.has(face.id, core.id)) return
+    const made: Move[] = []
+    for (const entrance of this.entrances) {
+      made.push(...this.into(entrance, face, core))
+      yield
+    }
+    this.made.get(face.id, core.id, () => made)
   }
 
   private into({ face, takes }: Entrance, out: Face, core: Core): Move[] {

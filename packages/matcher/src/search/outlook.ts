@@ -74,6 +74,7 @@ export class Outlooks {
     const waiting = this.starts.map(({ way, sig }) => this.see(states.at(way.from!.face, sig.core)))
     const met = new Set(waiting)
     for (const from of waiting) {
+      yield* states.prepare(from.state)
       for (const stride of states.stridesFrom(from.state)) {
         const to = this.see(stride.to)
         to.before.push({ seen: from, stride })

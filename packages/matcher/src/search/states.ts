@@ -1,7 +1,7 @@
 import { TIER } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
 import type { Core } from '../compile/signal'
-import type { Move } from './moves'
+import type { Move, MoveTable } from './moves'
 
 export type MovesFrom = (face: Face, core: Core) => readonly Move[]
 
@@ -35,7 +35,7 @@ export const tierInto = (move: Move): number =>
 export class StateGraph {
   private readonly states = new Map<string, State>()
 
-  constructor(private readonly moves: MovesFrom) {}
+  constructor(private readonly table: MoveTable) {}
 
   at(face: Face, core: Core): State {
     const key = `${face.id} ${core.id}`
@@ -46,6 +46,11 @@ export class StateGraph {
     return made
   }
 
+  /** Works out in slices where a state leads to. */
+  *prepare({ face, core, strides }: State): Generator<void> {
+    if (!strides) yield* this.table.prepare(face, core)
+  }
+
   /** Where a state leads to. */
   stridesFrom(state: State): readonly Stride[] {
     return (state.strides ??= this.grow(state))
@@ -53,7 +58,7 @@ export class StateGraph {
 
   private grow({ face, core }: State): Stride[] {
     const found = new Map<State, Stride>()
-    for (const move of this.moves(face, core)) {
+    for (const move of this.table.of(face, core).best) {
       const { leaving, way } = move
       if (!leaving || !way.from) continue
       const to = this.at(way.from.face, leaving.core)

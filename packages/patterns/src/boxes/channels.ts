@@ -18,6 +18,7 @@ import {
   rfIn,
   rfOut,
   SAME,
+  scart,
   sounds,
   stereoIn,
   stereoOut,
@@ -25,8 +26,8 @@ import {
   tuner,
   turns,
 } from '@coaxwain/models/build'
-import type { PlanPart, RfSystemId } from '@coaxwain/signal'
-import { box, ENCODED } from './box'
+import type { Connector, PlanPart, RfSystemId } from '@coaxwain/signal'
+import { ANY_ENCODED, box, ENCODED } from './box'
 
 const modulator = (
   name: string,
@@ -35,7 +36,7 @@ const modulator = (
   connector: 'f-socket' | 'iec-plug',
 ): DeviceModel => {
   const keys = Object.keys(systems)
-  const lines = Object.values(systems).some((s) => s === 'M') ? LINES_525 : LINES_625
+  const lines = Object.values(systems).includes('M') ? LINES_525 : LINES_625
   return box({
     name,
     kind: 'modulator',
@@ -74,12 +75,57 @@ const modulator = (
 const UHF: PlanPart = { plan: 'ccir-west-europe', names: '21..69' }
 
 /** Systems whose sound a multi-system tuner hears, each on a position of its own. */
-const SOUND_SYSTEMS = { I: 'I', BG: 'G', DK: 'K', M: 'M' } as const
+const SOUND_SYSTEMS = { I: 'I', BG: 'G', DK: 'K', L: 'L', M: 'M' } as const
+
+/** 47 CFR 15.115(h): 80 dB from 54 to 216 MHz, 60 dB to 550 MHz; the lower figure is taken. */
+const SWITCH_DB = 60
+
+const aerialSwitch = (name: string, into: Connector, out: Connector): DeviceModel =>
+  box({
+    name,
+    kind: 'rf-switch',
+    pack: undefined,
+    back: [[rfIn('a', 'A', into), rfIn('b', 'B', into), rfOut('out', 'TO TV', out)]],
+    controls: [
+      choice('switch', 'A/B', 'input', { positions: { a: 'A', b: 'B' }, access: 'front' }),
+    ],
+    functions: (['a', 'b'] as const).map((side) =>
+      passes(`select-${side}`, 'selects', side, {
+        to: ['out'],
+        while: at('switch', side),
+        gainDb: -0.7,
+      }),
+    ),
+    leaks: [
+      { from: 'a', to: 'b', db: SWITCH_DB },
+      { from: 'b', to: 'a', db: SWITCH_DB },
+      { from: 'out', to: 'a', db: SWITCH_DB },
+      { from: 'out', to: 'b', db: SWITCH_DB },
+    ],
+  })
 
 /** On to channels and off them. */
 export const RF_BOXES = {
   'modulator-3-4': modulator('modulator, channel 3 or 4', THREE_FOUR, { M: 'M' }, 'f-socket'),
-  'modulator-uhf': modulator('UHF modulator', UHF, { I: 'I', G: 'G' }, 'iec-plug'),
+  'modulator-uhf': modulator('UHF modulator', UHF, { I: 'I', G: 'G', K: 'K', L: 'L' }, 'iec-plug'),
+  'modulator-uhf-us': modulator(
+    'UHF modulator, American channels',
+    { plan: 'us-broadcast', names: '14..69' },
+    { M: 'M' },
+    'f-socket',
+  ),
+  'modulator-jp': modulator(
+    'modulator, Japanese channel 1 or 2',
+    { plan: 'japan-broadcast', names: '1,2' },
+    { M: 'M' },
+    'f-socket',
+  ),
+  'modulator-vhf-eu': modulator(
+    'VHF modulator, channel E3 or E4',
+    { plan: 'ccir-west-europe', names: 'E3,E4' },
+    { B: 'B' },
+    'iec-plug',
+  ),
   'modulator-vhf-au': modulator(
     'VHF modulator, channel 0 or 1',
     { plan: 'australia', names: '0,1' },
@@ -141,16 +187,18 @@ export const RF_BOXES = {
     ],
   }),
   'analogue-tuner': box({
-    name: 'tuner with line outputs, or a recorder used as one',
+    name: 'recorder with a cable tuner, used as a tuner',
     kind: 'tuner',
     back: [
       [
         rfIn('aerial-in', 'ANT IN', 'f-socket'),
+        rfOut('rf-out', 'TO TV', 'f-socket'),
         compositeOut('video-out', 'VIDEO OUT'),
         stereoOut('sound-out'),
       ],
     ],
     controls: [
+      channelSwitch(THREE_FOUR),
       tuner('tuned-to', 'CHANNEL', 'numbers', {
         reaches: [
           { plan: 'us-broadcast', names: '2..69' },
@@ -160,7 +208,11 @@ export const RF_BOXES = {
     ],
     functions: [
       turns('receive', 'tunes', 'aerial-in', {
-        gives: [gives('video-out', SAME), sounds('sound-out', 'same')],
+        gives: [
+          gives('video-out', SAME),
+          sounds('sound-out', 'same'),
+          gives('rf-out', SAME, { rf: [carrier('M', { levelDbmv: 8 })] }),
+        ],
         accepts: heardOn([{ scans: LINES_525, colours: ENCODED }], ['M']),
         tunedBy: 'tuned-to',
       }),
@@ -189,29 +241,61 @@ export const RF_BOXES = {
       }),
     ],
   }),
-  'aerial-switch': box({
-    name: 'two-way aerial switch',
-    kind: 'rf-switch',
-    pack: undefined,
+  'dvb-t-receiver': box({
+    name: 'receiver for digital stations, 21-pin',
+    kind: 'converter-box',
     back: [
-      [rfIn('a', 'A', 'f-socket'), rfIn('b', 'B', 'f-socket'), rfOut('out', 'TO TV', 'f-socket')],
+      [
+        rfIn('aerial-in', 'AERIAL', 'iec-socket'),
+        scart('av', 'TV', { gives: ['composite', 'rgb', 'sound'] }),
+        compositeOut('video-out', 'VIDEO OUT'),
+        stereoOut('sound-out'),
+      ],
     ],
     controls: [
-      choice('switch', 'A/B', 'input', { positions: { a: 'A', b: 'B' }, access: 'front' }),
-    ],
-    functions: (['a', 'b'] as const).map((side) =>
-      passes(`select-${side}`, 'selects', side, {
-        to: ['out'],
-        while: at('switch', side),
-        gainDb: -0.7,
+      tuner('tuned-to', 'STATION', 'search', {
+        reaches: [{ plan: 'uk-uhf' }, { plan: 'ccir-west-europe' }],
       }),
-    ),
-    // 47 CFR 15.115(h): 80 dB from 54 to 216 MHz, 60 dB to 550 MHz; the lower figure is taken.
-    leaks: [
-      { from: 'a', to: 'b', db: 60 },
-      { from: 'b', to: 'a', db: 60 },
-      { from: 'out', to: 'a', db: 60 },
-      { from: 'out', to: 'b', db: 60 },
+    ],
+    functions: [
+      turns('receive', 'tunes', 'aerial-in', {
+        gives: [
+          gives('av-composite-out', [picture('625i50', 'pal')], { volts: ['av-select'] }),
+          gives('av-rgb-out', [picture('625i50', 'rgb')], { volts: ['av-select', 'rgb-select'] }),
+          gives('video-out', [picture('625i50', 'pal')]),
+          sounds('av-sound-out', 'stereo'),
+          sounds('sound-out', 'stereo'),
+        ],
+        accepts: digitalOnly(['dvb-t']),
+        tunedBy: 'tuned-to',
+      }),
     ],
   }),
+  'converter-405': box({
+    name: '625 to 405 line standards converter with modulator',
+    kind: 'standards-converter',
+    back: [
+      [
+        compositeIn('video-in', 'VIDEO IN'),
+        stereoIn('sound-in'),
+        rfOut('rf-out', 'TO TV', 'iec-plug'),
+      ],
+    ],
+    controls: [channelSwitch({ plan: 'uk-405', names: 'B1..B5' })],
+    functions: [
+      turns('convert', 'modulates', 'video-in', {
+        sound: 'sound-in',
+        gives: [
+          gives('rf-out', [{ ...picture('405i50', 'mono'), converts: true }], {
+            rf: [carrier('A', { levelDbmv: 6 })],
+          }),
+        ],
+        accepts: ANY_ENCODED,
+        storesFields: true,
+        delayMs: 20,
+      }),
+    ],
+  }),
+  'aerial-switch': aerialSwitch('two-way aerial switch', 'f-socket', 'f-socket'),
+  'aerial-switch-9-5': aerialSwitch('two-way 9.52 mm aerial switch', 'iec-socket', 'iec-plug'),
 } satisfies Record<string, DeviceModel>

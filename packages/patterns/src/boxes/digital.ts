@@ -5,6 +5,8 @@ import {
   compositeIn,
   compositeOut,
   gives,
+  hd15In,
+  hd15Out,
   hdmiIn,
   hdmiOut,
   LINES_15K,
@@ -53,6 +55,38 @@ export const DIGITAL_BOXES = {
         hdcp: true,
         storesFields: true,
         delayMs: 34,
+      }),
+    ],
+  }),
+  'hdmi-to-monitor': box({
+    name: 'HDMI to computer-monitor converter that completes the handshake',
+    kind: 'scan-converter',
+    back: [
+      [hdmiIn('hdmi-in', 'HDMI IN'), hd15Out('monitor-out', 'MONITOR'), stereoOut('sound-out')],
+    ],
+    functions: [
+      turns('convert', 'converts-form', 'hdmi-in', {
+        gives: [gives('monitor-out', [picture('525p60', 'rgb')]), sounds('sound-out', 'same')],
+        accepts: plainColour('digital', HD),
+        hdcp: true,
+      }),
+    ],
+  }),
+  'monitor-to-hdmi': box({
+    name: 'computer picture to HDMI converter',
+    kind: 'scan-converter',
+    back: [
+      [hd15In('computer-in', 'COMPUTER IN'), stereoIn('sound-in'), hdmiOut('hdmi-out', 'HDMI OUT')],
+    ],
+    functions: [
+      turns('convert', 'converts-form', 'computer-in', {
+        sound: 'sound-in',
+        gives: [
+          gives('hdmi-out', [{ ...picture('750p60', 'digital'), converts: true }], {
+            sound: 'same',
+          }),
+        ],
+        accepts: plainColour('rgb', ['525p60', 'vga-31k-60', 'vga-31k-70']),
       }),
     ],
   }),

@@ -99,6 +99,19 @@ export const SCAN_BOXES = {
       }),
     ),
   }),
+  'ttl-to-monitor': box({
+    name: 'digital RGB to computer-monitor box',
+    kind: 'scan-converter',
+    back: [[ttlIn('ttl-in', 'DIGITAL RGB IN'), hd15Out('monitor-out', 'MONITOR')]],
+    functions: [
+      turns('convert', 'converts-scan', 'ttl-in', {
+        gives: [gives('monitor-out', [{ ...picture('525p60', 'rgb'), converts: true }])],
+        accepts: plainColour('rgbi', ['cga-15k7', '262p60', 'ega-21k8']),
+        storesFields: true,
+        delayMs: 17,
+      }),
+    ],
+  }),
   'ttl-converter': box({
     name: 'digital RGB to television box',
     kind: 'transcoder',

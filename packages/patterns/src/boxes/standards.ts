@@ -1,6 +1,5 @@
 import type { DeviceModel } from '@coaxwain/models'
 import {
-  at,
   componentIn,
   componentOut,
   compositeIn,
@@ -13,10 +12,19 @@ import {
   sounds,
   stereoIn,
   stereoOut,
+  sVideoIn,
   sVideoOut,
   turns,
 } from '@coaxwain/models/build'
-import { ANY_ENCODED, box, madeAnew, outStandard } from './box'
+import {
+  ANY_ENCODED,
+  box,
+  convertedTo,
+  ENCODED,
+  everyStandard,
+  inOwnRaster,
+  recoloured,
+} from './box'
 
 /** Between colour standards, and between analogue forms of a picture. */
 export const STANDARD_BOXES = {
@@ -24,10 +32,10 @@ export const STANDARD_BOXES = {
     name: 'standards converter',
     kind: 'standards-converter',
     back: [[compositeIn('video-in', 'IN'), compositeOut('video-out', 'OUT')]],
-    controls: [outStandard],
+    controls: [everyStandard],
     functions: [
       turns('convert', 'converts-scan', 'video-in', {
-        gives: [gives('video-out', madeAnew())],
+        gives: [gives('video-out', convertedTo)],
         accepts: ANY_ENCODED,
         storesFields: true,
         delayMs: 40,
@@ -38,16 +46,11 @@ export const STANDARD_BOXES = {
     name: 'colour transcoder',
     kind: 'transcoder',
     back: [[compositeIn('video-in', 'IN'), compositeOut('video-out', 'OUT')]],
-    controls: [outStandard],
+    controls: [everyStandard],
     functions: [
       turns('recolour', 'converts-colour', 'video-in', {
-        gives: [
-          gives('video-out', [
-            { scan: 'same', colour: 'ntsc-m', while: at('standard', 'ntsc') },
-            { scan: 'same', colour: 'pal', while: at('standard', 'pal') },
-          ]),
-        ],
-        accepts: ANY_ENCODED,
+        gives: [gives('video-out', recoloured)],
+        accepts: inOwnRaster(ENCODED),
         separator: 'notch',
       }),
     ],
@@ -76,21 +79,62 @@ export const STANDARD_BOXES = {
         stereoOut('sound-out'),
       ],
     ],
-    controls: [outStandard],
+    controls: [everyStandard],
     functions: [
       turns('encode', 'converts-form', 'rgb-rgb-in', {
         sound: 'rgb-sound-in',
         gives: [
           ...(['av-composite-out', 'video-out', 's-video-out'] as const).map((jack) =>
-            gives(jack, [
-              { scan: 'same', colour: 'ntsc-m', while: at('standard', 'ntsc') },
-              { scan: 'same', colour: 'pal', while: at('standard', 'pal') },
-            ]),
+            gives(jack, recoloured),
           ),
           sounds('av-sound-out', 'same'),
           sounds('sound-out', 'same'),
         ],
-        accepts: plainColour('rgb', LINES_15K),
+        accepts: inOwnRaster(['rgb']),
+      }),
+    ],
+  }),
+  'component-encoder': box({
+    name: 'component encoder, to composite and S-Video',
+    kind: 'transcoder',
+    back: [
+      [
+        componentIn('component'),
+        stereoIn('sound-in'),
+        compositeOut('video-out', 'VIDEO'),
+        sVideoOut('s-video-out', 'S-VIDEO'),
+        stereoOut('sound-out'),
+      ],
+    ],
+    controls: [everyStandard],
+    functions: [
+      turns('encode', 'converts-form', 'component', {
+        sound: 'sound-in',
+        gives: [
+          gives('video-out', recoloured),
+          gives('s-video-out', recoloured),
+          sounds('sound-out', 'same'),
+        ],
+        accepts: inOwnRaster(['ypbpr']),
+      }),
+    ],
+  }),
+  'yc-adder': box({
+    name: 'S-Video to composite adapter, adds both parts',
+    kind: 'transcoder',
+    pack: undefined,
+    back: [
+      [
+        sVideoIn('s-video-in', 'S-VIDEO'),
+        compositeOut('video-out', 'VIDEO', { connector: 'phono-plug', mount: 'lead' }),
+      ],
+    ],
+    functions: [
+      turns('add', 'converts-form', 's-video-in', {
+        gives: [gives('video-out', SAME)],
+        accepts: ANY_ENCODED,
+        separator: 'capacitor',
+        power: 'none',
       }),
     ],
   }),

@@ -173,7 +173,7 @@ export const SOCKETS: Readonly<Record<SocketId, SocketFact>> = {
     ...practice,
   },
   'screw-75': {
-    ...ends('screws', 'screws', 'bare'),
+    ...ends('clamp', 'clamp', 'stripped'),
     impedanceOhm: [75],
     contacts: [2],
     carries: ['rf'],

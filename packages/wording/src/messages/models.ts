@@ -86,6 +86,8 @@ export const MODELS = {
   'connector.screws': '300 Ω terminals',
   'connector.spades': 'spade lugs',
   'connector.bare': 'bare wires',
+  'connector.clamp': '75 Ω clamp',
+  'connector.stripped': 'stripped coax',
   'connector.whip': 'whip',
 
   'form.rf': '[Aerial] signal (RF)',

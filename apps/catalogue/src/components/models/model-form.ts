@@ -85,6 +85,7 @@ export const USE_FACTS: Readonly<Record<Use, UseFacts>> = {
       'iec-socket',
       'iec-plug',
       'screws',
+      'clamp',
       'phono-socket',
       'jack35-socket',
       'f-plug',

@@ -87,24 +87,33 @@ const lossOnTheWay: Rule = (c) => {
   return loss <= -3 ? [caution('level-lost', { db: -loss })] : []
 }
 
-/** Which plan a tuner counts in, where it decides, or where nothing else is to be set. */
-const airOrCable: Rule = (c) =>
+/** Switches of the plan that a tuner counts in, and of its bands. */
+const tunerSwitches = (c: CautionInput) =>
   c.hookup.settings.flatMap((s) => {
     const stop = c.stops.find((p) => p.unit.uid === s.unit)
     const control = stop?.variant.device.controls.find((k) => k.key === s.control)
     if (!stop || control?.kind !== 'positions') return []
     const position = control.positions.find((p) => p.key === s.position)?.label ?? s.position
-    const details = { name: named(stop), control: control.label, position }
-    const plain = boxes(c).length === 0 && !c.input.wiring.found.aerial
-    if (control.role === 'tuner-plan')
-      return s.must || plain ? [caution('air-or-cable', details)] : []
-    const bands = stop.variant.device.controls.some(
+    const isBand = stop.variant.device.controls.some(
       (k) =>
         k.kind === 'tuned-to' &&
         k.reaches.some((r) => r.while?.some((w) => w.control === s.control)),
     )
-    return bands ? [caution('band-switch', details)] : []
+    const details = { name: named(stop), control: control.label, position }
+    return [{ isPlan: control.role === 'tuner-plan', isBand, must: s.must, details }]
   })
+
+const airOrCable: Rule = (c) =>
+  tunerSwitches(c).flatMap(({ isPlan, isBand, must, details }) => {
+    if (isPlan) return must ? [caution('air-or-cable', details)] : []
+    return isBand ? [caution('band-switch', details)] : []
+  })
+
+/** A plan that serves as well as the other is worth a word only where there is nothing else to say. */
+export const eitherPlan: Rule = (c) =>
+  tunerSwitches(c)
+    .filter(({ isPlan, must }) => isPlan && !must)
+    .map(({ details }) => caution('air-or-cable', details))
 
 /** The aerial belongs to the box that receives digital stations, and not to the old set. */
 const aerialToBox: Rule = (c) => {

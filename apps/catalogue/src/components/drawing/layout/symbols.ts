@@ -254,6 +254,8 @@ const BY_FAMILY: Readonly<Record<string, SymbolKey>> = {
   screws: 'screws',
   spades: 'spade',
   bare: 'bare',
+  clamp: 'screw',
+  stripped: 'bare',
   whip: 'whip',
 }
 
