@@ -2,26 +2,26 @@ import { partUid, type Parts } from '@coaxwain/matcher'
 import type { Answer, Hookup, Link, Purchase } from '@coaxwain/shelf'
 import { isSoundCircuit, type Circuit, type Quality } from '@coaxwain/signal'
 import { sentence } from '@coaxwain/wording'
-import type {
-  CaseAnswer,
-  CaseControl,
-  CaseHop,
-  CasePiece,
-  CasePath,
-  CasePort,
-  CaseQuestion,
-  CaseSetting,
-  CaseUnit,
-  CaseWarning,
-  HookupAnswer,
+import {
+  isPiece,
+  type CaseAnswer,
+  type CaseHop,
+  type CasePiece,
+  type CasePath,
+  type CasePort,
+  type CaseQuestion,
+  type CaseSetting,
+  type CaseUnit,
+  type CaseWarning,
+  type HookupAnswer,
 } from './form'
-import { pieceInCaseForm, unitInCaseForm } from './parts-form'
-import { controlKey, DISPLAY, SOURCE } from './translate'
+import { asUsed, pieceInCaseForm, unitInCaseForm } from './parts-form'
+import { caseChannel, channelsOfPlan, controlKey, DISPLAY, SOURCE } from './translate'
 
 /** The product's answer in the words of the case form. */
 export function toCaseAnswer(question: CaseQuestion, answer: Answer, parts: Parts): HookupAnswer {
   const [best] = answer.hookups
-  const possible = verdictOf(best, answer.purchases)
+  const possible = verdictOf(best, answer.purchases, parts)
   const answers = answersOf(question, answer, { possible, parts })
   return {
     id: question.id,
@@ -35,7 +35,12 @@ export function toCaseAnswer(question: CaseQuestion, answer: Answer, parts: Part
       words: say(`obstacle.${o.code}`, o.details),
       facts: [say(`obstacle.${o.code}`, o.details)],
     })),
-    warnings: answer.obstacles.map((o) => warning(`obstacle.${o.code}`, o.details)),
+    warnings: onceEach([
+      ...answer.obstacles
+        .filter((o) => !best || !saidOfSettings(best, o.code))
+        .map((o) => warning(`obstacle.${o.code}`, o.details)),
+      ...(possible === 'with-purchase' && best ? shortcomings(best) : []),
+    ]).filter((w) => w.code !== undefined),
     claims: [],
   }
 }
@@ -64,18 +69,23 @@ const below = (rank: number): Pick<CaseAnswer, 'below'> =>
   rank > 0 ? { below: 'it is second best by the order in which answers are ranked' } : {}
 
 /**
- * Half of the sound counts as a yes where one adapter would bring the rest, and as a purchase where more is
- * missing: the form leaves that open.
+ * Half of the sound counts as a yes where the rest is wanting for an adapter, and as a purchase where it is
+ * wanting for a lead: the form leaves that open.
  */
 function verdictOf(
   best: Hookup | undefined,
   purchases: readonly Purchase[],
+  parts: Parts,
 ): HookupAnswer['possible'] {
   const [purchase] = purchases
   if (!best) return purchase ? 'with-purchase' : 'no'
   if (!isWhole(best)) return purchase ? 'with-purchase' : 'yes'
   const half = best.sound.sound === 'half'
-  return half && purchase && purchase.parts.length > 1 ? 'with-purchase' : 'yes'
+  const buysLead = purchase?.parts.some((key) => {
+    const part = parts[key]
+    return part?.type === 'piece' && part.kind === 'lead'
+  })
+  return half && buysLead ? 'with-purchase' : 'yes'
 }
 
 /** Ids of parts as the answer names them. */
@@ -95,8 +105,13 @@ function itemOf(key: string, parts: Parts): CaseUnit | CasePiece | null {
     : unitInCaseForm(boughtId(key), model)
 }
 
-/** Several pieces of one sort are bought one by one, each under an id of its own. */
+/**
+ * Several pieces of one sort are bought one by one, each under an id of its own. A box is described by what it
+ * is bought for.
+ */
 function boughtAnswer(question: CaseQuestion, purchase: Purchase, parts: Parts): CaseAnswer {
+  const hookup = numbered(purchase.hookup)
+  const answer = oneAnswer(withBought(question, purchase, parts), hookup)
   const counts = new Map<string, number>()
   const missing = purchase.parts.flatMap((key) => {
     const item = itemOf(key, parts)
@@ -104,12 +119,25 @@ function boughtAnswer(question: CaseQuestion, purchase: Purchase, parts: Parts):
     const nth = (counts.get(key) ?? 0) + 1
     counts.set(key, nth)
     const id = nth === 1 ? boughtId(key) : `${boughtId(key)}-${nth}`
-    return [{ code: key, words: item.what, item: { ...item, id } }]
+    const used = isPiece(item) ? item : asUsed(item, answer, picturesAt(hookup, id))
+    return [{ code: key, words: item.what, item: { ...used, id } }]
   })
+  const dropped = missing.flatMap(({ item }) => (isPiece(item) ? [] : [item]))
   return {
-    ...oneAnswer(withBought(question, purchase, parts), numbered(purchase.hookup)),
+    ...answer,
+    settings: answer.settings.filter((s) => {
+      const item = dropped.find((d) => d.id === s.on)
+      return !item || item.settings?.some((c) => c.name === s.set)
+    }),
     missing,
   }
+}
+
+/** The picture that comes into a box and the one that leaves it. */
+function picturesAt(hookup: Hookup, unit: string) {
+  const stops = hookup.legs.find((l) => l.purpose === 'picture')?.stops ?? []
+  const at = stops.findIndex((s) => s.unit === unit)
+  return { arriving: stops[at - 1]?.picture ?? null, leaving: stops[at]?.picture ?? null }
 }
 
 /** Ids of parts in the words of the form, and copies of a bought piece after the first under ids of their own. */
@@ -135,6 +163,25 @@ const isWhole = (h: Hookup): boolean =>
   !h.picture.degradations.includes('monochrome') &&
   h.picture.quality !== 'luma-only' &&
   !h.cautions.some((c) => c.code === 'silent')
+
+/** A rate that another position would give is said with the positions of the answer. */
+const saidOfSettings = (h: Hookup, obstacle: string): boolean =>
+  obstacle === 'line-rate' &&
+  h.cautions.some((c) => c.code === 'scan-too-fast' || c.code === 'other-lines')
+
+/** What is lost where nothing is bought. */
+const LOSSES = ['luma-only', 'colour-not-decoded', 'sound-half', 'squeezed']
+
+const shortcomings = (h: Hookup): CaseWarning[] =>
+  h.cautions
+    .filter((c) => LOSSES.includes(c.code))
+    .map((c) => warning(`caution.${c.code}`, c.details))
+
+/** Of warnings with one code the first. */
+function onceEach(warnings: readonly CaseWarning[]): CaseWarning[] {
+  const seen = new Set<string>()
+  return warnings.filter((w) => w.code === undefined || (!seen.has(w.code) && seen.add(w.code)))
+}
 
 const say = (code: string, details: Readonly<Record<string, string | number>>): string =>
   sentence(code, details, 'en-GB')
@@ -184,6 +231,33 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'caution.check-isolation': 'W-RADIATE',
   'caution.radiation-limit': 'W-RADIATE',
   'caution.level-lost': 'W-LEVEL-LOW',
+  'caution.socket-dead': 'W-BROKEN-SOCKET',
+  'caution.matching-needed': 'W-IMPEDANCE',
+  'caution.own-wiring': 'W-PINOUT',
+  'caution.channel-socket': 'W-LOOKALIKE',
+  'caution.digital-socket': 'W-LOOKALIKE',
+  'caution.tell-shape': 'W-ASPECT',
+  'caution.dc-on-lead': 'W-DC-ON-COAX',
+  'caution.dc-to-aerial': 'W-DC-ON-COAX',
+  'caution.two-programmes': 'W-TWO-TRACKS',
+  'caution.gun-needs-tube': 'W-LIGHT-GUN',
+  'caution.splitter-radiates': 'W-RADIATE',
+  'caution.channel-taken': 'W-COCHANNEL',
+  'caution.in-fm-band': 'W-COCHANNEL',
+  'caution.aerial-first': 'W-ORDER',
+  'caution.box-waits': 'W-AUTO-SWITCH',
+  'caution.standard-grey': 'W-COLOUR-LOST',
+  'caution.standard-hiss': 'W-SOUND-OFFSET',
+  'caution.other-lines': 'W-SCAN',
+  'caution.other-fields': 'W-NO-LOCK',
+  'caution.other-colour': 'W-COLOUR-LOST',
+  'caution.turn-hold': 'W-NO-LOCK',
+  'caution.set-level': 'W-LEVEL',
+  'caution.sync-wire': 'W-SYNC',
+  'caution.no-loudspeaker-here': 'W-NO-SOUND-PATH',
+  'caution.last-ends-line': 'W-TERMINATE',
+  'caution.line-open': 'W-TERMINATE',
+  'obstacle.line-not-ended': 'W-TERMINATE',
   'caution.channel-below': 'W-DSB',
   'caution.choose-by-hand': 'W-SWITCHING-VOLTAGE',
   'caution.less-detail': 'W-DROPPED-RES',
@@ -205,7 +279,11 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'obstacle.vision-polarity': 'W-VISION-POLARITY',
   'obstacle.not-a-channel': 'W-LOOKALIKE',
   'obstacle.light-gun': 'W-LIGHT-GUN',
+  'obstacle.whip-only': 'W-RADIATE',
 }
+
+/** More warnings than these on one answer are as good as none. */
+const MOST_WARNINGS = 6
 
 /** Told on every screen, but no warning in the sense of the form. */
 const UNSAID = [
@@ -224,7 +302,6 @@ function warning(code: string, details: Readonly<Record<string, string | number>
 
 function oneAnswer(question: CaseQuestion, hookup: Hookup): CaseAnswer {
   const cautions = hookup.cautions.filter((c) => !UNSAID.includes(c.code))
-  const seen = new Set<string>()
   return {
     paths: pathsOf(question, hookup),
     settings: hookup.settings.map((s) => settingOf(question, hookup, s)),
@@ -234,9 +311,10 @@ function oneAnswer(question: CaseQuestion, hookup: Hookup): CaseAnswer {
       sound: hookup.sound.sound === 'half' ? 'mono-one-channel-lost' : hookup.sound.sound,
     },
     missing: [],
-    warnings: cautions
-      .map((c) => warning(`caution.${c.code}`, c.details))
-      .filter((w) => w.code === undefined || (!seen.has(w.code) && seen.add(w.code))),
+    warnings: onceEach(cautions.map((c) => warning(`caution.${c.code}`, c.details))).slice(
+      0,
+      MOST_WARNINGS,
+    ),
   }
 }
 
@@ -249,6 +327,8 @@ function formName(quality: Quality): string {
     case 'hdmi':
     case 'dvi':
       return 'digital'
+    case 'ttl-mono':
+      return 'rgbi'
     default:
       return quality
   }
@@ -261,26 +341,29 @@ function settingOf(
   hookup: Hookup,
   s: Hookup['settings'][number],
 ): CaseSetting {
-  const control = unitOf(question, s.unit)?.settings?.find((c) => controlKey(c.name) === s.control)
+  const unit = unitOf(question, s.unit)
+  const control = unit?.settings?.find((c) => controlKey(c.name) === s.control)
   return {
     on: s.unit,
     set: control?.name ?? s.control,
     ...(control ? { class: control.class } : {}),
-    to: positionOf(hookup, s, control),
+    to: positionOf(hookup, s, unit),
   }
 }
 
 function positionOf(
   hookup: Hookup,
   s: Hookup['settings'][number],
-  control: CaseControl | undefined,
+  unit: CaseUnit | undefined,
 ): string {
+  const control = unit?.settings?.find((c) => controlKey(c.name) === s.control)
   if (s.why === 'tunes-to') {
     const sender = senderTo(hookup, s)
-    return sender === null ? s.position : `as ${sender}`
+    return sender === null ? caseName(plansOf(unit, s.control), s.position) : `as ${sender}`
   }
+  if (s.why === 'picks-channel') return caseName(plansOf(unit, s.control), s.position)
   if (control?.class === 'trim') return s.position === 'by-eye' ? 'by eye' : s.position
-  return s.why === 'picks-channel' ? caseChannel(control, s.position) : s.position
+  return s.position
 }
 
 /** The unit that a tuner follows: one that is set to the same carrier, else the one before it. */
@@ -291,17 +374,34 @@ function senderTo(hookup: Hookup, s: Hookup['settings'][number]): string | null 
   return sender?.unit ?? carrierFrom(hookup, s.unit)
 }
 
-/** Channel names of the product carry the letters of their plan where the case's own have none. */
-const caseChannel = (control: CaseControl | undefined, name: string): string =>
-  control?.choices?.includes(name)
-    ? name
-    : (control?.choices?.find((c) => name.endsWith(c)) ?? name)
+/** The plans in which a control of a unit counts its channels. */
+const plansOf = (unit: CaseUnit | undefined, control: string): readonly string[] =>
+  (unit?.ports ?? []).flatMap(({ rf, tuner }) => [
+    ...(rf && rf.control === control ? [rf.plan] : []),
+    ...(tuner && tuner.control === control ? tuner.plans : []),
+  ])
 
-/** The unit whose fixed carrier a tuner receives. */
+/** Channel names of the product carry the letters of their plan where the case's own have none. */
+function caseName(plans: readonly string[], name: string): string {
+  const own = plans.flatMap((plan) =>
+    channelsOfPlan(plan).filter((c) => caseChannel(plan, c.name).name === name),
+  )
+  return own[0]?.name ?? name
+}
+
+/** The unit whose fixed carrier a tuner receives: the last before it that makes a channel. */
 function carrierFrom(hookup: Hookup, tuner: string): string | null {
   const stops = hookup.legs[0]?.stops ?? []
-  const at = stops.findIndex((s) => s.unit === tuner)
-  return stops[at - 1]?.unit ?? null
+  const before = stops.slice(
+    0,
+    stops.findIndex((s) => s.unit === tuner),
+  )
+  const isMade = (at: number): boolean => {
+    const arrives = before[at - 1]?.picture?.carrier
+    const leaves = before[at]?.picture?.carrier
+    return Boolean(leaves) && leaves?.visionMhz !== arrives?.visionMhz
+  }
+  return before.findLast((_, at) => isMade(at))?.unit ?? before.at(-1)?.unit ?? null
 }
 
 const unitOf = (question: CaseQuestion, id: string): CaseUnit | undefined =>
@@ -338,16 +438,25 @@ const CIRCUITS: Readonly<Record<string, readonly Circuit[]>> = {
 const portOf = (question: CaseQuestion, unit: string, port: string): CasePort | undefined =>
   unitOf(question, unit)?.ports.find((p) => p.id === port)
 
-/** The name of what a link carries: the signal of the giving port that covers its picture circuits. */
-function pictureSignal(question: CaseQuestion, link: Link): string {
+/** One connection in the words of the form: a link, and one of the signals that it carries. */
+interface Lane {
+  readonly link: Link
+  readonly signal: string
+}
+
+/** What a link carries of a picture: one signal that both ports name and that covers all, else one for each wire. */
+function lanesOf(question: CaseQuestion, link: Link): Lane[] {
   const circuits = link.circuits.map((c) => c.from).filter((c) => !isSoundCircuit(c))
   const from = portOf(question, link.from.unit, link.from.port)?.signals ?? []
   const to = portOf(question, link.to.unit, link.to.port)?.signals ?? []
   const covers = from.filter((s) => circuits.every((c) => CIRCUITS[s]?.includes(c)))
-  return covers.find((s) => to.includes(s)) ?? covers[0] ?? 'composite'
+  const whole = covers.find((s) => to.includes(s))
+  const parts = from.filter((s) => to.includes(s) && circuits.some((c) => CIRCUITS[s]?.includes(c)))
+  const signals = whole ? [whole] : parts.length > 0 ? parts : [covers[0] ?? 'composite']
+  return signals.map((signal) => ({ link, signal }))
 }
 
-function hop(link: Link, signal: string): CaseHop {
+function hop({ link, signal }: Lane): CaseHop {
   return {
     from: `${link.from.unit}:${link.from.port}`,
     by: link.pieces.map((p) => p.model),
@@ -365,25 +474,24 @@ function pathsOf(question: CaseQuestion, hookup: Hookup): CasePath[] {
       .map((l) => hookup.links[l]!)
       .filter((l) => l.from.unit === from && l.to.unit === stop.unit)
       .filter((l) => l.circuits.some((c) => !isSoundCircuit(c.from)))
+      .flatMap((l) => lanesOf(question, l))
   })
-  const main = steps.map((links) => hop(links[0]!, pictureSignal(question, links[0]!)))
-  const lanes = steps.flatMap((links, i) =>
-    links.slice(1).map((link): CasePath => {
-      const circuit = link.circuits[0]!.from
-      const after = steps.slice(i + 1).map((next) => {
-        const same = next.find((l) => l.circuits[0]!.from === circuit) ?? next[0]!
-        return hop(same, pictureSignal(question, same))
-      })
+  const main = steps.map((lanes) => hop(lanes[0]!))
+  const beside = steps.flatMap((lanes, i) =>
+    lanes.slice(1).map((lane): CasePath => {
+      const after = steps
+        .slice(i + 1)
+        .map((next) => hop(next.find((l) => l.signal === lane.signal) ?? next[0]!))
       return {
-        purpose: `picture-${circuit}`,
-        hops: [...main.slice(0, i), hop(link, pictureSignal(question, link)), ...after],
+        purpose: `picture-${lane.signal}`,
+        hops: [...main.slice(0, i), hop(lane), ...after],
       }
     }),
   )
   return [
     { purpose: 'picture', hops: main },
     ...offAirPaths(hookup),
-    ...lanes,
+    ...beside,
     ...soundPaths(
       hookup,
       main,
@@ -403,7 +511,7 @@ function offAirPaths(hookup: Hookup): CasePath[] {
           .map((l) => hookup.links[l]!)
           .filter((l) => l.from.unit === leg.stops[i]!.unit && l.to.unit === stop.unit)
           .slice(0, 1)
-          .map((l) => hop(l, 'rf')),
+          .map((link) => hop({ link, signal: 'rf' })),
       ),
     }))
 }
@@ -426,7 +534,7 @@ function soundPaths(
   const goesOn = (unit: string) => wires.some((w) => w.link.from.unit === unit)
   const ends = wires.filter((w) => !goesOn(w.link.to.unit))
   const before = (wire: (typeof wires)[number]): CaseHop[] => {
-    const own = hop(wire.link, wire.circuit)
+    const own = hop({ link: wire.link, signal: wire.circuit })
     const fed = wires.filter((w) => w.link.to.unit === wire.link.from.unit)
     const same = fed.find((w) => w.circuit === wire.circuit) ?? fed[0]
     if (same) return [...before(same), own]

@@ -1,6 +1,32 @@
 /** The question part of a case, as its form describes it. Unknown fields are ignored. */
 export type When = Readonly<Record<string, readonly string[]>>
 
+/**
+ * A fact that may depend on controls: stated alone, with its `when`, or as a list of such statements. The form
+ * names these entries without saying how each is spelt, so that they are read by `stated`.
+ */
+export type Stated = unknown
+
+/** One statement of such a fact. */
+export interface Statement {
+  readonly value: unknown
+  readonly when: When | undefined
+}
+
+const NOT_THE_FACT = ['when', 'note', 'words']
+
+/** Every statement of a fact, however it is spelt: `x`, `{x, when}`, or a list of either. */
+export function stated(fact: Stated): Statement[] {
+  if (fact === undefined || fact === null) return []
+  if (Array.isArray(fact)) return fact.flatMap((one: unknown) => stated(one))
+  if (typeof fact !== 'object') return [{ value: fact, when: undefined }]
+  const { when, ...rest } = fact as Record<string, unknown> & { when?: When }
+  const [value] = Object.entries(rest)
+    .filter(([key]) => !NOT_THE_FACT.includes(key))
+    .map(([, v]) => v)
+  return [{ value, when }]
+}
+
 export interface CaseMode {
   scan: string
   colour: string
@@ -46,16 +72,16 @@ export interface CasePort {
   ohm?: number
   rf?: CaseRf
   tuner?: CaseTuner
-  volts?: { volt: string; when?: When }[]
-  load?: unknown
+  volts?: (string | { volt: string; when?: When })[]
+  load?: Stated
   loops?: string
-  tracks?: unknown
+  tracks?: Stated
   taken?: boolean | string
   hdcp?: boolean
   recorderInputAgc?: boolean
   dcVolts?: number
-  shape?: { shape: string; when?: When }[] | string
-  syncFrom?: unknown
+  shape?: Stated
+  syncFrom?: Stated
 }
 
 export interface CaseControl {
@@ -84,11 +110,13 @@ export interface CaseUnit {
   settings?: CaseControl[]
   does?: CaseDoes[]
   powered?: boolean
-  content?: { protection?: string[]; scans?: string[]; tracks?: unknown }
-  needs?: string[]
+  content?: { protection?: string[] | string; scans?: string[]; tracks?: unknown; wanted?: unknown }
+  needs?: string[] | string
   sound?: string
   deflection?: { lineKhz: [number, number][]; fieldHz: number[] }
   aspect?: string
+  shape?: Stated
+  syncFrom?: Stated
   tube?: { view?: string; lineKhz?: unknown }
   fieldStore?: boolean
   scanConversion?: boolean
@@ -99,9 +127,11 @@ export interface CaseUnit {
   gainDb?: number
   leaks?: { from: string; to: string; db: number }[]
   reverseDb?: number
-  needsDc?: unknown
-  dcOut?: string[]
+  needsDc?: Stated
+  dcOut?: Stated
+  dcPass?: Stated
   triggersOn?: string
+  combFilter?: boolean
   mains?: string
 }
 
@@ -113,7 +143,7 @@ export interface CasePiece {
   cores?: number
   carries?: string[]
   wired?: string[]
-  volts?: string[]
+  volts?: (string | { volt: string })[]
   joins?: string[]
   gives?: string
   terminates?: unknown
@@ -132,9 +162,13 @@ export interface CaseQuestion {
   aim?: string
 }
 
+export const isPiece = (item: CaseUnit | CasePiece): item is CasePiece => 'ends' in item
+
+export type PieceUse = string | { id: string; first: string }
+
 export interface CaseHop {
   from: string
-  by: (string | { id: string; first: string })[]
+  by: PieceUse[]
   to: string
   signal: string
 }
@@ -163,12 +197,19 @@ export interface CaseWarning {
   words: string
 }
 
+export interface CaseMissing {
+  code: string
+  words: string
+  item: CaseUnit | CasePiece
+}
+
 export interface CaseAnswer {
   paths: CasePath[]
   settings: CaseSetting[]
   quality: CaseQuality
-  missing?: { code: string; words: string; item: CaseUnit | CasePiece }[]
+  missing?: CaseMissing[]
   warnings?: CaseWarning[]
+  claims?: string[]
   below?: string
 }
 
@@ -183,6 +224,17 @@ export interface HookupAnswer {
   fallback?: { words: string; paths?: CasePath[]; quality: CaseQuality }
 }
 
+export interface MustNot {
+  code: string
+  item?: string
+  port?: string
+  on?: string
+  to?: string
+  setting?: string
+  warning?: string
+  claim?: string
+}
+
 export interface Expected {
   possible: 'yes' | 'with-purchase' | 'no'
   best?: CasePath[]
@@ -190,16 +242,7 @@ export interface Expected {
   missing?: { code: string; words: string; item?: CaseUnit | CasePiece }[]
   quality: CaseQuality
   warnings?: { code: string; words: string }[]
-  mustNot?: {
-    code: string
-    item?: string
-    port?: string
-    on?: string
-    to?: string
-    setting?: string
-    warning?: string
-    claim?: string
-  }[]
+  mustNot?: MustNot[]
 }
 
 export interface HookupCase extends CaseQuestion {

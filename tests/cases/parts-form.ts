@@ -10,8 +10,18 @@ import type {
   PieceModel,
   Port,
 } from '@coaxwain/models'
-import { channelsIn, isSingle, type Circuit, type PlanPart, type ScanId } from '@coaxwain/signal'
+import {
+  channelsIn,
+  isSingle,
+  SCANS,
+  type Circuit,
+  type PictureSignal,
+  type PlanId,
+  type PlanPart,
+  type ScanId,
+} from '@coaxwain/signal'
 import type {
+  CaseAnswer,
   CaseControl,
   CaseDoes,
   CaseMode,
@@ -22,6 +32,7 @@ import type {
   CaseUnit,
   When,
 } from './form'
+import { caseChannel, channelsOfPlan } from './translate'
 
 /** A thing that is bought, in the shelf form of a case. */
 export function pieceInCaseForm(id: string, model: PieceModel): CasePiece {
@@ -56,6 +67,57 @@ export function unitInCaseForm(id: string, model: DeviceModel): CaseUnit {
   }
 }
 
+interface Pictures {
+  readonly arriving: PictureSignal | null
+  readonly leaving: PictureSignal | null
+}
+
+/**
+ * A box with no more than what it is bought for: the sockets that are used, the picture that comes and the one
+ * that leaves, and the controls that matter for that. What else it can do decides nothing.
+ */
+export function asUsed(unit: CaseUnit, answer: CaseAnswer, pictures: Pictures): CaseUnit {
+  const refs = new Set(answer.paths.flatMap((p) => p.hops.flatMap((h) => [h.from, h.to])))
+  const stands = new Map(
+    answer.settings.filter((s) => s.on === unit.id).map((s) => [s.set, s.to] as const),
+  )
+  const isOff = ({ when: condition }: { when?: When }): boolean =>
+    Object.entries(condition ?? {}).some(([control, positions]) => {
+      const at = stands.get(control)
+      return at !== undefined && !positions.includes(at)
+    })
+  const ports = unit.ports
+    .filter((p) => refs.has(`${unit.id}:${p.id}`))
+    .map((p) => {
+      const signal = p.dir === 'in' ? pictures.arriving : pictures.leaving
+      const modes = likeThis(
+        (p.modes ?? []).filter((m) => !isOff(m)),
+        signal,
+      )
+      return p.modes ? { ...p, modes } : p
+    })
+  const kept = new Set(ports.map((p) => p.id))
+  const does = (unit.does ?? []).filter((d) => kept.has(d.from) && kept.has(d.to) && !isOff(d))
+  const text = JSON.stringify({ ports, does })
+  return {
+    ...unit,
+    ports,
+    does,
+    settings: (unit.settings ?? []).filter((c) => text.includes(JSON.stringify(c.name))),
+    leaks: (unit.leaks ?? []).filter((l) => kept.has(l.from) && kept.has(l.to)),
+  }
+}
+
+/** Modes of the raster and colour of a picture; all of them where none is like it. */
+function likeThis(modes: readonly CaseMode[], picture: PictureSignal | null): CaseMode[] {
+  const own = picture?.scan
+  if (!picture || own === undefined) return [...modes]
+  const sameRaster = (scan: string): boolean => SCANS[scan as ScanId].lineKhz === SCANS[own].lineKhz
+  const alike = modes.filter((m) => sameRaster(m.scan))
+  const equal = alike.filter((m) => m.colour === picture.colour)
+  return equal.length > 0 ? equal : alike.length > 0 ? alike : [...modes]
+}
+
 const when = (...conditions: (Condition | undefined)[]): When | undefined => {
   const all = conditions.flatMap((c) => c ?? []).filter((c) => c.control !== 'power')
   return all.length > 0 ? Object.fromEntries(all.map((c) => [c.control, [...c.in]])) : undefined
@@ -70,6 +132,10 @@ const jacksAt = (model: DeviceModel, port: string): Jack[] =>
   model.jacks.filter((j) => j.contacts.some((c) => c.port === port))
 
 const SPLIT: Partial<Record<Circuit, string>> = {
+  r: 'rgb-r',
+  g: 'rgb-g',
+  b: 'rgb-b',
+  csync: 'sync',
   y: 'ypbpr-y',
   pb: 'ypbpr-pb',
   pr: 'ypbpr-pr',
@@ -94,7 +160,7 @@ const WHOLE: Partial<Record<Jack['form'], string>> = {
 function signalsAt(model: DeviceModel, port: string): string[] {
   const signals = jacksAt(model, port).flatMap((jack) => {
     const whole = WHOLE[jack.form]
-    if (whole) return [whole]
+    if (whole && jack.contacts.every((c) => c.port === port)) return [whole]
     return jack.contacts.filter((c) => c.port === port).flatMap((c) => SPLIT[c.circuit] ?? [])
   })
   return [...new Set(signals)]
@@ -159,26 +225,39 @@ function giveModes(fn: ModelFunction, give: Give, row: PictureGive): CaseMode[] 
   return scans.map((scan) => withWhen({ scan, colour }, fn.while, give.while, row.while))
 }
 
-const PLANS: readonly (readonly [
-  plan: PlanPart['plan'],
-  names: string | undefined,
-  code: string,
-])[] = [
-  ['us-broadcast', undefined, 'us-air'],
-  ['us-cable-std', undefined, 'us-cable'],
-  ['uk-uhf', undefined, 'uk-uhf'],
-  ['ccir-west-europe', '21..69', 'ccir-uhf'],
-  ['australia', '0,1', 'au-vhf'],
-  ['australia', undefined, 'au'],
-  ['japan-broadcast', undefined, 'jp'],
-]
+/** Codes of the form for the plans of the product, below 300 MHz and above. */
+const PLANS: Partial<Record<PlanId, readonly [vhf: string, uhf: string, whole: string]>> = {
+  'us-broadcast': ['us-air-vhf', 'us-air-uhf', 'us-air'],
+  'us-cable-std': ['us-cable', 'us-cable', 'us-cable'],
+  'uk-uhf': ['uk-uhf', 'uk-uhf', 'uk-uhf'],
+  'uk-405': ['uk-405', 'uk-405', 'uk-405'],
+  'ccir-west-europe': ['ccir-vhf', 'ccir-uhf', 'ccir-uhf'],
+  australia: ['au-vhf', 'au-uhf', 'au'],
+  'japan-broadcast': ['jp-vhf', 'jp-uhf', 'jp'],
+  france: ['fr-uhf', 'fr-uhf', 'fr-uhf'],
+}
+
+const UHF_MHZ = 300
 
 function planCodes(part: PlanPart): string[] {
-  if (part.plan === 'ccir-west-europe' && part.names === undefined) return ['ccir-vhf', 'ccir-uhf']
-  const found =
-    PLANS.find(([plan, names]) => plan === part.plan && names === part.names) ??
-    PLANS.find(([plan, names]) => plan === part.plan && names === undefined)
-  return found ? [found[2]] : []
+  const [vhf, uhf] = PLANS[part.plan] ?? []
+  if (vhf === undefined || uhf === undefined) return []
+  return [...new Set(channelsIn(part).map((c) => (c.lowerMhz < UHF_MHZ ? vhf : uhf)))]
+}
+
+/** The one code for all channels of an output. */
+function planCode(part: PlanPart): string {
+  const [first, ...others] = planCodes(part)
+  return others.length > 0 ? (PLANS[part.plan]?.[2] ?? '') : (first ?? '')
+}
+
+/** Channels by the names that the form gives them. */
+function channelNames(part: PlanPart): string[] {
+  const code = planCode(part)
+  const own = channelsOfPlan(code)
+  return channelsIn(part).flatMap(
+    (c) => own.find((o) => caseChannel(code, o.name).name === c.name)?.name ?? [],
+  )
 }
 
 function rfOf(model: DeviceModel, jack: Jack): CaseRf | undefined {
@@ -198,8 +277,8 @@ function rfOf(model: DeviceModel, jack: Jack): CaseRf | undefined {
         : undefined
   if (!part) return undefined
   const made: CaseRf = {
-    plan: planCodes(part)[0] ?? 'us-air',
-    channels: channelsIn(part).map((c) => c.name),
+    plan: planCode(part),
+    channels: channelNames(part),
     system: first.rf.system,
     colour: first.rf.colours.filter((c) => c !== 'mono' && c !== 'ntsc-j'),
     sideband: first.rf.sideband === 'double' ? 'dsb' : 'vsb',
@@ -291,7 +370,7 @@ function controlInCaseForm(control: Control): CaseControl[] {
         {
           name: control.key,
           class: 'channel',
-          choices: channelsIn(control.carriers.part).map((c) => c.name),
+          choices: channelNames(control.carriers.part),
         },
       ]
     case 'tuned-to':

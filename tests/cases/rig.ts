@@ -1,28 +1,21 @@
 import { isSingle, mates, type Connector } from '@coaxwain/signal'
-import type {
-  CaseAnswer,
-  CaseHop,
-  CasePath,
-  CasePiece,
-  CasePort,
-  CaseUnit,
-  HookupCase,
-  When,
-} from './form'
-
-const isPiece = (item: CaseUnit | CasePiece): item is CasePiece => 'ends' in item
-
-const isSound = (s: string): boolean => s.startsWith('audio-')
-
-/** The unit that a setting follows: "as UNIT". */
-const followed = (to: string): string | undefined => /^as (.+)$/.exec(to)?.[1]
-
-export const pieceId = (use: CaseHop['by'][number]): string =>
-  typeof use === 'string' ? use : use.id
+import type { CaseHop, CasePath, CasePiece, CasePort, HookupCase, When } from './form'
+import {
+  isOffAir,
+  pieceId,
+  portName,
+  standsOf,
+  unitOf,
+  type Bench,
+  type Stand,
+} from './judging/bench'
+import { isAerial } from './judging/carriers'
+import { speaks } from './judging/ears'
+import { isMultiway, isSound } from './judging/facts'
 
 const meets = (a: string, b: string): boolean => mates(a as Connector, b as Connector)
 
-/** Composite is also taken where RGB takes its sync; a mono sound stands for either channel. */
+/** A mono sound stands for either channel. */
 function carriesSignal(port: CasePort, signal: string): boolean {
   if (port.signals.includes(signal)) return true
   return isSound(signal) && port.signals.some(isSound)
@@ -31,6 +24,18 @@ function carriesSignal(port: CasePort, signal: string): boolean {
 function carries(piece: CasePiece, signal: string): boolean {
   const limited = piece.wired ?? piece.carries
   return !limited || limited.some((s) => s === signal || (isSound(s) && isSound(signal)))
+}
+
+/** What is wrong with the two sockets of a connection by themselves. */
+function socketFaults({ from: giving, to: taking, signal }: CaseHop, a: CasePort, b: CasePort) {
+  const where = `${giving} to ${taking}`
+  const faults: readonly (readonly [is: boolean, words: string])[] = [
+    [a.works === false || b.works === false, `a socket that does not work: ${where}`],
+    [Boolean(a.taken) || Boolean(b.taken), `a socket that is taken: ${where}`],
+    [a.dir === 'in' || b.dir === 'out', `wrong direction: ${where}`],
+    [!carriesSignal(a, signal) || !carriesSignal(b, signal), `no ${signal} on both of ${where}`],
+  ]
+  return faults.flatMap(([is, words]) => (is ? [words] : []))
 }
 
 /** An end at which a link goes on, and whether there is a lead in it yet. */
@@ -70,38 +75,21 @@ class Tally {
   }
 }
 
-/** An answer laid out on the bench of its case. */
+/** The wiring of an answer on the bench of its case: plugs, cores, directions, and what is open. */
 export class Rig {
-  private readonly units = new Map<string, CaseUnit>()
-  private readonly pieces = new Map<string, CasePiece>()
-  private readonly hops: readonly CaseHop[]
+  private readonly stands: readonly Stand[]
 
   constructor(
     private readonly c: HookupCase,
-    private readonly answer: CaseAnswer,
+    private readonly bench: Bench,
   ) {
-    this.units.set('source', c.source).set('display', c.display)
-    const bought = (answer.missing ?? []).map((m) => m.item)
-    for (const item of [...c.shelf, ...bought]) {
-      if (isPiece(item)) this.pieces.set(item.id, item)
-      else this.units.set(item.id ?? '', item)
-    }
-    this.hops = answer.paths.flatMap((p) => p.hops)
-  }
-
-  unit(id: string): CaseUnit | undefined {
-    return this.units.get(id)
-  }
-
-  port(ref: string): CasePort | undefined {
-    const [unit = '', port] = ref.split(':')
-    return this.units.get(unit)?.ports.find((p) => p.id === port)
+    this.stands = standsOf(bench)
   }
 
   /** Whether the unit that a setting follows is on this bench at all. */
   has(to: string): boolean {
-    const as = followed(to)
-    return as === undefined || this.units.has(as)
+    const as = /^as (.+)$/.exec(to)?.[1]
+    return as === undefined || this.bench.unit(as) !== undefined
   }
 
   /** The same position by name, or the same channel where one of them follows another unit. */
@@ -110,60 +98,77 @@ export class Rig {
   }
 
   private channel(to: string): string {
-    const as = followed(to)
+    const as = /^as (.+)$/.exec(to)?.[1]
     if (as === undefined) return to
-    const sent = this.answer.settings.find((s) => s.on === as && s.class === 'channel')?.to
+    const sent = this.bench.answer.settings.find(
+      (s) => s.on === as && this.bench.meant(s)?.class === 'channel',
+    )?.to
     return sent ?? this.onlyChannel(as) ?? to
   }
 
   private onlyChannel(unit: string): string | null {
-    const channels = this.units.get(unit)?.ports.flatMap((p) => p.rf?.channels ?? []) ?? []
+    const channels = this.bench.unit(unit)?.ports.flatMap((p) => p.rf?.channels ?? []) ?? []
     return channels.length === 1 ? (channels[0] ?? null) : null
   }
 
   /** The sockets of a unit that an answer uses, off-air paths aside. */
   private sockets(paths: readonly CasePath[], unit: string): string {
     const refs = paths
-      .filter((p) => !p.purpose.startsWith('off-air'))
+      .filter((p) => !isOffAir(p))
       .flatMap((p) => p.hops.flatMap((h) => [h.from, h.to]))
       .filter((r) => r.startsWith(`${unit}:`))
     return [...new Set(refs)].sort().join()
   }
 
   sameSockets(unit: string): boolean {
-    const mine = this.sockets(this.answer.paths, unit)
+    const mine = this.sockets(this.bench.answer.paths, unit)
     return mine !== '' && mine === this.sockets(this.c.expected.best ?? [], unit)
   }
 
   wiring(): string[] {
     return [
-      ...this.hops.flatMap((h) => this.hop(h)),
+      ...this.bench.hops.flatMap((h) => this.hop(h)),
       ...this.occupancy(),
-      ...this.answer.paths.flatMap((p) => this.path(p)),
-      ...this.answer.paths.flatMap((p) => this.open(p)),
+      ...this.bench.answer.paths.flatMap((p) => this.begins(p)),
+      ...this.passages(),
     ]
   }
 
+  /** Every path must be open; of several programmes of the source one. */
+  private passages(): string[] {
+    const { paths } = this.bench.answer
+    const programmes = paths.filter((p) => this.isProgramme(p))
+    const several = new Set(programmes.map((p) => p.hops[0]?.from)).size > 1
+    const shut = (p: CasePath): string[] => [...this.path(p), ...this.open(p)]
+    if (!several) return paths.flatMap(shut)
+    const others = paths.filter((p) => !programmes.includes(p)).flatMap(shut)
+    const tried = programmes.map(shut)
+    return tried.some((t) => t.length === 0) ? others : [...others, ...tried.flat()]
+  }
+
+  private isProgramme({ purpose, hops }: CasePath): boolean {
+    const from = hops[0] && this.bench.port(hops[0].from)
+    return purpose.startsWith('picture') && from?.rf !== undefined
+  }
+
   private hop(h: CaseHop): string[] {
-    const from = this.port(h.from)
-    const to = this.port(h.to)
+    const from = this.bench.port(h.from)
+    const to = this.bench.port(h.to)
     if (!from || !to) return [`no such socket: ${from ? h.to : h.from}`]
-    const found: string[] = []
-    if (from.works === false || to.works === false)
-      found.push(`a socket that does not work: ${h.from} to ${h.to}`)
-    if (from.taken || to.taken) found.push(`a socket that is taken: ${h.from} to ${h.to}`)
-    if (from.dir === 'in' || to.dir === 'out') found.push(`wrong direction: ${h.from} to ${h.to}`)
-    if (!carriesSignal(from, h.signal) || !carriesSignal(to, h.signal)) {
-      found.push(`no ${h.signal} on both ${h.from} and ${h.to}`)
-    }
-    return [...found, ...this.plugs(h, from, to)]
+    const toDisplay = unitOf(h.to) === 'display'
+    const live = this.bench.question.display.liveChassis === true && toDisplay && h.signal !== 'rf'
+    return [
+      ...socketFaults(h, from, to),
+      ...(live ? [`${h.to} is joined to the mains`] : []),
+      ...this.plugs(h, from, to),
+    ]
   }
 
   /** Leads and adapters in order, each one way round that fits. */
   private plugs(h: CaseHop, from: CasePort, to: CasePort): string[] {
     let ends: LooseEnd[] = [{ at: from.connector, lead: from.mount === 'lead' }]
     for (const id of h.by.map(pieceId)) {
-      const piece = this.pieces.get(id)
+      const piece = this.bench.pieces.get(id)
       if (!piece) return [`no such lead: ${id}`]
       if (!carries(piece, h.signal)) return [`${id} does not carry ${h.signal}`]
       ends = ends.flatMap((end) => farEnds(piece, end))
@@ -176,69 +181,76 @@ export class Rig {
   private occupancy(): string[] {
     const meetings = new Tally()
     const cores = new Tally()
-    for (const h of this.hops) {
+    for (const h of this.bench.hops) {
       const chain = h.by.map(pieceId)
-      meetings.note(h.from, `${chain[0] ?? h.to}>${h.to.split(':')[0]}`)
-      meetings.note(h.to, chain.at(-1) ?? h.from)
+      meetings.note(h.from, this.meeting(h.from, chain[0], h.to))
+      meetings.note(h.to, this.meeting(h.to, chain.at(-1), h.from))
       for (const id of chain) cores.note(id, `${h.from} ${h.to}`)
     }
-    const crowded = meetings.over((ref) => {
-      const port = this.port(ref)
-      return port && isSingle(port.connector as Connector) ? 1 : Infinity
-    })
-    const short = cores.over((id) => coresOf(this.pieces.get(id)))
     return [
-      ...crowded.map((ref) => `two plugs in ${ref}`),
-      ...short.map((id) => `too few cores in ${id}`),
+      ...meetings.over(() => 1).map((ref) => `two plugs in ${ref}`),
+      ...cores
+        .over((id) => coresOf(this.bench.pieces.get(id)))
+        .map((id) => `too few cores in ${id}`),
+    ]
+  }
+
+  /** What a connector meets: a piece, and which of its single plugs, or the port of a captive lead. */
+  private meeting(ref: string, piece: string | undefined, far: string): string {
+    if (piece === undefined) return far
+    const port = this.bench.port(ref)
+    const one = (port && isMultiway(port)) || this.bench.pieces.get(piece)?.joins !== undefined
+    return one ? piece : `${piece}>${far}`
+  }
+
+  /** Where paths begin and end: at the source or an aerial; at the display, at what speaks, or where they join. */
+  private begins(p: CasePath): string[] {
+    const [start] = p.hops
+    const end = p.hops.at(-1)
+    if (!start || !end) return [`${p.purpose} has no connections`]
+    const starts = isOffAir(p)
+      ? isAerial(this.bench.unit(unitOf(start.from)))
+      : unitOf(start.from) === 'source'
+    const last = unitOf(end.to)
+    const ends = isOffAir(p) || p.joins !== undefined || last === 'display'
+    return [
+      ...(starts ? [] : [`${p.purpose} begins at ${start.from}`]),
+      ...(ends || speaks(this.bench.unit(last)) ? [] : [`${p.purpose} ends at ${end.to}`]),
     ]
   }
 
   /** From hop to hop the unit does it. */
   private path(p: CasePath): string[] {
-    if (p.purpose.startsWith('off-air')) return []
+    if (isOffAir(p)) return []
     const found: string[] = []
-    const [start] = p.hops
-    if (start && !start.from.startsWith('source:'))
-      found.push(`${p.purpose} does not begin at the source`)
     p.hops.slice(1).forEach((h, i) => {
       const before = p.hops[i]!
-      const [unit = ''] = h.from.split(':')
-      if (!before.to.startsWith(`${unit}:`)) found.push(`${p.purpose} jumps to ${h.from}`)
-      else if (!this.does(unit, before.to, h.from))
-        found.push(`${unit} does not pass ${before.to} to ${h.from}`)
+      if (!before.to.startsWith(`${unitOf(h.from)}:`)) found.push(`${p.purpose} jumps to ${h.from}`)
+      else if (!this.does(before.to, h.from))
+        found.push(`${unitOf(h.from)} does not pass ${before.to} to ${h.from}`)
     })
     return found
   }
 
-  private does(unit: string, from: string, to: string): boolean {
-    const [, a] = from.split(':')
-    const [, b] = to.split(':')
-    return (this.units.get(unit)?.does ?? []).some(
-      (d) => d.from === a && d.to === b && this.holds(unit, d.when),
+  private does(from: string, to: string): boolean {
+    const unit = unitOf(from)
+    const edges = (this.bench.unit(unit)?.does ?? []).filter(
+      (d) => d.from === portName(from) && d.to === portName(to),
     )
+    return this.stands.every((stand) => edges.some((d) => stand.holds(unit, d.when)))
   }
 
   /** A control that the answer does not set may stand anywhere. */
   private holds(unit: string, when: When | undefined): boolean {
-    return Object.entries(when ?? {}).every(([name, positions]) => {
-      const control = this.units.get(unit)?.settings?.find((s) => s.name === name)
-      if (control?.class === 'auto') return true
-      const given = this.answer.settings.find(
-        (s) => s.on === unit && (s.set === name || s.set === control?.class),
-      )
-      return given
-        ? positions.includes(given.to)
-        : (control?.choices ?? []).every((c) => positions.includes(c))
-    })
+    return this.stands.every((stand) => stand.holds(unit, when))
   }
 
   private open(p: CasePath): string[] {
-    if (p.purpose.startsWith('off-air')) return []
+    if (isOffAir(p)) return []
     return p.hops.flatMap((h) =>
-      [h.from, h.to].flatMap((ref) => {
-        const [unit = ''] = ref.split(':')
-        return this.holds(unit, this.port(ref)?.when) ? [] : [`${ref} is not open as set`]
-      }),
+      [h.from, h.to].flatMap((ref) =>
+        this.holds(unitOf(ref), this.bench.port(ref)?.when) ? [] : [`${ref} is not open as set`],
+      ),
     )
   }
 }

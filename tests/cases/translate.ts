@@ -21,10 +21,12 @@ import type {
 import { POWER_KEY } from '@coaxwain/models'
 import type { OffAir, Question, Snapshot, Unit } from '@coaxwain/shelf'
 import {
+  channelsIn,
   CONNECTOR_FACTS,
   familyOf,
   FORM_CIRCUITS,
   isSingle,
+  nominalFieldHz,
   type Circuit,
   type Colour,
   type Connector,
@@ -38,16 +40,20 @@ import {
   type ScanId,
   type SwitchVolt,
 } from '@coaxwain/signal'
-import type {
-  CaseControl,
-  CaseDoes,
-  CaseMode,
-  CasePiece,
-  CasePort,
-  CaseQuestion,
-  CaseTuner,
-  CaseUnit,
-  When,
+import { withImplied } from './implied'
+import {
+  isPiece,
+  stated,
+  type CaseControl,
+  type CaseDoes,
+  type CaseMode,
+  type CasePiece,
+  type CasePort,
+  type CaseQuestion,
+  type CaseTuner,
+  type CaseUnit,
+  type Stated,
+  type When,
 } from './form'
 
 /** A case in the product's own types. Ids of units, ports, controls and leads stay the case's own. */
@@ -154,6 +160,20 @@ function planPart(plan: string): PlanPart {
   return { plan: part.plan, names: `${ownName(name, from)}..${ownName(name, to)}` }
 }
 
+/** A channel of a case in the product's own plan. */
+export const caseChannel = (plan: string, channel: string): { plan: PlanId; name: string } => ({
+  plan: planPart(plan).plan,
+  name: ownName(plan.split(':')[0] ?? plan, channel),
+})
+
+/** Channels of a plan of the form, by the case's own names, with their vision carriers. */
+export function channelsOfPlan(plan: string): { name: string; mhz: number }[] {
+  const prefix = ownName(plan.split(':')[0] ?? plan, '1').slice(0, -1)
+  return channelsIn(planPart(plan)).flatMap((c) =>
+    c.visionMhz === null ? [] : [{ name: c.name.slice(prefix.length), mhz: c.visionMhz }],
+  )
+}
+
 const DIGITAL: Readonly<Record<string, DigitalSystem>> = {
   '8vsb': 'atsc',
   atsc: 'atsc',
@@ -189,6 +209,21 @@ const sides = (port: CasePort): ('in' | 'out')[] =>
 const sameWhen = (a: CasePort, b: CasePort): boolean =>
   JSON.stringify(a.when ?? {}) === JSON.stringify(b.when ?? {})
 
+/** What holds while both hold; null where they cannot hold at once. */
+function bothHold(a: When | undefined, b: When | undefined): When | null {
+  const joined: Record<string, readonly string[]> = { ...a }
+  for (const [control, positions] of Object.entries(b ?? {})) {
+    const before = joined[control]
+    const left = before ? positions.filter((p) => before.includes(p)) : positions
+    if (left.length === 0) return null
+    joined[control] = left
+  }
+  return joined
+}
+
+const allHold = (whens: readonly (When | undefined)[]): When | null =>
+  whens.reduce<When | null>((all, when) => all && bothHold(all, when), {})
+
 function wholeJacks(port: CasePort, dir: 'in' | 'out'): CaseJack[] {
   return port.signals.flatMap((signal): CaseJack[] => {
     const form = WHOLE_FORMS[signal]
@@ -205,8 +240,28 @@ function wholeJacks(port: CasePort, dir: 'in' | 'out'): CaseJack[] {
   })
 }
 
+/** Where a monitor says from which port it takes its sync. */
+const syncFacts = (unit: CaseUnit) => [
+  ...stated(unit.syncFrom),
+  ...unit.ports.flatMap((p) => stated(p.syncFrom)),
+]
+
+/** While this holds the sync of RGB is taken from the ports of a jack; null where it never is. */
+function syncStands(unit: CaseUnit, form: Form, ports: readonly CasePort[]): When | null {
+  const said = syncFacts(unit)
+  if (said.length === 0 || !['rgbs', 'rgsb'].includes(form)) return {}
+  const wire = form === 'rgbs' ? ports.at(-1) : ports[0]
+  const own = said.find((s) => s.value === wire?.id)
+  return own ? (own.when ?? {}) : null
+}
+
+/** RGB with a sync wire of its own is no RGB with sync on green, unless the unit can be told so. */
+const isSyncedApart = (unit: CaseUnit, made: readonly CaseJack[], lead: CasePort): boolean =>
+  syncFacts(unit).length === 0 && made.some((m) => m.jack.form === 'rgbs' && m.ports[0] === lead)
+
 /** Forms over several ports: the n-th port of each signal goes with the n-th of the others. */
-function splitJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
+function splitJacks(unit: CaseUnit, dir: 'in' | 'out'): CaseJack[] {
+  const ports = unit.ports.filter((p) => sides(p).includes(dir))
   const made: CaseJack[] = []
   for (const { form, signals } of SPLIT_FORMS) {
     const [first = '', ...rest] = signals
@@ -218,8 +273,10 @@ function splitJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
         return alike.length > 0 && alike.length < with_.length ? alike[0] : with_[n]
       })
       if (others.some((p) => p === undefined)) return
-      if (form === 'rgsb' && made.some((m) => m.jack.form === 'rgbs' && m.ports[0] === lead)) return
       const all = [lead, ...(others as CasePort[])]
+      const sync = syncStands(unit, form, all)
+      const when = sync && allHold([...all.map((p) => p.when), sync])
+      if (!when || (form === 'rgsb' && isSyncedApart(unit, made, lead))) return
       made.push({
         jack: {
           key: `${all.map((p) => p.id).join('+')} ${form} ${dir}`,
@@ -231,7 +288,7 @@ function splitJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
         },
         ports: all,
         lead: first,
-        when: lead.when,
+        when,
       })
     })
   }
@@ -240,8 +297,41 @@ function splitJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
 
 const hasSound = (port: CasePort, signal: string): boolean => port.signals.includes(signal)
 
+/** The track that is wanted of a source that plays two programmes. */
+function wantedTrack(unit: CaseUnit): string | undefined {
+  const { tracks, wanted } = unit.content ?? {}
+  const inside =
+    tracks && typeof tracks === 'object' ? (tracks as { wanted?: unknown }).wanted : undefined
+  const named = wanted ?? inside
+  return typeof named === 'string' ? named : undefined
+}
+
+/** Of two programmes only the wanted one is sound; a port that carries the other is none for this question. */
+function trackJacks(unit: CaseUnit, wanted: string): CaseJack[] {
+  return unit.ports.flatMap((port) => {
+    const isSound = port.signals.some((s) => s.startsWith('audio-'))
+    if (!isSound || port.dir === 'in') return []
+    const said = stated(port.tracks)
+    const own = said.length === 0 ? [{ when: undefined }] : said.filter((s) => s.value === wanted)
+    return own.map(({ when }, i) => ({
+      jack: {
+        key: `${port.id} track ${i}`,
+        form: 'sound' as const,
+        dir: 'out' as const,
+        contacts: [{ circuit: 'audio-mono' as const, port: port.id }],
+      },
+      ports: [port],
+      lead: 'sound',
+      when: bothHold(port.when, when) ?? undefined,
+    }))
+  })
+}
+
 /** Sound jacks: left and right that belong together, or one port for all there is. */
-function soundJacks(ports: readonly CasePort[], dir: 'in' | 'out'): CaseJack[] {
+function soundJacks(unit: CaseUnit, dir: 'in' | 'out'): CaseJack[] {
+  const wanted = wantedTrack(unit)
+  if (wanted !== undefined && dir === 'out') return trackJacks(unit, wanted)
+  const ports = unit.ports.filter((p) => sides(p).includes(dir))
   const rights = ports.filter(
     (p) => hasSound(p, 'audio-r') && !hasSound(p, 'audio-l') && !hasSound(p, 'audio-mono'),
   )
@@ -299,8 +389,8 @@ function jacksOf(unit: CaseUnit): CaseJack[] {
     const ports = unit.ports.filter((p) => sides(p).includes(dir))
     return [
       ...ports.flatMap((p) => wholeJacks(p, dir)),
-      ...splitJacks(ports, dir),
-      ...soundJacks(ports, dir),
+      ...splitJacks(unit, dir),
+      ...soundJacks(unit, dir),
     ]
   })
 }
@@ -323,10 +413,54 @@ function portOf(unit: CaseUnit, port: CasePort, jacks: readonly CaseJack[], colu
     ...(port.ohm === undefined ? {} : { impedanceOhm: port.ohm }),
     origin: 'factory',
     isolated: unit.liveChassis === true && !aerial ? 'no' : 'yes',
-    ...(port.dcVolts ? { suppliesDcVolts: port.dcVolts } : {}),
-    standsDc: 'yes',
+    ...directCurrentOf(unit, port),
+    ...loadOf(unit, port),
+    ...(port.loops === undefined ? {} : { loopsTo: port.loops }),
     at: { face: 'back', row: 0, column },
   }
+}
+
+/** Ports that a fact of a unit names: all of them when it is simply true. */
+function namesPort(unit: CaseUnit, fact: Stated, port: CasePort): boolean {
+  if (fact === true) return true
+  const words = stated(fact).map((s) => String(s.value))
+  const named = unit.ports.some((p) => words.includes(p.id))
+  return words.includes(port.id) || (words.includes('true') && !named)
+}
+
+/** Supply of an aerial's own amplifier when the figure is not stated (common practice, no source). */
+const USUAL_SUPPLY_VOLTS = 12
+
+/** Direct current that a port puts on its cable, wants from it, or must not get. */
+function directCurrentOf(
+  unit: CaseUnit,
+  port: CasePort,
+): Pick<Port, 'suppliesDcVolts' | 'needsDcVolts' | 'standsDc'> {
+  const isRf = port.signals.includes('rf')
+  const gives = isRf && namesPort(unit, unit.dcOut, port)
+  const volts = port.dcVolts ?? (gives ? USUAL_SUPPLY_VOLTS : 0)
+  const isAerial = !unit.ports.some((p) => p.dir !== 'out')
+  const wants = isRf && namesPort(unit, unit.needsDc, port)
+  return {
+    ...(volts === 0 ? {} : { suppliesDcVolts: volts }),
+    ...(wants ? { needsDcVolts: USUAL_SUPPLY_VOLTS } : {}),
+    standsDc: isRf && isAerial && !wants ? 'no' : 'yes',
+  }
+}
+
+const is75 = (value: unknown): boolean => value === undefined || /75/.test(String(value))
+
+/** How an input ends its line: always, never, or as one control is set. */
+function loadOf(unit: CaseUnit, port: CasePort): Pick<Port, 'load'> {
+  const said = stated(port.load)
+  const ends = said.find((s) => is75(s.value))
+  if (said.length === 0) return {}
+  const [control, positions] = Object.entries(ends?.when ?? {})[0] ?? []
+  const known = unit.settings?.some((c) => c.name === control)
+  const position75 = positions?.[0]
+  if (control === undefined || position75 === undefined || !known)
+    return { load: { kind: ends ? '75' : 'high' } }
+  return { load: { kind: 'switch', control: controlKey(control), position75 } }
 }
 
 // ---------------------------------------------------------------- controls
@@ -354,7 +488,7 @@ const WAYS: Readonly<Record<string, 'numbers' | 'presets' | 'knob' | 'turret' | 
 const isShape = (control: CaseControl): boolean =>
   control.class === 'mode' && (control.choices ?? []).includes('16:9')
 
-function controlOf(unit: CaseUnit, control: CaseControl): Control[] {
+function controlOf(unit: CaseUnit, control: CaseControl, plays: readonly ScanId[]): Control[] {
   const base = {
     key: controlKey(control.name),
     label: control.name,
@@ -368,7 +502,9 @@ function controlOf(unit: CaseUnit, control: CaseControl): Control[] {
     case 'tuned-to':
       return tunedControl(unit, control)
     case 'trim':
-      return [{ ...base, kind: 'trim', quantity: trimQuantity(control.name), ...standing(control) }]
+      return [
+        { ...base, kind: 'trim', quantity: trimQuantity(control), ...standing(control, plays) },
+      ]
     case 'auto':
       return [
         {
@@ -393,16 +529,36 @@ function controlOf(unit: CaseUnit, control: CaseControl): Control[] {
   }
 }
 
-function trimQuantity(name: string): 'fine-tuning' | 'video-level' | 'vertical-hold' | 'other' {
-  if (/fine tun/i.test(name)) return 'fine-tuning'
-  if (/video level/i.test(name)) return 'video-level'
-  return /vertical hold/i.test(name) ? 'vertical-hold' : 'other'
+type Quantity = 'fine-tuning' | 'video-level' | 'sound-level' | 'vertical-hold' | 'other'
+
+/** By the measure in which it is known how a trimmer stands, else by its name. */
+const QUANTITIES: readonly (readonly [told: RegExp, quantity: Quantity])[] = [
+  [/fine.?tun/i, 'fine-tuning'],
+  [/depth|video.?(level|gain)|percent/i, 'video-level'],
+  [/(audio|sound).?level/i, 'sound-level'],
+  [/field|\bv(ert(ical)?)?[ .-]*hold/i, 'vertical-hold'],
+]
+
+function trimQuantity({ name, now }: CaseControl): Quantity {
+  const [measure] = Object.keys(now ?? {})
+  const told = [measure, name].flatMap((words) =>
+    QUANTITIES.flatMap(([is, quantity]) => (words !== undefined && is.test(words) ? quantity : [])),
+  )
+  return told[0] ?? 'other'
 }
 
-function standing({ now, aim }: CaseControl): { stands?: number; aim?: number } {
-  const [stands] = Object.values(now ?? {})
-  const [wanted] = Object.values(aim ?? {})
-  return stands === undefined || wanted === undefined ? {} : { stands, aim: wanted }
+/** How a trimmer stands and how it should: as stated, and for a field rate that of the source. */
+function standing(
+  control: CaseControl,
+  plays: readonly ScanId[],
+): { stands?: number; aim?: number } {
+  const [stands] = Object.values(control.now ?? {})
+  if (stands === undefined) return {}
+  const rates = new Set(plays.map(nominalFieldHz))
+  const own =
+    trimQuantity(control) === 'vertical-hold' && rates.size === 1 ? [...rates][0] : undefined
+  const aim = Object.values(control.aim ?? {})[0] ?? own
+  return aim === undefined ? { stands } : { stands, aim }
 }
 
 /** What moves an automatic control, read from its words. */
@@ -516,18 +672,35 @@ function tunerRows(tuner: CaseTuner): AcceptRow[] {
   return variants.length > 0 ? variants.map((v) => row({ ...tuner, ...v }, v.when)) : [row(tuner)]
 }
 
-const shapeAt = (port: CasePort | undefined): string | undefined =>
-  typeof port?.shape === 'string' ? port.shape : undefined
-
-function pictureRows(jack: CaseJack, modes: readonly CaseMode[]): PictureGive[] {
-  if (modes.length === 0) return [{ scan: 'same', colour: 'same' }]
-  return modes.map((m) => ({
-    scan: m.scan as ScanId,
-    colour: m.colour as Colour,
-    while: condition(m.when),
-    ...(m.converts ? { converts: true } : {}),
-    ...(shapeAt(jack.ports[0]) ? { shape: shapeAt(jack.ports[0]) as PictureGive['shape'] } : {}),
+/** How wide material is laid out, with what it depends on: of the port, else of the unit. */
+function shapesOf(unit: CaseUnit, port: CasePort | undefined) {
+  const own = stated(port?.shape)
+  return (own.length > 0 ? own : stated(unit.shape)).map((s) => ({
+    shape: s.value as NonNullable<PictureGive['shape']>,
+    when: s.when,
   }))
+}
+
+function pictureRows(unit: CaseUnit, jack: CaseJack, modes: readonly CaseMode[]): PictureGive[] {
+  const shapes = shapesOf(unit, jack.ports[0])
+  if (modes.length === 0) return [{ scan: 'same', colour: 'same' }]
+  return modes.flatMap((m) =>
+    (shapes.length > 0 ? shapes : [{ shape: undefined, when: undefined }]).flatMap(
+      ({ shape, when }): PictureGive[] => {
+        const stands = bothHold(m.when, when)
+        if (!stands) return []
+        return [
+          {
+            scan: m.scan as ScanId,
+            colour: m.colour as Colour,
+            while: condition(stands),
+            ...(m.converts ? { converts: true } : {}),
+            ...(shape ? { shape } : {}),
+          },
+        ]
+      },
+    ),
+  )
 }
 
 function rfRows(port: CasePort): RfGive[] {
@@ -554,19 +727,53 @@ function rfRows(port: CasePort): RfGive[] {
   return rf.variants?.length ? rf.variants.map((v) => row({ ...rf, ...v }, v.when)) : [row(rf)]
 }
 
-const voltsOf = (port: CasePort | undefined): SwitchVolt[] =>
-  (port?.volts ?? []).map((v) => v.volt as SwitchVolt)
+interface Volts {
+  readonly volts: readonly SwitchVolt[]
+  readonly when: When
+}
 
-function give(jack: CaseJack, extra: When | undefined, modes = modesFor(jack)): Give {
+/** What is put on the switching pins, once for each way in which the controls may stand that decide it. */
+function voltsOf(unit: CaseUnit, port: CasePort | undefined): Volts[] {
+  const said = (port?.volts ?? []).map((v) =>
+    typeof v === 'string' ? { volt: v, when: undefined } : v,
+  )
+  const decisive = [...new Set(said.flatMap((v) => Object.keys(v.when ?? {})))]
+  const ways = decisive.reduce<When[]>(
+    (all, control) => {
+      const choices = unit.settings?.find((c) => c.name === control)?.choices ?? []
+      return all.flatMap((when) => choices.map((c) => ({ ...when, [control]: [c] })))
+    },
+    [{}],
+  )
+  return ways.map((when) => ({
+    when,
+    volts: said.filter((v) => bothHold(when, v.when) !== null).map((v) => v.volt as SwitchVolt),
+  }))
+}
+
+/** What leaves by a jack; more than once where switching voltages depend on controls. */
+function gives(
+  unit: CaseUnit,
+  jack: CaseJack,
+  extra: When | undefined,
+  modes = modesFor(jack),
+): Give[] {
   const port = jack.ports[0]!
   const rf = jack.jack.form === 'rf' ? rfRows(port) : []
-  return {
-    jack: jack.jack.key,
-    while: both(jack.when, extra),
-    picture: pictureRows(jack, modes),
-    ...(rf.length > 0 ? { rf } : {}),
-    volts: voltsOf(port),
-  }
+  return voltsOf(unit, port).flatMap(({ volts, when }): Give[] => {
+    const stands = allHold([jack.when, extra, when])
+    const open = modes.filter((m) => bothHold(m.when, stands ?? {}) !== null)
+    if (!stands || (modes.length > 0 && open.length === 0)) return []
+    return [
+      {
+        jack: jack.jack.key,
+        while: condition(stands),
+        picture: pictureRows(unit, jack, open),
+        ...(rf.length > 0 ? { rf } : {}),
+        volts,
+      },
+    ]
+  })
 }
 
 const isSoundJack = (jack: CaseJack): boolean => jack.jack.form === 'sound'
@@ -583,9 +790,12 @@ function playing(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction {
   const pictures = outs.filter(isPicture).flatMap((j): Give[] => {
     const modes = modesFor(j).filter(serves)
     if (j.jack.form === 'rf')
-      return [{ ...give(j, undefined, modes), picture: rfPictures(j, anywhere) }]
+      return gives(unit, j, besideLoop(unit, j), modes).map((g) => ({
+        ...g,
+        picture: rfPictures(j, anywhere),
+      }))
     const given = modes.length > 0 ? modes : modesFor(j).length > 0 ? [] : anywhere
-    return given.length > 0 ? [give(j, undefined, given)] : []
+    return given.length > 0 ? gives(unit, j, undefined, given) : []
   })
   const withHdmi = pictures.map((g) =>
     outs.find((j) => j.jack.key === g.jack)?.jack.form === 'hdmi'
@@ -605,6 +815,17 @@ function playing(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction {
     gives: [...withHdmi, ...sounds],
     power: 'on',
   }
+}
+
+/** While a switch lets the aerial pass straight to an output, what is played does not leave by it. */
+function besideLoop(unit: CaseUnit, jack: CaseJack): When | undefined {
+  const loop = (unit.does ?? []).find(
+    (d) => d.how === 'loop' && jack.ports.some((p) => p.id === d.to) && d.when,
+  )
+  const [control, positions] = Object.entries(loop?.when ?? {})[0] ?? []
+  const choices = unit.settings?.find((s) => s.name === control)?.choices ?? []
+  const others = choices.filter((c) => !positions?.includes(c))
+  return control === undefined || others.length === 0 ? undefined : { [control]: others }
 }
 
 /** A source with nothing but RF says its colours; its lines are those of its system. */
@@ -731,6 +952,7 @@ function soundFunctions(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFuncti
         {
           key: `${speaks ? 'speaks' : 'sound'} ${from.jack.key}`,
           kind: speaks ? 'makes-sound' : 'selects',
+          while: condition(from.when),
           needs: [from.jack.key],
           accepts: [],
           gives,
@@ -802,10 +1024,14 @@ function pictureGives({ unit, jacks, from, how }: Passing): Give[] {
     .flatMap((to): Give[] => {
       const found = (feeds(unit, from, to) ?? []).filter((d) => d.how === how)
       if (found.length === 0) return []
-      const made = give(to, mergeWhen(found))
+      const made = gives(unit, to, mergeWhen(found))
       return how === 'loop'
-        ? [{ jack: made.jack, while: made.while, picture: [{ scan: 'same', colour: 'same' }] }]
-        : [made]
+        ? made.map(({ jack, while: stands }) => ({
+            jack,
+            while: stands,
+            picture: [{ scan: 'same', colour: 'same' }],
+          }))
+        : made
     })
 }
 
@@ -874,14 +1100,18 @@ function screenOf(unit: CaseUnit): DisplayFacts['screen'] {
   return isTube(unit) ? 'tube-colour' : 'projector'
 }
 
-function displayFacts(unit: CaseUnit): DisplayFacts | undefined {
-  if (!unit.deflection) return undefined
-  const { sound } = unit
+/** A display whose rates are not stated follows whatever its inputs list. */
+const ANY_RATE: NonNullable<CaseUnit['deflection']> = { lineKhz: [[10, 120]], fieldHz: [45, 125] }
+
+function displayFacts(unit: CaseUnit, role: Role): DisplayFacts | undefined {
+  if (!unit.deflection && role !== 'display') return undefined
+  const { sound, deflection = ANY_RATE } = unit
   return {
     screen: screenOf(unit),
     deflection: {
-      lineKhz: unit.deflection.lineKhz,
-      fieldHz: unit.deflection.fieldHz.map((hz) => [hz, hz] as const),
+      lineKhz: deflection.lineKhz,
+      // The ends of what it follows are listed; nothing of the form lies between two television rates.
+      fieldHz: [[Math.min(...deflection.fieldHz), Math.max(...deflection.fieldHz)]],
       fixed: isTube(unit),
     },
     shape: unit.aspect === '16:9' || unit.kind === 'flat' ? '16:9' : '4:3',
@@ -911,7 +1141,7 @@ const HOME_VOLTS: readonly (readonly [prefix: string, volts: number])[] = [
 ]
 
 /** Stated with a unit, or those of the country of a display; anything else takes what there is. */
-function mainsOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceModel['mains'] {
+function mainsOf(unit: CaseUnit, role: Role): DeviceModel['mains'] {
   const stated = /(\d+)\s*V/.exec(unit.mains ?? '')
   const plan = unit.ports.find((p) => p.tuner)?.tuner?.plans[0] ?? ''
   const home =
@@ -920,9 +1150,11 @@ function mainsOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMode
   return { volts: volts === undefined ? [100, 240] : [volts, volts], hz: [50, 60] }
 }
 
-function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceModel {
+type Role = 'source' | 'display' | 'box'
+
+function deviceOf(unit: CaseUnit, role: Role, plays: readonly ScanId[]): DeviceModel {
   const jacks = jacksOf(unit)
-  const display = displayFacts(unit)
+  const display = displayFacts(unit, role)
   const functions =
     role === 'source'
       ? [playing(unit, jacks), ...receiving(jacks), ...boxFunctions(unit, jacks)]
@@ -941,7 +1173,7 @@ function deviceOf(unit: CaseUnit, role: 'source' | 'display' | 'box'): DeviceMod
     groups: [],
     ports: unit.ports.map((p, i) => portOf(unit, p, jacks, i)),
     jacks: jacks.map((j) => j.jack).filter((j) => j.contacts.length > 0),
-    controls: (unit.settings ?? []).flatMap((c) => controlOf(unit, c)),
+    controls: (unit.settings ?? []).flatMap((c) => controlOf(unit, c, plays)),
     functions,
     leaks: leaksOf(unit),
     chassis: unit.liveChassis ? 'live' : 'isolated',
@@ -963,10 +1195,10 @@ function leaksOf(unit: CaseUnit): DeviceModel['leaks'] {
   return [...stated, ...others]
 }
 
-/** A source that receives by itself, such as a converter box, is fed by the aerial. */
+/** A source that decodes stations by itself, such as a converter box, is fed by the aerial. */
 const receiving = (jacks: readonly CaseJack[]): ModelFunction[] =>
   jacks
-    .filter((j) => j.jack.form === 'rf' && j.jack.dir === 'in' && j.ports[0]?.tuner?.control)
+    .filter((j) => j.jack.form === 'rf' && j.jack.dir === 'in' && decodes(j.ports[0]?.tuner))
     .map((j) => ({
       key: `watches ${j.jack.key}`,
       kind: 'tunes',
@@ -977,9 +1209,18 @@ const receiving = (jacks: readonly CaseJack[]): ModelFunction[] =>
       power: 'on',
     }))
 
+/** Something else hangs on a port that is taken: for this question it is not there. */
+const withoutTaken = (unit: CaseUnit): CaseUnit => ({
+  ...unit,
+  ports: unit.ports.filter((p) => !p.taken),
+})
+
+const decodes = (tuner: CaseTuner | undefined): boolean =>
+  tuner?.control !== undefined && tuner.digital.length > 0
+
 /** What is recorded as not working is dead, the rest works: a case knows no doubt. */
 function unitOf(id: string, unit: CaseUnit, device: DeviceModel): Unit {
-  const dead = new Set(unit.ports.filter((p) => p.works === false || p.taken).map((p) => p.id))
+  const dead = new Set(unit.ports.filter((p) => p.works === false).map((p) => p.id))
   return {
     uid: id,
     model: id,
@@ -1041,7 +1282,9 @@ function pieceOf(piece: CasePiece): PieceModel {
     lossDb: piece.lossDb ?? 0,
     ...(ohm[0] === ohm[1] ? {} : { impedanceOhm: [ohm[0]!, ohm[1]!] as const }),
     mixes: piece.joins !== undefined,
-    suppliesVolts: (piece.volts ?? []) as SwitchVolt[],
+    suppliesVolts: (piece.volts ?? []).map(
+      (v) => (typeof v === 'string' ? v : v.volt) as SwitchVolt,
+    ),
     blocksDc: false,
   }
 }
@@ -1105,15 +1348,13 @@ function usualWires(multi: Connector, fansOut: boolean): readonly Circuit[] {
 
 // ---------------------------------------------------------------- whole cases
 
-const isPiece = (item: CaseUnit | CasePiece): item is CasePiece => 'ends' in item
-
 function protectionOf(list: readonly string[] | undefined): Protection {
   if (list?.includes('hdcp')) return 'hdcp'
   return list?.includes('analogue-agc') ? 'agc-pulses' : 'none'
 }
 
 /** The plan in which the numbers of stations are to be read: that of the tuners at hand. */
-function airPlan(question: CaseQuestion): string {
+export function airPlan(question: CaseQuestion): string {
   const units = [
     question.display,
     question.source,
@@ -1123,34 +1364,58 @@ function airPlan(question: CaseQuestion): string {
     u.ports.flatMap((p) => p.tuner?.plans ?? (p.rf ? [p.rf.plan] : [])),
   )
   const air = plans.filter((p) => !p.startsWith('us-cable'))
-  return (air[0] ?? 'us-air').split(':')[0] ?? 'us-air'
+  const first = (air[0] ?? 'us-air').split(':')[0] ?? 'us-air'
+  const region = first.replace(/-(air-)?(vhf|uhf)$/, first.startsWith('us-air') ? '-air' : '')
+  return PLAN_PARTS[region] ? region : first
 }
 
 function offAir(question: CaseQuestion): OffAir[] {
-  const first = airPlan(question)
-  const region = first.replace(/-(air-)?(vhf|uhf)$/, first.startsWith('us-air') ? '-air' : '')
+  const region = airPlan(question)
   return question.environment.offAir.map((station) => {
-    const plan = PLAN_PARTS[region] ? region : first
+    const { plan, name } = caseChannel(region, station.channel)
     return {
-      plan: planPart(plan).plan,
-      channel: ownName(plan, station.channel),
+      plan,
+      channel: name,
       kind: station.kind,
       ...(station.levelDbmv === undefined ? {} : { levelDbmv: station.levelDbmv }),
     }
   })
 }
 
+/** Every scan in which the source may play. */
+function scansPlayed(source: CaseUnit): ScanId[] {
+  const recorded = source.content?.scans
+  const modes = source.ports.flatMap((p) => p.modes ?? [])
+  return modes
+    .filter((m) => !recorded || m.converts === true || recorded.includes(m.scan))
+    .map((m) => m.scan as ScanId)
+}
+
 const wantsGun = (question: CaseQuestion): boolean =>
-  question.source.needs?.includes('light-gun') === true || /light.?gun/i.test(question.aim ?? '')
+  [question.source.needs ?? []].flat().includes('light-gun') ||
+  /light.?gun/i.test(question.aim ?? '')
+
+/** Nothing can be put into it any more. */
+const isOccupied = ({ ports }: CaseUnit): boolean => {
+  const ins = ports.filter((p) => p.dir !== 'out')
+  return ins.length > 0 && ins.every((p) => p.taken)
+}
 
 /** Turns the question part of a case into a shelf and a question; sees nothing of what is expected. */
 export function translate(question: CaseQuestion): Translated {
-  const boxes = question.shelf.filter((s): s is CaseUnit => !isPiece(s))
   const pieces = question.shelf.filter(isPiece)
-  const devices: [string, CaseUnit, DeviceModel][] = [
-    [SOURCE, question.source, deviceOf(question.source, 'source')],
-    [DISPLAY, question.display, deviceOf(question.display, 'display')],
-    ...boxes.map((b): [string, CaseUnit, DeviceModel] => [b.id ?? '', b, deviceOf(b, 'box')]),
+  const plays = scansPlayed(question.source)
+  const device = (id: string, whole: CaseUnit, role: Role): [string, CaseUnit, DeviceModel] => {
+    const unit = withoutTaken(withImplied(whole))
+    return [id, unit, deviceOf(unit, role, plays)]
+  }
+  const devices = [
+    device(SOURCE, question.source, 'source'),
+    device(DISPLAY, question.display, 'display'),
+    ...question.shelf.flatMap((s) =>
+      // A box with everything taken that leads into it is no aerial.
+      isPiece(s) || isOccupied(s) ? [] : [device(s.id ?? '', s, 'box')],
+    ),
   ]
   const pieceUnit = (p: CasePiece): Unit => ({
     ...unitOf(p.id, { what: '', ports: [] }, EMPTY),
@@ -1173,7 +1438,10 @@ export function translate(question: CaseQuestion): Translated {
     question: {
       format: 1,
       source: { unit: SOURCE, playing: PLAYS },
-      material: { protection: protectionOf(question.source.content?.protection) },
+      material: {
+        protection: protectionOf([question.source.content?.protection ?? []].flat()),
+        ...(wantedTrack(question.source) === undefined ? {} : { twoProgrammes: true }),
+      },
       display: { unit: DISPLAY },
       demands: {
         ...(question.environment.antennaUsed ? { keepAerial: true } : {}),

@@ -23,8 +23,7 @@ export const CAUTIONS = {
   'caution.two-programmes': 'The two sound tracks are two programmes.',
   'caution.two-programmes.more': 'Take the one that is wanted; added together both are spoilt.',
   'caution.gun-needs-tube': 'The light gun works only on a picture tube drawn as the source draws.',
-  'caution.gun-needs-tube.more':
-    'No converter, no flat screen and no [recorder] on the way.',
+  'caution.gun-needs-tube.more': 'No converter, no flat screen and no [recorder] on the way.',
   'caution.splitter-radiates': 'Do not join the [aerial] and this signal with the {name}.',
   'caution.splitter-radiates.more':
     'It would let the signal up to the [aerial], where it may not be radiated.',
