@@ -2,12 +2,12 @@ import { readFileSync } from 'node:fs'
 import { checkHookup } from '@coaxwain/checker'
 import { findHookups } from '@coaxwain/matcher'
 import { checkModel } from '@coaxwain/models'
-import { partsFor } from '@coaxwain/patterns'
+import { ORDINARY_PARTS } from '@coaxwain/patterns'
 import { describe, expect, it } from 'vitest'
 import { toCaseAnswer } from './answer'
 import type { CaseFile, HookupCase } from './form'
 import { judge } from './judge'
-import { DISPLAY, translate } from './translate'
+import { translate } from './translate'
 
 const casesIn = (file: string): readonly HookupCase[] => {
   const text = readFileSync(new URL(`./data/${file}`, import.meta.url), 'utf8')
@@ -16,9 +16,8 @@ const casesIn = (file: string): readonly HookupCase[] => {
 
 const solve = (c: HookupCase) => {
   const translated = translate(c)
-  const parts = partsFor(translated.snapshot.models[DISPLAY])
-  const answer = findHookups(translated.snapshot, translated.question, { parts })
-  return { translated, answer, judged: judge(c, toCaseAnswer(c, answer, parts)) }
+  const answer = findHookups(translated.snapshot, translated.question, { parts: ORDINARY_PARTS })
+  return { translated, answer, judged: judge(c, toCaseAnswer(c, answer, ORDINARY_PARTS)) }
 }
 
 /** Each case is solved once for all that is asked of its answer. */

@@ -1,10 +1,10 @@
 import { readFileSync } from 'node:fs'
 import { findHookups } from '@coaxwain/matcher'
-import { partsFor } from '@coaxwain/patterns'
+import { ORDINARY_PARTS } from '@coaxwain/patterns'
 import { toCaseAnswer } from './answer'
 import type { CaseFile, HookupAnswer, HookupCase } from './form'
 import { judge } from './judge'
-import { DISPLAY, translate } from './translate'
+import { translate } from './translate'
 
 /** `npm run cases -- [--json] [--only hookups|channels|levels] FILE...` */
 const args = process.argv.slice(2)
@@ -33,9 +33,8 @@ function answerTo(c: HookupCase): HookupAnswer {
     ...(aim === undefined ? {} : { aim }),
   }
   const translated = translate(question)
-  const parts = partsFor(translated.snapshot.models[DISPLAY])
-  const answer = findHookups(translated.snapshot, translated.question, { parts })
-  return toCaseAnswer(question, answer, parts)
+  const answer = findHookups(translated.snapshot, translated.question, { parts: ORDINARY_PARTS })
+  return toCaseAnswer(question, answer, ORDINARY_PARTS)
 }
 
 /** A case that cannot be read is named and left out, so that the others are answered all the same. */

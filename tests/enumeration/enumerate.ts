@@ -1,4 +1,4 @@
-import { jackOf, type Key, type ModelFunction } from '@coaxwain/models'
+import { jackOf, type Key, type ModelFunction, type Port } from '@coaxwain/models'
 import {
   LIMITS,
   type Hookup,
@@ -51,6 +51,9 @@ interface Standing {
 export function enumerate(snapshot: Snapshot, question: Question): Hookup[] {
   return new Enumerator(benchOf(snapshot, question)).run()
 }
+
+const hasVoltage = (port: Port): boolean =>
+  port.suppliesDcVolts !== undefined || port.needsDcVolts !== undefined
 
 /**
  * Tries everything on a small shelf, chains with few boxes first. What cannot be plugged is not followed, nor
@@ -131,9 +134,7 @@ export class Enumerator {
       const wires = this.wiring.wires(out, into, pairs)
       if (!wires) return []
       const hasDc = wires.some(
-        (w) =>
-          portIn(out.box, w.from.port).suppliesDcVolts !== undefined ||
-          portIn(into.box, w.to.port).needsDcVolts !== undefined,
+        (w) => hasVoltage(portIn(out.box, w.from.port)) || hasVoltage(portIn(into.box, w.to.port)),
       )
       return variantsOf(wires, asksVolts, hasDc).map((own) => [...chain.wires, ...own])
     })

@@ -7,7 +7,7 @@ import type {
   ModelFunction,
 } from '@coaxwain/models'
 import { POWER_KEY } from '@coaxwain/models'
-import type { Hookup, Question, Snapshot, Uid } from '@coaxwain/shelf'
+import type { Hookup, LineEnd, Link, Question, Snapshot, Uid } from '@coaxwain/shelf'
 import { finding, type Finding, type FindingCode } from './finding'
 import { Positions, ShelfView } from './shelf-view'
 
@@ -18,12 +18,19 @@ export interface Bench {
   readonly view: ShelfView
   readonly positions: Positions
   readonly found: Finding[]
+  /** What is plugged for other uses at the same time. */
+  readonly beside?: { readonly links: readonly Link[]; readonly ends: readonly LineEnd[] }
 }
 
-export const benchOf = (snapshot: Snapshot, question: Question, hookup: Hookup): Bench => ({
+export const benchOf = (
+  snapshot: Snapshot,
+  question: Question,
+  hookup: Hookup,
+  view: ShelfView = new ShelfView(snapshot),
+): Bench => ({
   question,
   hookup,
-  view: new ShelfView(snapshot),
+  view,
   positions: new Positions(hookup),
   found: [],
 })

@@ -1,4 +1,4 @@
-import type { Key } from '@coaxwain/models'
+import type { Key, Port } from '@coaxwain/models'
 import type { Leg, Stop, Uid } from '@coaxwain/shelf'
 import { doubtOf, formState, functionState } from '@coaxwain/shelf'
 import { isSoundCircuit } from '@coaxwain/signal'
@@ -106,14 +106,19 @@ function handshakesUnknown(bench: Bench): number {
   return new Set(unknown.map(({ stop }) => stop.unit)).size
 }
 
-/** Joins by which a voltage comes up a cable to an input of which nobody knows whether it stands it. */
+/** Nobody knows whether one end stands what the other supplies. */
+const mayHarm = (supply: Port | null, load: Port | null): boolean =>
+  (supply?.suppliesDcVolts ?? 0) !== 0 &&
+  (load?.standsDc ?? 'unknown') === 'unknown' &&
+  load?.needsDcVolts === undefined
+
+/** Joins by which a voltage comes up a cable to a socket of which nobody knows whether it stands it. */
 function dcUnknown({ hookup, view }: Bench): number {
   const doubtful = hookup.links.filter((l) => {
     const from = view.port(l.from.unit, l.from.port)
     const to = view.port(l.to.unit, l.to.port)
     const blocked = l.pieces.some((p) => view.piece(p.model)?.blocksDc)
-    const arrives = (from?.suppliesDcVolts ?? 0) !== 0 && !blocked
-    return arrives && (to?.standsDc ?? 'unknown') === 'unknown' && to?.needsDcVolts === undefined
+    return !blocked && (mayHarm(from, to) || mayHarm(to, from))
   })
   return new Set(doubtful.map((l) => `${l.from.unit} ${l.to.unit}`)).size
 }

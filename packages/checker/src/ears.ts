@@ -59,11 +59,14 @@ const MOST_WIRES = 12
 export class Ears {
   /** Sound inside the picture signal as it enters a function, by unit. */
   private readonly riding = new Map<Uid, { fn: Key; pair: Pair }>()
+  /** What has been followed already, so that rings and parallel ways cost no more than once. */
+  private readonly known = new Map<string, Channels>()
 
   constructor(private readonly bench: Bench) {}
 
   /** Notes what of the sound in the picture signal a function hears. */
   hearsPicture({ unit, fn }: Stage, sound: Sound): void {
+    this.known.clear()
     this.riding.set(unit, { fn: fn.key, pair: pairOf(sound) })
   }
 
@@ -90,6 +93,13 @@ export class Ears {
 
   private wire(to: PortRef, circuit: Circuit, depth: number): Channels {
     if (depth > MOST_WIRES) return NOTHING
+    const name = `${to.unit} ${to.port} ${circuit} ${depth}`
+    const carried = this.known.get(name) ?? this.follow(to, circuit, depth)
+    this.known.set(name, carried)
+    return carried
+  }
+
+  private follow(to: PortRef, circuit: Circuit, depth: number): Channels {
     return this.bench.hookup.links
       .filter((l) => l.to.unit === to.unit && l.to.port === to.port)
       .flatMap((l) =>

@@ -1,5 +1,6 @@
 import { automatic, choice, at, OTHERWISE, pluggedInto } from '@coaxwain/models/build'
 import { describe, expect, it } from 'vitest'
+import { RULES } from './check-hookup'
 import { FINDINGS, type FindingCode } from './finding'
 import {
   codes,
@@ -216,6 +217,15 @@ describe('hookups that are right', () => {
   })
 })
 
+/** Whether the code of a fault is found in what it spoils, and no other fault. */
+function isFound(code: FindingCode, rules = RULES): boolean {
+  const { rig, spoil, also } = FAULTS[code]
+  const built = rig()
+  spoil(built)
+  const found = codes(built, rules).filter((c) => c === code || !isClaim(c))
+  return [...found].sort().join() === [code, ...also].sort().join()
+}
+
 describe('a hookup that is wrong in one way', () => {
   it.each(FINDINGS)('%s is found, and no other fault', (code) => {
     const { rig, spoil, also } = FAULTS[code]
@@ -223,5 +233,14 @@ describe('a hookup that is wrong in one way', () => {
     spoil(built)
     const found = codes(built).filter((c) => c === code || !isClaim(c))
     expect(found.sort()).toEqual([code, ...also].sort())
+  })
+})
+
+describe('a check with one rule left out', () => {
+  it.each(FINDINGS)('without %s: just the faults that need it go unseen', (code) => {
+    const rules = new Set(FINDINGS.filter((c) => c !== code))
+    const unseen = FINDINGS.filter((c) => !isFound(c, rules))
+    const needing = FINDINGS.filter((c) => c === code || FAULTS[c].also.includes(code))
+    expect(unseen).toEqual(needing)
   })
 })

@@ -200,7 +200,7 @@ function sentOn({ bench, unit, device }: Stage, rf: RfGive): number | null {
 }
 
 /** Channels of the plan; of a screw that is turned, those whose carrier lies in its span. */
-const offeredBy = (carriers: Carriers): readonly Channel[] =>
+export const offeredBy = (carriers: Carriers): readonly Channel[] =>
   channelsIn(carriers.part).filter(
     ({ visionMhz }) =>
       carriers.kind === 'channels' ||

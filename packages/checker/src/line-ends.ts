@@ -21,7 +21,8 @@ const isAt = (a: PortRef, unit: string, port: string | undefined): boolean =>
 function checkEnd(bench: Bench, at: PortRef): Finding[] {
   const port = bench.view.port(at.unit, at.port)
   if (!port) return []
-  const goesOn = bench.hookup.links.some((l) => isAt(l.from, at.unit, port.loopsTo))
+  const links = [...bench.hookup.links, ...(bench.beside?.links ?? [])]
+  const goesOn = links.some((l) => isAt(l.from, at.unit, port.loopsTo))
   const ended = isEnded(bench, at, port)
   const details = { unit: at.unit, port: at.port }
   if (goesOn) return ended === 'here' ? [finding('line-ended-twice', details)] : []
@@ -45,7 +46,7 @@ function isEnded(bench: Bench, at: PortRef, port: Port): 'here' | 'on the loop' 
 
 function onTheLoop(bench: Bench, at: PortRef, { loopsTo }: Port): 'on the loop' | 'nowhere' | '?' {
   if (isHandedOn(bench, at) || loopsTo === undefined) return '?'
-  const ends = bench.hookup.ends ?? []
+  const ends = [...(bench.hookup.ends ?? []), ...(bench.beside?.ends ?? [])]
   return ends.some((e) => isAt(e, at.unit, loopsTo)) ? 'on the loop' : 'nowhere'
 }
 

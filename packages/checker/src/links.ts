@@ -22,6 +22,12 @@ export const checkLinks = (bench: Bench): Finding[] =>
     return 'code' in run ? [run] : checkRun(run)
   })
 
+/** What stands in the way of one circuit along a link. */
+export function hindrances(link: Link, carried: CarriedCircuit, view: ShelfView): Finding[] {
+  const run = runOf(link, 0, view)
+  return 'code' in run ? [run] : checkCircuit(run, carried)
+}
+
 /** A piece as it lies in a link: the plug by which one enters it, and the one by which one leaves. */
 interface Laid {
   readonly piece: PieceModel
@@ -179,8 +185,13 @@ function ohmThrough({ piece, use, entry }: Laid, ohm: number): number | null {
   return near === ohm ? far : null
 }
 
+/** A supply goes up the cable against the signal as well as with it. */
 function checkDc({ at, from, pieces, to }: Run): Finding[] {
-  const arrives = (from.suppliesDcVolts ?? 0) !== 0 && !pieces.some((p) => p.piece.blocksDc)
-  if (arrives && to.standsDc === 'no') return [finding('dc-not-stood', at)]
-  return !arrives && to.needsDcVolts !== undefined ? [finding('dc-missing', at)] : []
+  const blocked = pieces.some((p) => p.piece.blocksDc)
+  const judge = (supply: Port, load: Port): FindingCode[] => {
+    const arrives = (supply.suppliesDcVolts ?? 0) !== 0 && !blocked
+    if (load.needsDcVolts !== undefined) return arrives ? [] : ['dc-missing']
+    return arrives && load.standsDc === 'no' ? ['dc-not-stood'] : []
+  }
+  return [...judge(from, to), ...judge(to, from)].map((code) => finding(code, at))
 }

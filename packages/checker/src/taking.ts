@@ -42,23 +42,32 @@ export interface PictureIn {
   readonly volts: readonly SwitchVolt[]
 }
 
+/** Composite video beside red, green and blue is there as sync; what picture is on it nobody says. */
+const TAKES_RGB: ReadonlySet<PictureForm> = new Set(['rgbs', 'rgsb', 'rgbhv'])
+
 /** What of a picture reaches a jack by the wires that are there, or null where it makes no picture. */
 export function pictureInto(stage: Stage, jack: Jack, wave: Wave): PictureIn | null {
   const arrives = new Map(arriving(stage, jack).map((a) => [a.to, a.from]))
   const form = jack.form as PictureForm
+  if (wave.form === 'rgbs' && !TAKES_RGB.has(form)) return null
   const whole = { jack, wave, lumaOnly: false, volts: voltsInto(stage, jack, wave.volts) }
   if (form === 'hdmi' || form === 'dvi' || form === 'rf') {
     const [only] = [...arrives.values()]
     return only === (form === 'rf' ? 'rf' : 'tmds') ? whole : null
   }
-  const named = new Map<Circuit, Circuit>()
-  for (const { circuit } of jack.contacts) {
-    const from = arrives.get(circuit)
-    if (from) named.set(circuit === 'cvbs' && form === 'rgbs' ? 'csync' : circuit, from)
-  }
-  const arrival = arrivalAt(form, named)
+  const arrival = arrivalAt(form, named(jack, arrives))
   if (arrival.kind === 'whole') return whole
   return arrival.kind === 'luma-only' ? { ...whole, lumaOnly: true } : null
+}
+
+/** What arrives, by the circuits that the form expects: RGB may take its sync on a composite contact. */
+function named(jack: Jack, arrives: ReadonlyMap<Circuit, Circuit>): Map<Circuit, Circuit> {
+  const found = new Map<Circuit, Circuit>()
+  for (const { circuit } of jack.contacts) {
+    const from = arrives.get(circuit)
+    if (from) found.set(circuit === 'cvbs' && jack.form === 'rgbs' ? 'csync' : circuit, from)
+  }
+  return found
 }
 
 function voltsInto(stage: Stage, jack: Jack, given: readonly SwitchVolt[]): SwitchVolt[] {

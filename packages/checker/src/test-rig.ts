@@ -10,7 +10,7 @@ import type {
   Unit,
 } from '@coaxwain/shelf'
 import type { Circuit, PictureSignal } from '@coaxwain/signal'
-import { checkHookup } from './check-hookup'
+import { checkHookup, RULES } from './check-hookup'
 import type { FindingCode } from './finding'
 import { AERIAL, LOOP, MODULATOR, PIECES, PLAYER, SET, SWITCH } from './test-models'
 
@@ -37,9 +37,9 @@ export function laid(rig: Rig) {
 
 export const check = (rig: Rig) => checkHookup(...laid(rig))
 
-/** Codes of everything that is found, each once. */
-export const codes = (rig: Rig): FindingCode[] => [
-  ...new Set(check(rig).findings.map((f) => f.code)),
+/** Codes of everything that is found by some rules, each once. */
+export const codes = (rig: Rig, rules = RULES): FindingCode[] => [
+  ...new Set(checkHookup(...laid(rig), rules).findings.map((f) => f.code)),
 ]
 
 export function deviceIn(rig: Rig, uid: string): Loose<DeviceModel> {

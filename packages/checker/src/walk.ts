@@ -105,7 +105,8 @@ function leave({ stage, input, taken }: Entered, stop: Stop, ears: Ears): Wave |
 function seen({ stage, input, taken }: Entered, colourful: boolean): SeenPicture | null {
   const { display } = stage.device
   const { wave, lumaOnly, jack } = input
-  if (!display || stage.unit !== stage.bench.question.display.unit) {
+  const shows = stage.fn.kind === 'shows' && stage.unit === stage.bench.question.display.unit
+  if (!display || !shows) {
     stage.report('function-unknown', { function: stage.fn.key })
     return null
   }

@@ -69,6 +69,7 @@ export const FIELD_FAULTS = [
   'several-lines',
   'control-character',
   'given-twice',
+  'several-of-both',
   'not-yours-to-change',
   'unknown-reference',
   'in-use',

@@ -33,7 +33,7 @@ const offAirChannel = z.strictObject({
   levelDbmv: z.number().min(-80).max(100).optional(),
 })
 
-const questionDocument = z.strictObject({
+export const questionDocument = z.strictObject({
   format: z.literal(1),
   source: z.strictObject({ unit: uid, playing: key }),
   material: z.strictObject({
@@ -61,7 +61,7 @@ const thing = z.string().regex(/^([A-Za-z0-9_-]{22}|part:[A-Za-z0-9._-]{1,60})$/
 
 const portRef = z.strictObject({ unit: thing, port: key })
 
-const link = z.strictObject({
+export const linkDocument = z.strictObject({
   from: portRef,
   pieces: z
     .array(
@@ -144,7 +144,7 @@ const caution = z.strictObject({ code, details })
 
 const hookupDocument = z.strictObject({
   legs: z.array(leg).max(20),
-  links: z.array(link).max(200),
+  links: z.array(linkDocument).max(200),
   ends: z
     .array(z.strictObject({ unit: thing, port: key, model: thing, copy: z.int().min(0).max(1000) }))
     .max(40)

@@ -1,4 +1,6 @@
 import { z } from 'zod'
+import { arrangementReply, arrangementRequest } from './arrangements'
+import { hookupCheckReply, hookupCheckRequest } from './hookup-checks'
 import {
   answerReply,
   answerRequest,
@@ -414,6 +416,28 @@ export const ROUTES = {
     params: OF_COLLECTION,
     body: answerRequest,
     reply: answerReply,
+    status: 200,
+  },
+  arrange: {
+    ...PLAIN,
+    method: 'POST',
+    path: `${IN}/arrangements`,
+    who: 'hookups.read',
+    summary: 'Wire several sources to one display, or one source to several displays, once for all',
+    params: OF_COLLECTION,
+    body: arrangementRequest,
+    reply: arrangementReply,
+    status: 200,
+  },
+  checkChain: {
+    ...PLAIN,
+    method: 'POST',
+    path: `${IN}/hookup-checks`,
+    who: 'hookups.read',
+    summary: 'Have a chain that was wired by hand judged link by link; nothing is kept',
+    params: OF_COLLECTION,
+    body: hookupCheckRequest,
+    reply: hookupCheckReply,
     status: 200,
   },
   listHookups: {

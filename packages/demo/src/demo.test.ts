@@ -57,20 +57,22 @@ describe('ids', () => {
 })
 
 describe('collections', () => {
-  it('are two, with about 65 and 25 devices and a leads drawer each', () => {
-    const [alder, marram] = DEMO.collections.map((c) => devicesOf(c.units).length)
-    expect(DEMO.collections).toHaveLength(2)
+  it('are three, with about 65, 25 and 95 devices and a leads drawer each', () => {
+    const [alder, marram, sallow] = DEMO.collections.map((c) => devicesOf(c.units).length)
+    expect(DEMO.collections).toHaveLength(3)
     expect(alder).toBeGreaterThanOrEqual(60)
     expect(alder).toBeLessThanOrEqual(70)
     expect(marram).toBeGreaterThanOrEqual(22)
     expect(marram).toBeLessThanOrEqual(28)
+    expect(sallow).toBeGreaterThanOrEqual(90)
+    expect(sallow).toBeLessThanOrEqual(100)
     for (const c of DEMO.collections) {
       expect(c.units.filter(isPiece).length).toBeGreaterThanOrEqual(15)
     }
   })
 
-  it('hold ninety units and more without counting leads', () => {
-    expect(devicesOf(everyUnit).length).toBeGreaterThanOrEqual(90)
+  it('hold 180 units and more without counting leads', () => {
+    expect(devicesOf(everyUnit).length).toBeGreaterThanOrEqual(180)
   })
 
   it('use every model of the catalogue', () => {
@@ -106,6 +108,8 @@ describe('collections', () => {
   it('have a place inside a place', () => {
     const [alder] = DEMO.collections
     expect(alder && placePath(alder, 'loft-3')).toEqual(['Loft', 'crate 3'])
+    const sallow = DEMO.collections[2]
+    expect(sallow && placePath(sallow, 'rack-1')).toEqual(['Workshop', 'rack', 'shelf 1'])
   })
 })
 
@@ -186,12 +190,12 @@ describe('states', () => {
     expect(untried.length).toBeGreaterThanOrEqual(10)
   })
 
-  it('cover every working state and most holding states', () => {
+  it('cover every working state and every holding state', () => {
     expect(new Set(everyUnit.map((u) => u.working))).toEqual(
       new Set(['works', 'untested', 'faulty', 'parts-only']),
     )
     expect(new Set(everyUnit.map((u) => u.holding))).toEqual(
-      new Set(['kept', 'spare', 'listed', 'held', 'sold']),
+      new Set(['kept', 'spare', 'listed', 'held', 'sold', 'gone']),
     )
   })
 

@@ -1,6 +1,7 @@
 import { MODELS } from './catalogue/index'
 import { ALDER_LANE } from './collections/alder-lane/index'
 import { MARRAM_ROW } from './collections/marram-row/index'
+import { SALLOW_YARD } from './collections/sallow-yard/index'
 import { PEOPLE } from './collections/people'
 import type { DemoData } from './demo-data'
 
@@ -12,5 +13,5 @@ export { placePath, snapshotOf } from './snapshot'
 export const DEMO: DemoData = {
   models: MODELS,
   people: PEOPLE,
-  collections: [ALDER_LANE, MARRAM_ROW],
+  collections: [ALDER_LANE, MARRAM_ROW, SALLOW_YARD],
 }

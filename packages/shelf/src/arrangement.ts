@@ -1,5 +1,5 @@
 import type { Key } from '@coaxwain/models'
-import type { Demands, Hookup, Link, Material, OffAir } from './hookup'
+import type { Demands, Hookup, Link, Material, OffAir, Question } from './hookup'
 import type { Uid } from './unit'
 
 /**
@@ -18,6 +18,14 @@ export interface ArrangementQuestion {
   readonly avoid: readonly Uid[]
   readonly offAir: readonly OffAir[]
   readonly assumedLeads: readonly Uid[]
+}
+
+/** One question for each use, in the order in which an answer lists its uses. */
+export function questionsOfUses(question: ArrangementQuestion): Question[] {
+  const { sources, displays, ...rest } = question
+  return sources.flatMap(({ material, ...source }) =>
+    displays.map((display) => ({ ...rest, source, material, display })),
+  )
 }
 
 /** One thing that an arrangement is for, with its own positions. */

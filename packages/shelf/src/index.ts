@@ -1,4 +1,7 @@
+export * from './answered'
 export * from './arrangement'
+export * from './arrangement-steps'
+export * from './chain'
 export * from './fitted'
 export * from './hookup'
 export * from './limits'

@@ -1,6 +1,7 @@
 import { format, type Details } from './format'
 import type { Locale } from './locale'
 import { APP } from './messages/app'
+import { ARRANGEMENT } from './messages/arrangement'
 import { ASK } from './messages/ask'
 import { CAUTIONS } from './messages/cautions'
 import { CHECK } from './messages/check'
@@ -19,6 +20,7 @@ export const MESSAGES = {
   ...GENERAL,
   ...APP,
   ...ASK,
+  ...ARRANGEMENT,
   ...HOOKUP,
   ...CAUTIONS,
   ...CHECK,

@@ -5,9 +5,11 @@ import { ADAPTERS } from './adapters'
 import { AERIAL_SETS_525 } from './aerial-sets-525'
 import { AERIAL_SWITCHES } from './aerial-switches'
 import { AERIALS, SOUND } from './aerials-and-sound'
+import { BENCH_625 } from './bench-625'
 import { COMPUTERS } from './computers'
 import { CONSOLES } from './consoles'
 import { CONVERTERS } from './converters'
+import { COUNTER_625 } from './counter-625'
 import { DISTRIBUTION } from './distribution'
 import { LEADS } from './leads'
 import { MODULATORS } from './modulators'
@@ -19,6 +21,7 @@ import { SELECTORS } from './selectors'
 import { SETS_625 } from './sets-625'
 import { TRANSCODERS } from './transcoders'
 import { VIDEO_SETS_525 } from './video-sets-525'
+import { VISITORS_625 } from './visitors-625'
 
 const DEVICES = {
   ...PLAYERS,
@@ -38,6 +41,9 @@ const DEVICES = {
   ...DISTRIBUTION,
   ...AERIALS,
   ...SOUND,
+  ...VISITORS_625,
+  ...BENCH_625,
+  ...COUNTER_625,
 }
 
 const PIECES = { ...LEADS, ...ADAPTERS }

@@ -252,4 +252,22 @@ export const LEADS = {
     meantFor: ['audio-l', 'audio-r', 'audio-mono'],
     lengthMm: 1500,
   }),
+  /** Its contacts lie as the maker of one camera has them. */
+  'jack-av': piece({
+    name: '3.5 mm to 3 phono camera lead, 1.5 m',
+    kind: 'lead',
+    aliases: ['camera AV lead'],
+    a: ['jack35-plug'],
+    b: [
+      ['phono-plug', 'yellow'],
+      ['phono-plug', 'white'],
+      ['phono-plug', 'red'],
+    ],
+    wires: [
+      wire([0, 'cvbs'], [0, 'any']),
+      wire([0, 'audio-l'], [1, 'any']),
+      wire([0, 'audio-r'], [2, 'any']),
+    ],
+    lengthMm: 1500,
+  }),
 }

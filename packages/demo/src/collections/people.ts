@@ -23,6 +23,7 @@ export const INES = 'ines'
 export const DESMOND = 'desmond'
 export const WILMA = 'wilma'
 export const RAFE = 'rafe'
+export const NESSA = 'nessa'
 
 export const PEOPLE: readonly DemoPerson[] = [
   person(MAREN, 'Maren Ashlow', 'maren.ashlow@example.org', { locale: 'en-US' }),
@@ -33,4 +34,5 @@ export const PEOPLE: readonly DemoPerson[] = [
   person(RAFE, 'Rafe Lindell', 'rafe.lindell@example.com'),
   person('priya', 'Priya Sundelin', 'priya.sundelin@example.com', { site: 'catalogue-editor' }),
   person('anton', 'Anton Valekamp', 'anton.valekamp@example.com', { site: 'administrator' }),
+  person(NESSA, 'Nessa Thorngill', 'nessa.thorngill@example.com'),
 ]

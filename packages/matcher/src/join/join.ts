@@ -215,19 +215,28 @@ export class JoinTable {
   ): 'fine' | 'unknown' | 'harm' {
     let worst: 'fine' | 'unknown' = 'fine'
     for (const [i, wire] of wires.entries()) {
-      const from = out.ports[wire.fromPort] as FacePort
-      const to = into.ports[wire.toPort] as FacePort
       const blocked = (routing.hops[i] ?? []).some(
         (hop) => this.pieceAt(routing, hop.instance)?.piece.blocksDc,
       )
-      const arrives = from.suppliesDc && !blocked
-      if (to.needsDc && !arrives) return 'harm'
-      if (!arrives || to.needsDc) continue
-      if (to.standsDc === 'no') return 'harm'
-      if (to.standsDc === 'unknown') worst = 'unknown'
+      const ends = [
+        out.ports[wire.fromPort] as FacePort,
+        into.ports[wire.toPort] as FacePort,
+      ] as const
+      // A supply goes up the cable against the signal as well as with it.
+      const met = [supplied(ends[0], ends[1], blocked), supplied(ends[1], ends[0], blocked)]
+      if (met.includes('harm')) return 'harm'
+      if (met.includes('unknown')) worst = 'unknown'
     }
     return worst
   }
+}
+
+/** What the supply of one end of a wire, or its absence, does at the other. */
+function supplied(from: FacePort, to: FacePort, blocked: boolean): 'fine' | 'unknown' | 'harm' {
+  const arrives = from.suppliesDc && !blocked
+  if (to.needsDc) return arrives ? 'fine' : 'harm'
+  if (!arrives || to.standsDc === 'yes') return 'fine'
+  return to.standsDc === 'no' ? 'harm' : 'unknown'
 }
 
 const noWorse = (a: Join, b: Join): boolean =>

@@ -1,10 +1,11 @@
-import type { Model } from '@coaxwain/models'
+import type { DeviceModel, Model } from '@coaxwain/models'
 import type { Caution, Hookup, Purchase, Question, Snapshot, Uid, Unit } from '@coaxwain/shelf'
 import { SOUND_RANK, TIER } from '@coaxwain/signal'
 import { CompiledShelf } from '../compile/shelf'
 import { buildHookup } from '../result/build'
 import { compareHookups } from '../result/rank'
 import { Solver, type Solved } from '../search/solve'
+import { isSoldFor, receivedOffAir } from './sold-for'
 
 /** Things that can be bought, by key. */
 export type Parts = Readonly<Record<string, Model>>
@@ -62,6 +63,14 @@ function stock(shelf: CompiledShelf, parts: Parts): CompiledShelf {
   return made
 }
 
+/** Parts that nobody sells where a set was. */
+function notSoldFor(set: DeviceModel, parts: Parts): Uid[] {
+  const received = receivedOffAir(set)
+  return Object.entries(parts).flatMap(([key, part]) =>
+    part.type === 'device' && !isSoldFor(part, received) ? [partUid(key)] : [],
+  )
+}
+
 /** A second search over the shelf with the parts on it. */
 export class Shopping {
   private readonly solver: Solver
@@ -72,7 +81,9 @@ export class Shopping {
     parts: Parts,
     budget: number,
   ) {
-    this.solver = new Solver(stock(shelf, parts), question, budget)
+    const set = shelf.end(question.display.unit).variant.device
+    const avoid = [...question.avoid, ...notSoldFor(set, parts)]
+    this.solver = new Solver(stock(shelf, parts), { ...question, avoid }, budget)
   }
 
   step(expansions: number): void {

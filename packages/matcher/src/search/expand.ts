@@ -81,7 +81,7 @@ export class Expander {
     const silent = soundEnd(way.soundTo) ? inside === 'none' : sig.sound === 'none'
     if (way.soundTo !== null && silent) return []
     const apart = this.doubtApart(label, way)
-    if (apart === null || (label.aerial && !this.passesOn(way))) return []
+    if (apart === null || this.losesAerial(label, way)) return []
     const made: Label & { sound: SoundState } = {
       way,
       sig,
@@ -133,6 +133,11 @@ export class Expander {
     const carrier =
       core.carrier && this.tools.aerials?.besideStations(core.carrier, levelOf(made) ?? 0)
     return carrier ? this.tools.cores.intern({ ...core, carrier }) : null
+  }
+
+  /** An aerial goes on beside the picture up to the tuner that receives it. */
+  private losesAerial({ aerial }: Label, way: Way): boolean {
+    return aerial !== null && aerial.fn.tunedBy === undefined && !this.passesOn(way)
   }
 
   /** An aerial that has joined before goes on to the next unit, or is received there. */

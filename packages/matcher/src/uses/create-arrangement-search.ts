@@ -1,4 +1,4 @@
-import { LIMITS } from '@coaxwain/shelf'
+import { LIMITS, questionsOfUses } from '@coaxwain/shelf'
 import type {
   Arrangement,
   ArrangementAnswer,
@@ -77,12 +77,9 @@ const timingOf = ({ displays }: ArrangementQuestion): Timing =>
 
 /** One question for each pair of a source and a display. */
 function questionsOf(question: ArrangementQuestion): Question[] {
-  const { sources, displays, ...rest } = question
-  if (sources.length > 1 && displays.length > 1)
+  if (question.sources.length > 1 && question.displays.length > 1)
     throw new Error('several sources to several displays are several arrangements')
-  return sources.flatMap(({ material, ...source }) =>
-    displays.map((display) => ({ ...rest, source, material, display })),
-  )
+  return questionsOfUses(question)
 }
 
 class Arranging {
@@ -126,7 +123,8 @@ class Arranging {
   private *withSound(wanted: boolean): Generator<void> {
     this.isHeard = (sound, best) => !wanted || sound >= Math.min(best, SOUND_RANK.mono)
     yield* this.fold()
-    yield* this.tryAll()
+    // A use without another is as good as the search for it alone has found it.
+    if (this.courses.length > 1) yield* this.tryAll()
     for (const course of this.courses.slice(2)) yield* this.extend(course)
   }
 

@@ -21,6 +21,7 @@ export const APP = {
   'app.required': 'needed',
   'app.needed-note': 'Fields marked with a star are needed.',
   'app.stop': 'Stop',
+  'app.steps-done': '{count|# step|# steps}',
 
   'place.hookups': 'Hookups',
   'place.shelf': 'Shelf',

@@ -89,6 +89,8 @@ export const ASK = {
   'answer.if-stereo': 'stereo matters',
   'answer.if-colour': 'it must be in [colour]',
   'answer.if-sold': 'the {name} is not to be used',
+  'answer.away':
+    'The server did not answer. This is worked out on this device, from the shelf as it was on {when}.',
   'what-if.asking': 'Looking ...',
   'what-if.so-far': 'As far as the search got: {effect}',
   'what-if.nothing': 'Changes nothing.',

@@ -1,7 +1,8 @@
 /** A chain that a person wired by hand: its screen, and what the check says of it. */
 export const CHECK = {
   'page.check': 'Check a hookup',
-  'check.line': 'Enter what you have wired, socket by socket. Each link is judged as you enter it.',
+  'check.line':
+    'Enter what you have wired, [socket] by [socket]. Each link is judged as you enter it.',
   'check.from-ask': 'Wired something already? Check it',
   'check.from-answer': 'Wire it differently',
   'check.ends': 'What goes where',
@@ -22,9 +23,14 @@ export const CHECK = {
   'check.choose-unit': 'choose a unit',
   'check.choose-port': 'choose a [socket]',
   'check.port': '{label}, {forms}',
+  'check.form-in': '{form}, in',
+  'check.form-out': '{form}, out',
+  'check.piece': '{name} ({count})',
+  'check.channel-of': '{channel}, {plan}',
+  'check.drawing':
+    'Drawing of what was entered: {source} to {display}. The links beside it say the same in words.',
   'check.port-plain': '{label}, {connector}',
   'check.switches': 'Switches',
-  'check.switches-of': '{name}',
   'check.as-it-must': 'not said',
   'check.incomplete': 'Not complete yet',
   'check.waiting': 'Checking ...',
@@ -38,7 +44,8 @@ export const CHECK = {
   'check.all.doubtful': 'This can work; look at what is doubtful',
   'check.all.wrong': 'This does not work as it is wired',
   'check.all.harm': 'Do not switch this on',
-  'check.then': 'With every switch as it must be: {picture}; {sound}.',
+  'check.then': '{picture}; {sound}, with every switch as it must be.',
+  'check.in-spite': 'What comes in spite of that: {picture}; {sound}.',
   'check.no-picture': 'No picture comes this way.',
   'check.told': 'Checked: {verdict}.',
 

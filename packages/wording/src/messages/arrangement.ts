@@ -1,0 +1,61 @@
+/** One set with several players, or one player with several sets, wired once for all. */
+export const ARRANGEMENT = {
+  'page.arrange': 'Several players or sets',
+  'page.arrangement': 'Arrangement',
+
+  'arrange.from-ask': 'Several players or sets? Wire them once',
+  'arrange.line': 'Plugged once, then only switched. Everything comes from your own shelf.',
+  'arrange.way': 'What goes together',
+  'arrange.way.sources': 'One set, several players',
+  'arrange.way.sources-line': 'Each is watched at its own time.',
+  'arrange.way.displays': 'One player, several sets',
+  'arrange.way.displays-line': 'All of them show it at once.',
+  'arrange.source': 'Player {number}',
+  'arrange.display': 'Set {number}',
+  'arrange.add-source': 'Add another player',
+  'arrange.add-display': 'Add another set',
+  'arrange.remove': 'Take out',
+  'arrange.remove-source': 'Take out player {number}',
+  'arrange.remove-display': 'Take out set {number}',
+  'arrange.find': 'Find an arrangement',
+  'arrange.choose-source': 'Choose a player from your shelf.',
+  'arrange.choose-display': 'Choose a set from your shelf.',
+  'arrange.chosen-before': 'This is chosen already. Choose another one.',
+  'arrange.as-chosen-before':
+    'This is chosen already, for the same use. Choose another one, or something else that it does.',
+
+  'arrangement.title-sources': 'Several players to the {display}',
+  'arrangement.title-displays': '{source} to several sets',
+  'arrangement.names': '{first}, {second}',
+  'arrangement.aim': '{names}, for {aim}.',
+  'arrangement.bad-question': 'This address does not say what goes together. Choose it again.',
+  'arrangement.asking': 'Looking for one wiring that does for all ...',
+  'arrangement.found': '{count|# arrangement|# arrangements} found',
+  'arrangement.best-found':
+    'Best found. The search ended before everything was tried, so there may be better.',
+  'arrangement.none': 'Not all at once with what is on this shelf',
+  'arrangement.none-line':
+    'No single wiring serves all of them. Ask for each alone to see what stands in the way:',
+  'arrangement.none-yet': 'Nothing found so far',
+  'arrangement.none-yet-line':
+    'The search ended before everything was tried, so this does not mean that it cannot be done. Take one out and ask again, or ask for each alone:',
+  'arrangement.plug-once': 'Plug once',
+  'arrangement.plug-once-line': 'This stays as it is, whatever is watched.',
+  'arrangement.uses': 'Then, for each use',
+  'arrangement.uses-line': 'Only switches move. No [lead] is touched.',
+  'arrangement.sets': 'Set for set',
+  'arrangement.sets-line': 'All of them run at once; each has its own picture.',
+  'arrangement.use-source': 'To watch the {source}',
+  'arrangement.use-display': 'On the {display}',
+  'arrangement.use-playing': '{use}: {playing}',
+  'arrangement.on': 'On',
+  'arrangement.off': 'Left off',
+  'arrangement.off-none': 'Nothing',
+  'arrangement.step-tick': 'Done',
+  'arrangement.drawing': '{use}: which [socket] joins which, and how every switch stands',
+  'arrangement.pictures': '{first}; {second}',
+  'arrangement.plugged': '{boxes}, {pieces}',
+
+  'field.several-of-both':
+    'Several sources to several sets are more than one arrangement. Keep one set, or one source.',
+} as const
