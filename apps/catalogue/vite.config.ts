@@ -24,5 +24,7 @@ export default defineConfig({
     rolldownOptions: { output: { strictExecutionOrder: true } },
     cssTarget: ['chrome123', 'firefox120', 'safari17.5'],
   },
+  // What the engine's worker imports is pure: facts that it does not ask for are not loaded.
+  worker: { rolldownOptions: { treeshake: { moduleSideEffects: false } } },
   server: { port: 5173, proxy: { '/api': { target: api } } },
 })

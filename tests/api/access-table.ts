@@ -40,6 +40,8 @@ export const ACCESS: Readonly<Record<RouteName, Access>> = {
   changeUnitStands: WRITERS,
   readSnapshot: ALL,
   ask: ALL,
+  arrange: ALL,
+  checkChain: ALL,
   listHookups: ALL,
   readHookup: ALL,
   saveHookup: WRITERS,

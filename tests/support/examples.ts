@@ -1,6 +1,13 @@
 import type { BodyOf, ParamsOf, QueryOf, RouteName } from '@coaxwain/contract'
 import { findHookups } from '@coaxwain/matcher'
-import { chainOf, type Hookup, type Question, type Snapshot, type Unit } from '@coaxwain/shelf'
+import {
+  chainOf,
+  type ArrangementQuestion,
+  type Hookup,
+  type Question,
+  type Snapshot,
+  type Unit,
+} from '@coaxwain/shelf'
 import { lead, modulator, monitor, player } from './models'
 import { uidOf } from './uids'
 import { COLLECTION, emailOf, MODELS, PASS_PHRASE, PLACES, UNITS } from './world'
@@ -10,6 +17,20 @@ export const question = (rest: Partial<Question> = {}): Question => ({
   source: { unit: UNITS.player, playing: 'plays' },
   material: { protection: 'none' },
   display: { unit: UNITS.monitor },
+  demands: {},
+  avoid: [],
+  offAir: [],
+  assumedLeads: [],
+  ...rest,
+})
+
+/** What is asked of the player and one set, in the form for several of either. */
+export const arrangementQuestion = (
+  rest: Partial<ArrangementQuestion> = {},
+): ArrangementQuestion => ({
+  format: 1,
+  sources: [{ unit: UNITS.player, playing: 'plays', material: { protection: 'none' } }],
+  displays: [{ unit: UNITS.monitor }],
   demands: {},
   avoid: [],
   offAir: [],
@@ -128,6 +149,7 @@ export const EXAMPLES: { readonly [N in RouteName]: Example<N> } = {
   },
   readSnapshot: { params: IN },
   ask: { params: IN, body: { question: question() } },
+  arrange: { params: IN, body: { question: arrangementQuestion() } },
   checkChain: { params: IN, body: { question: question(), chain: chainOf(hookup()) } },
   listHookups: { params: IN },
   readHookup: { params: HOOKUP, before: 'save-hookup' },

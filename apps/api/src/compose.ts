@@ -1,9 +1,12 @@
+import { checkArrangement, checkChain } from '@coaxwain/checker'
 import type { Mode } from '@coaxwain/contract'
 import type { Store } from 'express-session'
 import type { Knex } from 'knex'
 import type { Logger } from 'pino'
 import { answerRoutes } from './answers/routes'
-import { createAnswersService, type Checker, type Matcher } from './answers/service'
+import { createAnswersService, type Checker, type Matcher, type OnRefusal } from './answers/service'
+import { arrangementRoutes } from './arrangements/routes'
+import { createArrangementsService, type ArrangementChecker } from './arrangements/service'
 import { createCollectionsRepository } from './collections/repository'
 import { collectionRoutes } from './collections/routes'
 import { createCollectionsService, type CollectionsService } from './collections/service'
@@ -12,11 +15,13 @@ import { SessionStore } from './db/session-store'
 import { together } from './db/transact'
 import { createHealthRepository } from './health/repository'
 import { createHealthService, type HealthService } from './health/service'
+import { hookupCheckRoutes } from './hookup-checks/routes'
+import { createHookupChecksService } from './hookup-checks/service'
 import { createHookupsRepository } from './hookups/repository'
 import { hookupRoutes } from './hookups/routes'
 import { createHookupsService } from './hookups/service'
 import type { AllHandlers } from './http/call'
-import { withOrdinaryParts } from './matcher'
+import { findArrangements, withOrdinaryParts } from './matcher'
 import { createModelsRepository } from './models/repository'
 import { modelRoutes } from './models/routes'
 import { createModelsService } from './models/service'
@@ -39,6 +44,7 @@ export interface ComposeNeeds {
   readonly mode: Mode
   readonly matcher: Matcher
   readonly checker: Checker
+  readonly arrangementChecker?: ArrangementChecker | undefined
   readonly logger: Logger
 }
 
@@ -58,6 +64,7 @@ export async function compose({
   mode,
   matcher,
   checker,
+  arrangementChecker = checkArrangement,
   logger,
 }: ComposeNeeds): Promise<Services> {
   const people = createPeopleService({
@@ -87,12 +94,19 @@ export async function compose({
     units,
     models,
   })
+  const onRefusal: OnRefusal = (refused) => logger.error({ refused }, 'the check refused an answer')
   const answers = createAnswersService({
     snapshots,
     findHookups: matcher,
     withParts: withOrdinaryParts,
     checkHookup: checker,
-    onRefusal: (refused) => logger.error({ refused }, 'the check refused an answer'),
+    onRefusal,
+  })
+  const arrangements = createArrangementsService({
+    snapshots,
+    arrange: findArrangements,
+    checkArrangement: arrangementChecker,
+    onRefusal,
   })
   const hookups = createHookupsService({
     hookups: createHookupsRepository(db),
@@ -109,6 +123,8 @@ export async function compose({
       ...unitRoutes(units),
       ...snapshotRoutes(snapshots),
       ...answerRoutes(answers),
+      ...arrangementRoutes(arrangements),
+      ...hookupCheckRoutes(createHookupChecksService({ snapshots, checkChain })),
       ...hookupRoutes(hookups),
     },
     people,

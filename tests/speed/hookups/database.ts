@@ -1,8 +1,12 @@
 import type { Knex } from 'knex'
-import { connectDatabase } from '@coaxwain/database'
 import { DISPLAY, START, type ArcMap } from '@coaxwain/matcher'
 import { LIMITS } from '@coaxwain/shelf'
-import { settingsOf, startTestServer, stopTestServer } from '../../support/database'
+import {
+  createTestDatabase,
+  settingsOf,
+  startTestServer,
+  stopTestServer,
+} from '../../support/database'
 import { costOf } from './graph'
 
 /** Rows sent at once. */
@@ -31,10 +35,7 @@ export interface DatabaseRun {
 /** Asks a MariaDB of its own the same questions, by the same arcs. */
 export async function askDatabase(maps: readonly ArcMap[]): Promise<DatabaseRun[]> {
   const server = await startTestServer()
-  const root = connectDatabase({ ...settingsOf(server), database: '' })
-  await root.raw('create database if not exists speed')
-  await root.destroy()
-  const db = connectDatabase({ ...settingsOf(server), database: 'speed' })
+  const db = await createTestDatabase(settingsOf(server), 'coaxwain_speed')
   try {
     const runs: DatabaseRun[] = []
     for (const map of maps) runs.push(await ask(db, map))

@@ -1,5 +1,13 @@
 import type { AnswerReply } from '@coaxwain/contract'
-import { fitted, type Answer, type Hookup, type Question, type Snapshot } from '@coaxwain/shelf'
+import {
+  answered,
+  fitted,
+  type Answer,
+  type Hookup,
+  type Question,
+  type Snapshot,
+  type Stands,
+} from '@coaxwain/shelf'
 import { AppError, type FieldTrouble } from '../app-error'
 import type { Scope } from '../http/call'
 import type { SnapshotService } from '../snapshot/service'
@@ -35,9 +43,9 @@ const fault = (path: string, code: string, name: string): FieldTrouble => ({
   details: { name },
 })
 
-function unitFaults(
+export function unitFaults(
   snapshot: Snapshot,
-  end: 'source' | 'display',
+  end: string,
   uid: string,
   fn: { readonly field: string; readonly key: string } | null,
 ): FieldTrouble[] {
@@ -50,10 +58,26 @@ function unitFaults(
     : [fault(`${end}.${fn.field}`, 'unknown-function', fn.key)]
 }
 
+export function listFaults(
+  snapshot: Snapshot,
+  { avoid, assumedLeads }: Pick<Question, 'avoid' | 'assumedLeads'>,
+): FieldTrouble[] {
+  const known = new Set(snapshot.units.map((u) => u.uid))
+  return [
+    ...avoid.flatMap((uid, i) =>
+      known.has(uid) ? [] : [fault(`avoid.${i}`, 'unknown-reference', uid)],
+    ),
+    ...assumedLeads.flatMap((uid, i) =>
+      snapshot.models[uid]?.type === 'piece'
+        ? []
+        : [fault(`assumedLeads.${i}`, 'unknown-reference', uid)],
+    ),
+  ]
+}
+
 /** Everything that a question names must be on this shelf. */
 export function questionMustFit(snapshot: Snapshot, question: Question): void {
   const { source, display } = question
-  const known = new Set(snapshot.units.map((u) => u.uid))
   const errors = [
     ...unitFaults(snapshot, 'source', source.unit, { field: 'playing', key: source.playing }),
     ...unitFaults(
@@ -62,14 +86,7 @@ export function questionMustFit(snapshot: Snapshot, question: Question): void {
       display.unit,
       display.input === undefined ? null : { field: 'input', key: display.input },
     ),
-    ...question.avoid.flatMap((uid, i) =>
-      known.has(uid) ? [] : [fault(`avoid.${i}`, 'unknown-reference', uid)],
-    ),
-    ...question.assumedLeads.flatMap((uid, i) =>
-      snapshot.models[uid]?.type === 'piece'
-        ? []
-        : [fault(`assumedLeads.${i}`, 'unknown-reference', uid)],
-    ),
+    ...listFaults(snapshot, question),
   ]
   if (errors.length > 0) throw new AppError('question-unsound', { errors })
 }
@@ -83,33 +100,23 @@ interface Needs {
 }
 
 export function createAnswersService({ snapshots, findHookups, ...needs }: Needs) {
-  const stands = (snapshot: Snapshot, question: Question, hookup: Hookup): boolean => {
-    const { ok, findings } = needs.checkHookup(snapshot, question, hookup)
-    const { shelfVersion, catalogueVersion } = snapshot
+  const stands: Stands = (shelf, question, hookup) => {
+    const { ok, findings } = needs.checkHookup(shelf, question, hookup)
+    const { shelfVersion, catalogueVersion } = shelf
     if (!ok) needs.onRefusal({ question, hookup, findings, shelfVersion, catalogueVersion })
     return ok
-  }
-
-  /** What the check refuses is never shown; when nothing else is left, that is said. */
-  const checked = (snapshot: Snapshot, question: Question, answer: Answer): Answer => {
-    const hookups = answer.hookups.filter((h) => stands(snapshot, question, h))
-    if (answer.hookups.length > 0 && hookups.length === 0) throw new AppError('answer-refused')
-    if (answer.purchases.length === 0) return { ...answer, hookups }
-    const stocked = needs.withParts(snapshot)
-    const purchases = answer.purchases.filter((p) => stands(stocked, question, p.hookup))
-    return { ...answer, hookups, purchases }
   }
 
   return {
     async ask(scope: Scope, question: Question): Promise<AnswerReply> {
       const snapshot = await snapshots.read(scope)
       questionMustFit(snapshot, question)
-      return {
-        question,
-        answer: checked(snapshot, question, await findHookups(snapshot, question)),
-        shelfVersion: snapshot.shelfVersion,
-        catalogueVersion: snapshot.catalogueVersion,
-      }
+      const answer = await findHookups(snapshot, question)
+      const stocked = (): Snapshot => needs.withParts(snapshot)
+      const reply = answered({ snapshot, stocked, question, answer }, stands)
+      // When nothing that was found can be shown, that is said.
+      if (!reply) throw new AppError('answer-refused')
+      return reply
     },
   }
 }

@@ -1,42 +1,28 @@
 import type { WhenWrong } from '@coaxwain/checker'
 import type { Hookup, Question } from '@coaxwain/shelf'
 import { onScopeDispose, shallowRef, watch } from 'vue'
-import { cutSnapshot } from '../format/cut-snapshot'
-import { useSnapshot } from '../stores/snapshot'
-import type { WhenWrongAsked } from '../workers/when-wrong'
+import { useEngine } from '../stores/engine'
 
 /**
  * What a person would see if a control stood otherwise, worked out beside the page. Null until it is known.
  * Another hookup ends the work on the one before.
  */
 export function useWhenWrong(hookup: () => Hookup, question: () => Question) {
-  const store = useSnapshot()
+  const engine = useEngine()
   const wrongs = shallowRef<readonly WhenWrong[] | null>(null)
-  let worker: Worker | null = null
+  let running: AbortController | null = null
 
-  function stop(): void {
-    worker?.terminate()
-    worker = null
-  }
-
-  function start(): void {
-    stop()
+  async function start(): Promise<void> {
+    running?.abort()
+    const mine = new AbortController()
+    running = mine
     wrongs.value = null
-    const asked: WhenWrongAsked = {
-      snapshot: cutSnapshot(store.snapshot, hookup(), question()),
-      question: question(),
-      hookup: hookup(),
-    }
-    worker = new Worker(new URL('../workers/when-wrong.ts', import.meta.url), { type: 'module' })
-    worker.addEventListener('message', ({ data }: MessageEvent<readonly WhenWrong[]>) => {
-      wrongs.value = data
-      stop()
-    })
-    worker.postMessage(asked)
+    const found = await engine.whenWrong(question(), hookup(), mine.signal)
+    if (!mine.signal.aborted) wrongs.value = found
   }
 
   watch(hookup, start, { immediate: true })
-  onScopeDispose(stop)
+  onScopeDispose(() => running?.abort())
 
   return { wrongs }
 }

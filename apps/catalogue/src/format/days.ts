@@ -10,3 +10,7 @@ export function dayOf(value: string, locale: Locale): string {
     ...(plain ? { timeZone: 'UTC' } : {}),
   }).format(new Date(plain ? `${value}T00:00:00Z` : value))
 }
+
+/** A moment of the reader's own clock. */
+export const momentOf = (value: Date, locale: Locale): string =>
+  new Intl.DateTimeFormat(locale, { dateStyle: 'long', timeStyle: 'short' }).format(value)

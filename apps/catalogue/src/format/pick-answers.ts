@@ -4,14 +4,17 @@ export const MERITS = ['tested', 'picture', 'boxes'] as const
 /** In which way a hookup is the best of an answer. */
 export type Merit = (typeof MERITS)[number]
 
-export interface Pick {
+export interface Picked {
   /** Its place in the answer. */
   readonly index: number
   readonly merits: readonly Merit[]
 }
 
-/** Compares two hookups; negative when the first is better. Answers come in the default order, which breaks ties. */
-type Order = (a: Hookup, b: Hookup) => number
+/** What answers are compared by. */
+export type Compared = Pick<Hookup, 'axes' | 'worksFully'>
+
+/** Compares two answers; negative when the first is better. Answers come in the default order, which breaks ties. */
+type Order = (a: Compared, b: Compared) => number
 
 const fully: Order = (a, b) => Number(b.worksFully) - Number(a.worksFully)
 
@@ -21,7 +24,7 @@ const ORDERS: Readonly<Record<Merit, readonly Order[]>> = {
   boxes: [fully, (a, b) => a.axes.boxes - b.axes.boxes, (a, b) => a.axes.pieces - b.axes.pieces],
 }
 
-function bestBy(hookups: readonly Hookup[], merit: Merit): number {
+function bestBy(hookups: readonly Compared[], merit: Merit): number {
   return hookups.reduce((best, hookup, i) => {
     const before = hookups[best]
     if (!before) return i
@@ -31,7 +34,7 @@ function bestBy(hookups: readonly Hookup[], merit: Merit): number {
 }
 
 /** Up to three answers for the first screen; one that is best in several ways stands once. */
-export function pickAnswers(hookups: readonly Hookup[]): Pick[] {
+export function pickAnswers(hookups: readonly Compared[]): Picked[] {
   if (hookups.length === 0) return []
   const picks: { index: number; merits: Merit[] }[] = []
   for (const merit of MERITS) {

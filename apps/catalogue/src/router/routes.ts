@@ -32,6 +32,24 @@ const inCollection: RouteRecordRaw[] = [
     meta: { title: 'page.answer', place: 'hookups' },
   },
   {
+    path: 'hookups/check',
+    name: PAGES.check,
+    component: () => import('../views/CheckView.vue'),
+    meta: { title: 'page.check', place: 'hookups' },
+  },
+  {
+    path: 'hookups/several',
+    name: PAGES.arrange,
+    component: () => import('../views/ArrangeView.vue'),
+    meta: { title: 'page.arrange', place: 'hookups' },
+  },
+  {
+    path: 'hookups/several/answer',
+    name: PAGES.arrangement,
+    component: () => import('../views/ArrangementView.vue'),
+    meta: { title: 'page.arrangement', place: 'hookups' },
+  },
+  {
     path: `hookups/:hookup(${UID})`,
     name: PAGES.hookup,
     component: () => import('../views/SavedHookupView.vue'),

@@ -6,6 +6,7 @@ import { shallowRef } from 'vue'
 import { call } from '../api/client'
 import type { Failure } from '../api/failure'
 import { createUid } from '../api/uid'
+import { useEngine } from './engine'
 import { useSnapshot } from './snapshot'
 
 const MOST_ANSWERS = 24
@@ -16,28 +17,65 @@ export const useHookups = defineStore('hookups', () => {
   const savedTotal = shallowRef(0)
   const next = shallowRef<string | null>(null)
   const snapshot = useSnapshot()
+  const engine = useEngine()
   /** Answers that still hold for the shelf as it is known here, the newest last. */
   const answers = new Map<string, AnswerReply>()
 
-  /** The same question about the same shelf is not asked again, unless the search was cut short. */
+  const keyOf = (collection: string, question: Question): string =>
+    JSON.stringify([collection, question])
+
+  /** The same question about the same shelf is not asked again. */
+  function known(key: string): AnswerReply | null {
+    const reply = answers.get(key)
+    return reply && snapshot.isAt(reply) ? reply : null
+  }
+
+  /** A search that was cut short may get further next time. */
+  function keep(key: string, reply: AnswerReply): void {
+    answers.delete(key)
+    if (!reply.answer.complete) return
+    answers.set(key, reply)
+    for (const oldest of answers.keys()) {
+      if (answers.size <= MOST_ANSWERS) break
+      answers.delete(oldest)
+    }
+  }
+
   async function ask(
     collection: string,
     question: Question,
     signal?: AbortSignal,
   ): Promise<Result<AnswerReply, Failure>> {
-    const key = JSON.stringify([collection, question])
-    const known = answers.get(key)
-    if (known && snapshot.isAt(known)) return ok(known)
+    const key = keyOf(collection, question)
+    const before = known(key)
+    if (before) return ok(before)
     const reply = await call('ask', { params: { collection }, body: { question }, signal })
     if (!reply.ok) return err(reply.problem)
-    answers.delete(key)
-    if (!reply.value.answer.complete) return ok(reply.value)
-    answers.set(key, reply.value)
-    for (const oldest of answers.keys()) {
-      if (answers.size <= MOST_ANSWERS) break
-      answers.delete(oldest)
-    }
+    keep(key, reply.value)
     return ok(reply.value)
+  }
+
+  /** Worked out on this device, from the shelf that is held here; null when that cannot be. */
+  async function askHere(
+    collection: string,
+    question: Question,
+    signal?: AbortSignal,
+  ): Promise<AnswerReply | null> {
+    if (!snapshot.holds(collection)) return null
+    const key = keyOf(collection, question)
+    const reply = known(key) ?? (await engine.ask(question, signal))
+    if (reply) keep(key, reply)
+    return reply
+  }
+
+  /** A question with one thing changed is answered here, at once; only what cannot be goes to the server. */
+  async function askWhatIf(
+    collection: string,
+    question: Question,
+    signal?: AbortSignal,
+  ): Promise<Result<AnswerReply, Failure>> {
+    const here = await askHere(collection, question, signal)
+    return here ? ok(here) : ask(collection, question, signal)
   }
 
   async function loadSaved(collection: string, more = false): Promise<Result<void, Failure>> {
@@ -89,5 +127,18 @@ export const useHookups = defineStore('hookups', () => {
   ): Promise<Result<HookupDetail, Failure>> =>
     call('restoreHookup', { params: { collection, hookup: uid }, version: version + 1 })
 
-  return { saved, savedTotal, next, ask, loadSaved, read, save, rename, remove, restore }
+  return {
+    saved,
+    savedTotal,
+    next,
+    ask,
+    askHere,
+    askWhatIf,
+    loadSaved,
+    read,
+    save,
+    rename,
+    remove,
+    restore,
+  }
 })

@@ -13,6 +13,8 @@ export const useSnapshot = defineStore('snapshot', () => {
   const snapshot = shallowRef<Snapshot>(EMPTY)
   const of = ref<string | null>(null)
   const failure = shallowRef<Failure | null>(null)
+  /** When the server was last asked for what is held. */
+  const readAt = shallowRef<Date | null>(null)
   /** Whose units are held, fresh or stale. */
   let shown: string | null = null
   let loading: { collection: string; reply: Promise<Result<void, Failure>> } | null = null
@@ -23,11 +25,14 @@ export const useSnapshot = defineStore('snapshot', () => {
   function load(collection: string): Promise<Result<void, Failure>> {
     if (loading?.collection === collection) return loading.reply
     if (shown !== collection) snapshot.value = EMPTY
+    const asked = new Date()
     const reply = call('readSnapshot', { params: { collection } }).then((r) => {
       if (loading?.collection === collection) loading = null
       failure.value = r.ok ? null : r.problem
       if (!r.ok) return err(r.problem)
-      snapshot.value = r.value
+      // The same shelf read again stays the same thing, so that nothing rests on it anew.
+      if (shown !== collection || !isAt(r.value)) snapshot.value = r.value
+      readAt.value = asked
       of.value = collection
       shown = collection
       return ok(undefined)
@@ -41,6 +46,9 @@ export const useSnapshot = defineStore('snapshot', () => {
     versions.shelfVersion === snapshot.value.shelfVersion &&
     versions.catalogueVersion === snapshot.value.catalogueVersion
 
+  /** Whether this collection's shelf is here, fresh or stale. */
+  const holds = (collection: string): boolean => ready.value && shown === collection
+
   /** Loads unless this collection is here already. */
   const ensure = async (collection: string): Promise<Result<void, Failure>> =>
     of.value === collection ? ok(undefined) : load(collection)
@@ -50,5 +58,5 @@ export const useSnapshot = defineStore('snapshot', () => {
     of.value = null
   }
 
-  return { snapshot, lookup, ready, failure, isAt, load, ensure, markStale }
+  return { snapshot, lookup, ready, readAt, failure, isAt, holds, load, ensure, markStale }
 })

@@ -1,6 +1,7 @@
 import type { Condition, Control, DeviceModel, Key } from '@coaxwain/models'
 import { doubtOf, fitted, formState, functionState, mayLend } from '@coaxwain/shelf'
 import type { Snapshot, Uid, Unit } from '@coaxwain/shelf'
+import { byContent, contentOf } from './content'
 
 /**
  * Units that a search cannot tell apart by what they can do: one model with the same things done to it.
@@ -96,24 +97,17 @@ export const variantKey = (device: DeviceModel, unit: Unit): string => {
   const stuck = stuckControls(device, unit)
   return unit.modifications.length === 0 && Object.keys(stuck).length === 0
     ? unit.model
-    : JSON.stringify([unit.model, unit.modifications, stuck])
+    : contentOf([unit.model, unit.modifications, stuck])
 }
 
 /** What is noted of a unit, but for its name and place; what works is before what nobody has tried. */
-const unitContent = ({ working, forms, functions, modifications, stands, remotePresent }: Unit) =>
-  JSON.stringify([
-    ORDER.indexOf(working),
-    ...[forms, functions, modifications, Object.entries(stands).sort(), remotePresent],
-  ])
+const saidOfUnit = ({ working, forms, functions, modifications, stands, remotePresent }: Unit) =>
+  contentOf([ORDER.indexOf(working), forms, functions, modifications, stands, remotePresent])
 
 const ORDER: readonly Unit['working'][] = ['works', 'untested', 'faulty', 'parts-only']
 
-/** So that of units that do as well neither names nor their order on the shelf decide. */
-const unitsByContent = (units: readonly Unit[]): Unit[] =>
-  units
-    .map((unit) => ({ unit, content: unitContent(unit) }))
-    .sort((a, b) => (a.content < b.content ? -1 : a.content > b.content ? 1 : 0))
-    .map(({ unit }) => unit)
+const saidOfModel = ({ device }: Variant): string =>
+  contentOf({ ...device, maker: '', name: '', aliases: [] })
 
 /** All units that may be lent, put together by what they can do. */
 export function compileVariants(snapshot: Snapshot, bought: ReadonlySet<Uid>): Variant[] {
@@ -129,20 +123,9 @@ export function compileVariants(snapshot: Snapshot, bought: ReadonlySet<Uid>): V
   const variants = [...groups].map(([id, units]) => ({
     ...variantOf(snapshot, units[0] as Unit, bought.has(units[0]!.uid)),
     id,
-    units: unitsByContent(units),
+    units: byContent(units, saidOfUnit),
   }))
-  return byContent(variants)
-}
-
-const contentOf = (device: DeviceModel): string =>
-  JSON.stringify({ ...device, maker: '', name: '', aliases: [] })
-
-/** Neither names nor the order on the shelf decide between equals. */
-function byContent(variants: readonly Variant[]): Variant[] {
-  return variants
-    .map((variant) => ({ variant, content: contentOf(variant.device) }))
-    .sort((a, b) => (a.content < b.content ? -1 : a.content > b.content ? 1 : 0))
-    .map(({ variant }) => variant)
+  return byContent(variants, saidOfModel)
 }
 
 /** What one way through a unit leans on: forms on ports, and functions. */

@@ -51,7 +51,6 @@ export const ARRANGEMENT = {
   'arrangement.on': 'On',
   'arrangement.off': 'Left off',
   'arrangement.off-none': 'Nothing',
-  'arrangement.step-tick': 'Done',
   'arrangement.drawing': '{use}: which [socket] joins which, and how every switch stands',
   'arrangement.pictures': '{first}; {second}',
   'arrangement.plugged': '{boxes}, {pieces}',

@@ -15,7 +15,7 @@ export interface AnswerTab {
   readonly summary: string
 }
 
-function meritWords(merits: readonly Merit[], say: Speak): string {
+export function meritWords(merits: readonly Merit[], say: Speak): string {
   const [first = '', second = '', third = ''] = merits.map((m) => say(`answer.merit.${m}`))
   const lower = (words: string): string => words.charAt(0).toLowerCase() + words.slice(1)
   if (third !== '') {

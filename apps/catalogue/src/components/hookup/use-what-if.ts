@@ -41,7 +41,7 @@ export function useWhatIf(
     running = mine
     for (const { key } of plain.value) {
       const question = withSwitched(reply().question, key)
-      const answered = await store.ask(collection.value, question, mine.signal)
+      const answered = await store.askWhatIf(collection.value, question, mine.signal)
       if (mine.signal.aborted) return
       // The switch works without its preview; a failure is told when it is thrown.
       const answer = answered.ok ? answered.value.answer : null

@@ -1,0 +1,7 @@
+import type { Handlers } from '../http/call'
+import type { ArrangementsService } from './service'
+
+export const arrangementRoutes = (arrangements: ArrangementsService) =>
+  ({
+    arrange: ({ scope, body }) => arrangements.ask(scope, body.question),
+  }) satisfies Handlers
