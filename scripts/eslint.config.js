@@ -114,15 +114,7 @@ const typed = {
 
 export default tseslint.config(
   {
-    ignores: [
-      '**/node_modules/**',
-      '**/dist/**',
-      '**/.data/**',
-      '**/coverage/**',
-      '**/*.d.mts',
-      'apps/catalogue/src/components.d.ts',
-      'apps/catalogue/components.d.ts',
-    ],
+    ignores: ['**/node_modules/**', '**/dist/**', '**/.data/**', '**/coverage/**', '**/*.d.mts'],
   },
   js.configs.recommended,
   typed,

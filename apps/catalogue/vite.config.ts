@@ -11,7 +11,7 @@ export default defineConfig({
     vue(),
     Components({
       dirs: [],
-      dts: 'src/components.d.ts',
+      dts: false,
       resolvers: [ElementPlusResolver({ importStyle: 'css' })],
     }),
   ],

@@ -43,7 +43,7 @@ const swapConnector: Change = (device, chance) => {
   if (port.connector.startsWith('f-') && port.impedanceOhm !== undefined) port.impedanceOhm = 75
 }
 
-/** Every list of conditions in a device that has any. */
+/** Every list of conditions in a device. */
 const conditionsIn = (device: Loose<DeviceModel>): Loose<Condition>[] =>
   device.functions
     .flatMap((f) => [

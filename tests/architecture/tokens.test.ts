@@ -1,11 +1,9 @@
-/// <reference types="node" />
-/* eslint-disable no-restricted-imports -- the test reads the style sheets, which the test runner would empty */
 import { readdirSync, readFileSync } from 'node:fs'
-import { dirname, join } from 'node:path'
+import { join } from 'node:path'
 import { fileURLToPath } from 'node:url'
 import { describe, expect, it } from 'vitest'
 
-const ROOT = dirname(dirname(fileURLToPath(import.meta.url)))
+const ROOT = fileURLToPath(new URL('../../apps/catalogue/src', import.meta.url))
 const CSS = readFileSync(join(ROOT, 'styles/tokens.css'), 'utf8')
 
 const SCREEN = CSS.slice(0, CSS.indexOf('@media print'))
