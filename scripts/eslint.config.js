@@ -260,10 +260,10 @@ export default tseslint.config(
     rules: { 'import-x/no-default-export': 'off', '@typescript-eslint/no-require-imports': 'off' },
   },
   {
-    // Tests beside the code belong to the project of the tests.
-    files: ['{packages,database}/**/*.test.ts', 'apps/api/**/*.test.ts'],
+    // One program for everything but the client: a program for each workspace reads the same files again.
+    files: ['{packages,database,tests}/**/*.ts', 'apps/api/**/*.ts', 'scripts/**/*.d.mts'],
     languageOptions: {
-      parserOptions: { projectService: false, project: ['tests/tsconfig.lint.json'] },
+      parserOptions: { projectService: false, project: ['scripts/tsconfig.lint.json'] },
     },
   },
   {

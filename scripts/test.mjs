@@ -47,8 +47,8 @@ const SUITES = [
   project('web', 'apps/catalogue/src'),
 ]
 
-/** Measures what a person would see, so nothing runs beside it. */
-const ALONE = [project('browser', 'tests/browser')]
+/** They measure what a person would see, so nothing but the two of them runs. */
+const ON_SITE = [project('browser', 'tests/browser'), project('looks', 'tests/browser')]
 
 function hasTests(folder) {
   const full = inRoot(folder)
@@ -122,16 +122,27 @@ async function runSuite(suite, env, folder) {
 }
 
 async function runAll(env, folder) {
-  const waiting = SUITES.filter(isWanted)
   const results = []
-  const worker = async () => {
-    for (let suite = waiting.shift(); suite; suite = waiting.shift()) {
-      results.push(await runSuite(suite, env, folder))
+  const runThese = async (suites) => {
+    const waiting = [...suites]
+    const worker = async () => {
+      for (let suite = waiting.shift(); suite; suite = waiting.shift()) {
+        results.push(await runSuite(suite, env, folder))
+      }
     }
+    await Promise.all(Array.from({ length: AT_ONCE }, worker))
   }
-  await Promise.all(Array.from({ length: AT_ONCE }, worker))
-  for (const suite of ALONE.filter(isWanted)) results.push(await runSuite(suite, env, folder))
+  await runThese(SUITES.filter(isWanted))
+  const onSite = ON_SITE.filter(isWanted)
+  // Built once here, so that the two do not build at the same time.
+  if (onSite.length > 0) await buildOnce()
+  await runThese(onSite)
   return results
+}
+
+async function buildOnce() {
+  const { build } = await import('./build.mjs')
+  await build()
 }
 
 async function withDatabase(work) {

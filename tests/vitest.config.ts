@@ -26,6 +26,24 @@ const onDatabase = (name: string, include: string[]) => ({
   },
 })
 
+/** What every page looks like; it changes nothing, and takes as long as all that people do. */
+const LOOKS = 'tests/browser/pages.test.ts'
+
+/** Each on a site of its own, one file after the other. */
+const onSite = (name: string, include: string[], exclude: string[] = []) => ({
+  test: {
+    name,
+    root,
+    include,
+    exclude,
+    environment: 'node' as const,
+    globalSetup: ['tests/support/global-site.ts'],
+    testTimeout: SLOW_MS,
+    hookTimeout: SLOW_MS,
+    fileParallelism: false,
+  },
+})
+
 const plain = (name: string, include: string[]) => ({
   test: { name, root, include, environment: 'node' as const, testTimeout: SLOW_MS },
 })
@@ -66,18 +84,8 @@ export default defineConfig({
       plain('laws', ['tests/laws/**/*.test.ts']),
       plain('enumeration', ['tests/enumeration/**/*.test.ts']),
       plain('cases', ['tests/cases/**/*.test.ts']),
-      {
-        test: {
-          name: 'browser',
-          root,
-          include: ['tests/browser/**/*.test.ts'],
-          environment: 'node',
-          globalSetup: ['tests/support/global-site.ts'],
-          testTimeout: SLOW_MS,
-          hookTimeout: SLOW_MS,
-          fileParallelism: false,
-        },
-      },
+      onSite('browser', ['tests/browser/*.test.ts'], [LOOKS]),
+      onSite('looks', [LOOKS]),
     ],
   },
 })
