@@ -1,7 +1,7 @@
 import type { Knex } from 'knex'
 import { afterAll, beforeAll, beforeEach, inject } from 'vitest'
 import type { Client } from './client'
-import { createTestDatabase, emptyTables } from './database'
+import { checksum, createTestDatabase, emptyMoving, emptyTables } from './database'
 import { startApi, type RunningApi } from './server'
 import { makeWorld, signIn, type Who } from './world'
 
@@ -24,9 +24,15 @@ export function useRig(choices: Parameters<typeof startApi>[1] = {}): Rig {
     api = await startApi(db, choices)
   })
 
+  let world = ''
+
   beforeEach(async () => {
-    await emptyTables(db)
-    await makeWorld(db)
+    await emptyMoving(db)
+    if ((await checksum(db)) !== world) {
+      await emptyTables(db)
+      await makeWorld(db)
+      world = await checksum(db)
+    }
     clients.clear()
   })
 
