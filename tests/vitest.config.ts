@@ -26,8 +26,8 @@ const onDatabase = (name: string, include: string[]) => ({
   },
 })
 
-/** What every page looks like; it changes nothing, and takes as long as all that people do. */
-const LOOKS = 'tests/browser/pages.test.ts'
+/** How every page looks and is reached; it changes nothing, and takes as long as all that people do. */
+const LOOKS = ['tests/browser/pages.test.ts', 'tests/browser/keyboard.test.ts']
 
 /** Each on a site of its own, one file after the other. */
 const onSite = (name: string, include: string[], exclude: string[] = []) => ({
@@ -84,8 +84,8 @@ export default defineConfig({
       plain('laws', ['tests/laws/**/*.test.ts']),
       plain('enumeration', ['tests/enumeration/**/*.test.ts']),
       plain('cases', ['tests/cases/**/*.test.ts']),
-      onSite('browser', ['tests/browser/*.test.ts'], [LOOKS]),
-      onSite('looks', [LOOKS]),
+      onSite('browser', ['tests/browser/*.test.ts'], LOOKS),
+      onSite('looks', LOOKS),
     ],
   },
 })

@@ -4,6 +4,7 @@ import { isSoundCircuit, type Circuit, type Quality } from '@coaxwain/signal'
 import { sentence } from '@coaxwain/wording'
 import {
   isPiece,
+  PICTURE_CIRCUITS,
   type CaseAnswer,
   type CaseHop,
   type CasePiece,
@@ -236,6 +237,8 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'caution.own-wiring': 'W-PINOUT',
   'caution.channel-socket': 'W-LOOKALIKE',
   'caution.digital-socket': 'W-LOOKALIKE',
+  'caution.repeats-aerial': 'W-LOOKALIKE',
+  'caution.other-socket': 'W-LOOKALIKE',
   'caution.tell-shape': 'W-ASPECT',
   'caution.dc-on-lead': 'W-DC-ON-COAX',
   'caution.dc-to-aerial': 'W-DC-ON-COAX',
@@ -248,6 +251,8 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'caution.box-waits': 'W-AUTO-SWITCH',
   'caution.standard-grey': 'W-COLOUR-LOST',
   'caution.standard-hiss': 'W-SOUND-OFFSET',
+  'caution.standard-negative': 'W-VISION-POLARITY',
+  'caution.sync-kind': 'W-SYNC',
   'caution.other-lines': 'W-SCAN',
   'caution.other-fields': 'W-NO-LOCK',
   'caution.other-colour': 'W-COLOUR-LOST',
@@ -413,28 +418,6 @@ const unitOf = (question: CaseQuestion, id: string): CaseUnit | undefined =>
 
 // ---------------------------------------------------------------- paths
 
-const CIRCUITS: Readonly<Record<string, readonly Circuit[]>> = {
-  composite: ['cvbs'],
-  's-video': ['y', 'c'],
-  luma: ['y'],
-  chroma: ['c'],
-  'ypbpr-y': ['y'],
-  'ypbpr-pb': ['pb'],
-  'ypbpr-pr': ['pr'],
-  'rgb-r': ['r'],
-  'rgb-g': ['g'],
-  'rgb-b': ['b'],
-  'rgb-cs': ['r', 'g', 'b', 'csync'],
-  'rgb-hv': ['r', 'g', 'b', 'hsync', 'vsync'],
-  'rgb-sog': ['r', 'g', 'b'],
-  sync: ['csync'],
-  rgbi: ['ttl-r', 'ttl-g', 'ttl-b', 'ttl-i', 'hsync', 'vsync'],
-  'mono-ttl': ['ttl-mono', 'hsync', 'vsync'],
-  hdmi: ['tmds'],
-  dvi: ['tmds'],
-  rf: ['rf'],
-}
-
 const portOf = (question: CaseQuestion, unit: string, port: string): CasePort | undefined =>
   unitOf(question, unit)?.ports.find((p) => p.id === port)
 
@@ -449,10 +432,14 @@ function lanesOf(question: CaseQuestion, link: Link): Lane[] {
   const circuits = link.circuits.map((c) => c.from).filter((c) => !isSoundCircuit(c))
   const from = portOf(question, link.from.unit, link.from.port)?.signals ?? []
   const to = portOf(question, link.to.unit, link.to.port)?.signals ?? []
-  const covers = from.filter((s) => circuits.every((c) => CIRCUITS[s]?.includes(c)))
+  const covers = from.filter((s) => circuits.every((c) => PICTURE_CIRCUITS[s]?.includes(c)))
   const whole = covers.find((s) => to.includes(s))
-  const parts = from.filter((s) => to.includes(s) && circuits.some((c) => CIRCUITS[s]?.includes(c)))
-  const signals = whole ? [whole] : parts.length > 0 ? parts : [covers[0] ?? 'composite']
+  const parts = from.filter(
+    (s) => to.includes(s) && circuits.some((c) => PICTURE_CIRCUITS[s]?.includes(c)),
+  )
+  const wires = from.filter((s) => circuits.some((c) => PICTURE_CIRCUITS[s]?.includes(c)))
+  const named = [covers.slice(0, 1), wires].find((found) => found.length > 0)
+  const signals = whole ? [whole] : parts.length > 0 ? parts : (named ?? ['composite'])
   return signals.map((signal) => ({ link, signal }))
 }
 

@@ -1,3 +1,28 @@
+import type { Circuit } from '@coaxwain/signal'
+
+/** What the form's words for pictures are made of. */
+export const PICTURE_CIRCUITS: Readonly<Record<string, readonly Circuit[]>> = {
+  composite: ['cvbs'],
+  's-video': ['y', 'c'],
+  luma: ['y'],
+  chroma: ['c'],
+  'ypbpr-y': ['y'],
+  'ypbpr-pb': ['pb'],
+  'ypbpr-pr': ['pr'],
+  'rgb-r': ['r'],
+  'rgb-g': ['g'],
+  'rgb-b': ['b'],
+  'rgb-cs': ['r', 'g', 'b', 'csync'],
+  'rgb-hv': ['r', 'g', 'b', 'hsync', 'vsync'],
+  'rgb-sog': ['r', 'g', 'b'],
+  sync: ['csync'],
+  rgbi: ['ttl-r', 'ttl-g', 'ttl-b', 'ttl-i', 'hsync', 'vsync'],
+  'mono-ttl': ['ttl-mono', 'hsync', 'vsync'],
+  hdmi: ['tmds'],
+  dvi: ['tmds'],
+  rf: ['rf'],
+}
+
 /** The question part of a case, as its form describes it. Unknown fields are ignored. */
 export type When = Readonly<Record<string, readonly string[]>>
 

@@ -43,6 +43,7 @@ import {
 import { withImplied } from './implied'
 import {
   isPiece,
+  PICTURE_CIRCUITS,
   stated,
   type CaseControl,
   type CaseDoes,
@@ -69,25 +70,7 @@ const PLAYS = 'plays'
 // ---------------------------------------------------------------- words of the form
 
 const CIRCUITS_OF: Readonly<Record<string, readonly Circuit[]>> = {
-  composite: ['cvbs'],
-  's-video': ['y', 'c'],
-  luma: ['y'],
-  chroma: ['c'],
-  'ypbpr-y': ['y'],
-  'ypbpr-pb': ['pb'],
-  'ypbpr-pr': ['pr'],
-  'rgb-r': ['r'],
-  'rgb-g': ['g'],
-  'rgb-b': ['b'],
-  'rgb-cs': ['r', 'g', 'b', 'csync'],
-  'rgb-hv': ['r', 'g', 'b', 'hsync', 'vsync'],
-  'rgb-sog': ['r', 'g', 'b'],
-  sync: ['csync'],
-  rgbi: ['ttl-r', 'ttl-g', 'ttl-b', 'ttl-i', 'hsync', 'vsync'],
-  'mono-ttl': ['ttl-mono', 'hsync', 'vsync'],
-  hdmi: ['tmds'],
-  dvi: ['tmds'],
-  rf: ['rf'],
+  ...PICTURE_CIRCUITS,
   'ac3-rf': ['ac3-rf'],
   'digital-audio': ['spdif'],
   'audio-l': ['audio-l'],
@@ -877,6 +860,7 @@ function showing(jacks: readonly CaseJack[]): ModelFunction[] {
         gives: [],
         ...(tuner?.control ? { tunedBy: tuner.control } : {}),
         power: 'on',
+        ...(j.ports[0]?.recorderInputAgc ? { inputAgc: true } : {}),
         ...(j.ports[0]?.hdcp === false ? { hdcp: false } : { hdcp: true }),
       }
     })

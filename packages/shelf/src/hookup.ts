@@ -1,4 +1,4 @@
-import type { Access, Key, Shape } from '@coaxwain/models'
+import type { Access, ControlRole, Key, Shape } from '@coaxwain/models'
 import type {
   Circuit,
   Colour,
@@ -123,6 +123,20 @@ export const SETTING_REASONS = [
   'moves-itself',
 ] as const
 export type SettingReason = (typeof SETTING_REASONS)[number]
+
+/** What a switch is set for, by what it does. */
+export const REASON_OF_ROLE: Readonly<Record<ControlRole, SettingReason>> = {
+  input: 'picks-input',
+  standard: 'fits-standard',
+  scan: 'fits-scan',
+  direction: 'opens-way',
+  mode: 'opens-way',
+  shape: 'fits-shape',
+  termination: 'ends-line',
+  'tuner-plan': 'picks-plan',
+  power: 'powers',
+  other: 'opens-way',
+}
 
 export interface Setting {
   readonly unit: Uid

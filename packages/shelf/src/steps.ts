@@ -167,7 +167,8 @@ const lineEnds = (hookup: Hookup, look: Lookup): Draft[] =>
     settings: [],
   }))
 
-const USUAL_COLOUR: Partial<Record<Circuit, PlugColour>> = {
+/** Colours by which the trade tells the plugs of a lead apart (common practice, no source). */
+export const USUAL_COLOUR: Partial<Record<Circuit, PlugColour>> = {
   cvbs: 'yellow',
   'audio-l': 'white',
   'audio-mono': 'white',

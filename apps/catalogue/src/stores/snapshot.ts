@@ -53,10 +53,35 @@ export const useSnapshot = defineStore('snapshot', () => {
   const ensure = async (collection: string): Promise<Result<void, Failure>> =>
     of.value === collection ? ok(undefined) : load(collection)
 
+  /** What an answer names must be known here, so the shelf is read again if it has changed meanwhile. */
+  async function whileKnown<T extends Pick<Snapshot, 'shelfVersion' | 'catalogueVersion'>>(
+    collection: string,
+    ask: () => Promise<Result<T, Failure>>,
+  ): Promise<Result<T, Failure>> {
+    const ready = await ensure(collection)
+    if (!ready.ok) return ready
+    const answered = await ask()
+    if (!answered.ok || isAt(answered.value)) return answered
+    const fresh = await load(collection)
+    return fresh.ok ? answered : fresh
+  }
+
   /** The next reader asks the server again; what is shown stays until then. */
   function markStale(): void {
     of.value = null
   }
 
-  return { snapshot, lookup, ready, readAt, failure, isAt, holds, load, ensure, markStale }
+  return {
+    snapshot,
+    lookup,
+    ready,
+    readAt,
+    failure,
+    isAt,
+    holds,
+    load,
+    ensure,
+    whileKnown,
+    markStale,
+  }
 })

@@ -4,31 +4,23 @@ import {
   type Condition,
   type ControlStands,
   type Control,
-  type ControlRole,
   type DeviceModel,
   type Key,
   type PictureGive,
   type RfGive,
   type TunedControl,
 } from '@coaxwain/models'
-import type { ChainSetting, Setting, SettingReason, Uid } from '@coaxwain/shelf'
+import {
+  REASON_OF_ROLE,
+  type ChainSetting,
+  type Setting,
+  type SettingReason,
+  type Uid,
+} from '@coaxwain/shelf'
 import { channelsIn, type PlanId } from '@coaxwain/signal'
 import { offeredBy } from '../giving'
 import type { ShelfView } from '../shelf-view'
 import type { Halt, Path } from './paths'
-
-const REASONS: Readonly<Record<ControlRole, SettingReason>> = {
-  input: 'picks-input',
-  standard: 'fits-standard',
-  scan: 'fits-scan',
-  direction: 'opens-way',
-  mode: 'opens-way',
-  shape: 'fits-shape',
-  termination: 'ends-line',
-  'tuner-plan': 'picks-plan',
-  power: 'powers',
-  other: 'opens-way',
-}
 
 const WHY: Readonly<Record<Exclude<Control['kind'], 'positions'>, SettingReason>> = {
   channel: 'picks-channel',
@@ -45,7 +37,7 @@ export function settingOf(
   const control = device?.controls.find((c) => c.key === key)
   const why = control
     ? control.kind === 'positions'
-      ? REASONS[control.role]
+      ? REASON_OF_ROLE[control.role]
       : WHY[control.kind]
     : 'powers'
   const meant = plan ?? (control && planOf(control, position))

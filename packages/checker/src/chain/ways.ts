@@ -1,5 +1,12 @@
 import type { PieceModel, Plug, PlugColour, Port } from '@coaxwain/models'
-import type { CarriedCircuit, ChainLink, ChainPiece, Link, PieceUse } from '@coaxwain/shelf'
+import {
+  USUAL_COLOUR,
+  type CarriedCircuit,
+  type ChainLink,
+  type ChainPiece,
+  type Link,
+  type PieceUse,
+} from '@coaxwain/shelf'
 import { contactOf, isSoundCircuit, mates, type Circuit, type Connector } from '@coaxwain/signal'
 import { hindrances } from '../links'
 import type { ShelfView } from '../shelf-view'
@@ -169,23 +176,9 @@ function fitness(from: Circuit, to: Circuit): number {
   return luma ? FITNESS.lookalike : FITNESS.foreign
 }
 
-/** Colours by which the trade tells the plugs of a lead apart (common practice, no source). */
-const COLOUR_OF: Partial<Record<Circuit, PlugColour>> = {
-  cvbs: 'yellow',
-  'audio-l': 'white',
-  'audio-mono': 'white',
-  'audio-r': 'red',
-  y: 'green',
-  pb: 'blue',
-  pr: 'red',
-  r: 'red',
-  g: 'green',
-  b: 'blue',
-}
-
 /** Of plugs that would do as well, the one of the usual colour is taken. */
 function wrongColours({ begun, way }: { begun: Begun; way: Way }): number {
-  const wanted = new Set(way.pairs.filter((p) => p.fitness > 0).map((p) => COLOUR_OF[p.from]))
+  const wanted = new Set(way.pairs.filter((p) => p.fitness > 0).map((p) => USUAL_COLOUR[p.from]))
   return begun.colours.filter((c) => c !== undefined && !wanted.has(c)).length
 }
 

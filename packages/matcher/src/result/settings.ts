@@ -1,12 +1,5 @@
-import {
-  controlOf,
-  POWER_KEY,
-  type Condition,
-  type Control,
-  type ControlRole,
-  type Key,
-} from '@coaxwain/models'
-import type { Setting, SettingReason, Unit } from '@coaxwain/shelf'
+import { controlOf, POWER_KEY, type Condition, type Control, type Key } from '@coaxwain/models'
+import { REASON_OF_ROLE, type Setting, type Unit } from '@coaxwain/shelf'
 import { outOfReach, type Variant } from '../compile/variant'
 import type { Way } from '../compile/way'
 import { tunedAs, type ChosenChannel } from './channels'
@@ -22,19 +15,6 @@ export interface Placing {
   readonly sends: { readonly channel: ChosenChannel; readonly control: Key | null } | null
   /** A 4:3 tube at the end, for sources that ask. */
   readonly narrowScreen: boolean
-}
-
-const REASONS: Readonly<Record<ControlRole, SettingReason>> = {
-  input: 'picks-input',
-  standard: 'fits-standard',
-  scan: 'fits-scan',
-  direction: 'opens-way',
-  mode: 'opens-way',
-  shape: 'fits-shape',
-  termination: 'ends-line',
-  'tuner-plan': 'picks-plan',
-  power: 'powers',
-  other: 'opens-way',
 }
 
 /** Every setting of one unit of a hookup: switches, channel, tuning, line ends, trimmers. */
@@ -91,7 +71,7 @@ function switches(placing: Placing, wanted: ReadonlyMap<Key, readonly string[]>)
         ...base(placing, control),
         position: first,
         orElse: [...fine.filter((p) => p !== first), ...harmless.filter((p) => !fine.includes(p))],
-        why: control.kind === 'auto' ? 'moves-itself' : REASONS[control.role],
+        why: control.kind === 'auto' ? 'moves-itself' : REASON_OF_ROLE[control.role],
         must: harmless.length < all.length,
       },
     ]
