@@ -17,7 +17,7 @@ import {
   type HookupAnswer,
 } from './form'
 import { asUsed, pieceInCaseForm, unitInCaseForm } from './parts-form'
-import { caseChannel, channelsOfPlan, controlKey, DISPLAY, SOURCE } from './translate'
+import { caseChannel, channelsOfPlan, controlKey, DISPLAY, SOURCE, THROUGH } from './translate'
 
 /** The product's answer in the words of the case form. */
 export function toCaseAnswer(question: CaseQuestion, answer: Answer, parts: Parts): HookupAnswer {
@@ -120,7 +120,7 @@ function boughtAnswer(question: CaseQuestion, purchase: Purchase, parts: Parts):
     const nth = (counts.get(key) ?? 0) + 1
     counts.set(key, nth)
     const id = nth === 1 ? boughtId(key) : `${boughtId(key)}-${nth}`
-    const used = isPiece(item) ? item : asUsed(item, answer, picturesAt(hookup, id))
+    const used = isPiece(item) ? item : asUsed(item, answer, picturesAt(question, hookup, id))
     return [{ code: key, words: item.what, item: { ...used, id } }]
   })
   const dropped = missing.flatMap(({ item }) => (isPiece(item) ? [] : [item]))
@@ -134,11 +134,12 @@ function boughtAnswer(question: CaseQuestion, purchase: Purchase, parts: Parts):
   }
 }
 
-/** The picture that comes into a box and the one that leaves it. */
-function picturesAt(hookup: Hookup, unit: string) {
+/** The picture that comes into a box and the one that leaves it, and all that the source may play. */
+function picturesAt(question: CaseQuestion, hookup: Hookup, unit: string) {
   const stops = hookup.legs.find((l) => l.purpose === 'picture')?.stops ?? []
   const at = stops.findIndex((s) => s.unit === unit)
-  return { arriving: stops[at - 1]?.picture ?? null, leaving: stops[at]?.picture ?? null }
+  const played = question.source.ports.flatMap((p) => (p.modes ?? []).map((m) => m.scan))
+  return { arriving: stops[at - 1]?.picture ?? null, leaving: stops[at]?.picture ?? null, played }
 }
 
 /** Ids of parts in the words of the form, and copies of a bought piece after the first under ids of their own. */
@@ -232,7 +233,9 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'caution.check-isolation': 'W-RADIATE',
   'caution.radiation-limit': 'W-RADIATE',
   'caution.level-lost': 'W-LEVEL-LOW',
+  'caution.level-high': 'W-OVERLOAD',
   'caution.socket-dead': 'W-BROKEN-SOCKET',
+  'caution.double-dead': 'W-BROKEN-SOCKET',
   'caution.matching-needed': 'W-IMPEDANCE',
   'caution.own-wiring': 'W-PINOUT',
   'caution.channel-socket': 'W-LOOKALIKE',
@@ -253,6 +256,8 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'caution.standard-hiss': 'W-SOUND-OFFSET',
   'caution.standard-negative': 'W-VISION-POLARITY',
   'caution.sync-kind': 'W-SYNC',
+  'caution.hum-loop': 'W-GROUND-LOOP',
+  'caution.volts-by-lead': 'W-SWITCHING-VOLTAGE',
   'caution.other-lines': 'W-SCAN',
   'caution.other-fields': 'W-NO-LOCK',
   'caution.other-colour': 'W-COLOUR-LOST',
@@ -275,6 +280,7 @@ const WARNING_OF: Readonly<Record<string, string>> = {
   'obstacle.socket-dead': 'W-BROKEN-SOCKET',
   'obstacle.one-way': 'W-DIRECTION',
   'obstacle.wrong-circuits': 'W-PINOUT',
+  'obstacle.wires-missing': 'W-PINOUT',
   'obstacle.no-handshake': 'W-HDCP',
   'obstacle.level-control': 'W-AGC',
   'obstacle.colour': 'W-COLOUR-LOST',
@@ -308,7 +314,7 @@ function warning(code: string, details: Readonly<Record<string, string | number>
 function oneAnswer(question: CaseQuestion, hookup: Hookup): CaseAnswer {
   const cautions = hookup.cautions.filter((c) => !UNSAID.includes(c.code))
   return {
-    paths: pathsOf(question, hookup),
+    paths: withTerminators(pathsOf(question, hookup), hookup),
     settings: hookup.settings.map((s) => settingOf(question, hookup, s)),
     quality: {
       picture: hookup.picture.colour ? 'colour' : 'monochrome',
@@ -486,6 +492,19 @@ function pathsOf(question: CaseQuestion, hookup: Hookup): CasePath[] {
     ),
   ]
 }
+
+/** Terminators that sit between a lead and an input come last in their connection. */
+const withTerminators = (paths: readonly CasePath[], { ends }: Hookup): CasePath[] =>
+  paths.map((path) => ({
+    ...path,
+    hops: path.hops.map((h) => ({
+      ...h,
+      by: [
+        ...h.by,
+        ...(ends ?? []).flatMap((e) => (`${e.unit}:${e.port}` === h.to + THROUGH ? e.model : [])),
+      ],
+    })),
+  }))
 
 /** From the aerial to where it is received. */
 function offAirPaths(hookup: Hookup): CasePath[] {

@@ -142,6 +142,7 @@ export interface CaseUnit {
   aspect?: string
   shape?: Stated
   syncFrom?: Stated
+  loops?: unknown
   tube?: { view?: string; lineKhz?: unknown }
   fieldStore?: boolean
   scanConversion?: boolean

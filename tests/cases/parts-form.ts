@@ -70,6 +70,8 @@ export function unitInCaseForm(id: string, model: DeviceModel): CaseUnit {
 interface Pictures {
   readonly arriving: PictureSignal | null
   readonly leaving: PictureSignal | null
+  /** Scans of the source. */
+  readonly played: readonly string[]
 }
 
 /**
@@ -90,11 +92,10 @@ export function asUsed(unit: CaseUnit, answer: CaseAnswer, pictures: Pictures): 
     .filter((p) => refs.has(`${unit.id}:${p.id}`))
     .map((p) => {
       const signal = p.dir === 'in' ? pictures.arriving : pictures.leaving
-      const modes = likeThis(
-        (p.modes ?? []).filter((m) => !isOff(m)),
-        signal,
-      )
-      return p.modes ? { ...p, modes } : p
+      const open = (p.modes ?? []).filter((m) => !isOff(m))
+      const modes = likeThis(open, signal)
+      const plain = p.dir === 'in' ? modes.filter((m) => pictures.played.includes(m.scan)) : []
+      return p.modes ? { ...p, modes: plain.length > 0 ? plain : modes } : p
     })
   const kept = new Set(ports.map((p) => p.id))
   const does = (unit.does ?? []).filter((d) => kept.has(d.from) && kept.has(d.to) && !isOff(d))
@@ -172,6 +173,7 @@ function portInCaseForm(model: DeviceModel, port: Port): CasePort {
   const pictures = jacks.filter((j) => !['sound', 'digital-sound'].includes(j.form))
   const modes = pictures.flatMap((j) => (j.form === 'rf' ? [] : modesOf(model, j)))
   const rf = pictures.find((j) => j.form === 'rf')
+  const volts = jacks.flatMap((j) => givers(model, j).flatMap(({ give }) => give.volts ?? []))
   const made: CasePort = {
     id: port.key,
     label: port.label,
@@ -181,6 +183,7 @@ function portInCaseForm(model: DeviceModel, port: Port): CasePort {
     signals: signalsAt(model, port.key),
     works: true,
     ...(modes.length > 0 ? { modes } : {}),
+    ...(volts.length > 0 ? { volts: [...new Set(volts)] } : {}),
     ...(port.impedanceOhm === undefined ? {} : { ohm: port.impedanceOhm }),
   }
   if (!rf) return made

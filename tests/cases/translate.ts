@@ -398,7 +398,7 @@ function portOf(unit: CaseUnit, port: CasePort, jacks: readonly CaseJack[], colu
     isolated: unit.liveChassis === true && !aerial ? 'no' : 'yes',
     ...directCurrentOf(unit, port),
     ...loadOf(unit, port),
-    ...(port.loops === undefined ? {} : { loopsTo: port.loops }),
+    ...loopOf(unit, port),
     at: { face: 'back', row: 0, column },
   }
 }
@@ -433,9 +433,35 @@ function directCurrentOf(
 
 const is75 = (value: unknown): boolean => value === undefined || /75/.test(String(value))
 
+/** Where a line goes on: said with the port or with the unit, else an output that has the load of the line. */
+function loopOf(unit: CaseUnit, port: CasePort): Pick<Port, 'loopsTo'> {
+  if (port.dir !== 'in' || port.signals.includes('rf')) return {}
+  const own = stated(port.loops ?? (unit.loops as Record<string, unknown> | undefined)?.[port.id])
+  const told = own[0]?.value ?? loopEnds(unit, port)
+  if (typeof told === 'string') return { loopsTo: told }
+  const loaded = (unit.does ?? []).find(
+    ({ from, to }) =>
+      from === port.id && stated(unit.ports.find((p) => p.id === to)?.load).length > 0,
+  )
+  return loaded && stated(port.load).length === 0 ? { loopsTo: loaded.to } : {}
+}
+
+/** The other end where the loops of a unit are listed as pairs of ports. */
+const loopEnds = ({ loops }: CaseUnit, { id }: CasePort): unknown =>
+  (Array.isArray(loops) ? (loops as object[]) : [])
+    .map((pair) => Object.values(pair) as unknown[])
+    .find((pair) => pair.includes(id))
+    ?.find((other) => other !== id)
+
+/** The load of a port, or of the socket by which its line would go on. */
+function loadStated(unit: CaseUnit, port: CasePort) {
+  const loop = unit.ports.find((p) => p.id === loopOf(unit, port).loopsTo)
+  return stated(port.load ?? loop?.load)
+}
+
 /** How an input ends its line: always, never, or as one control is set. */
 function loadOf(unit: CaseUnit, port: CasePort): Pick<Port, 'load'> {
-  const said = stated(port.load)
+  const said = loadStated(unit, port)
   const ends = said.find((s) => is75(s.value))
   if (said.length === 0) return {}
   const [control, positions] = Object.entries(ends?.when ?? {})[0] ?? []
@@ -772,6 +798,8 @@ function playing(unit: CaseUnit, jacks: readonly CaseJack[]): ModelFunction {
   const anywhere = outs.flatMap((j) => modesFor(j)).filter(serves)
   const pictures = outs.filter(isPicture).flatMap((j): Give[] => {
     const modes = modesFor(j).filter(serves)
+    // Without a channel of its own an RF output only repeats what comes in.
+    if (j.jack.form === 'rf' && j.ports.every((p) => !p.rf)) return []
     if (j.jack.form === 'rf')
       return gives(unit, j, besideLoop(unit, j), modes).map((g) => ({
         ...g,
@@ -1008,7 +1036,9 @@ function pictureGives({ unit, jacks, from, how }: Passing): Give[] {
     .flatMap((to): Give[] => {
       const found = (feeds(unit, from, to) ?? []).filter((d) => d.how === how)
       if (found.length === 0) return []
-      const made = gives(unit, to, mergeWhen(found))
+      const stands = allHold([mergeWhen(found), ...outletsEnded(unit, to)])
+      if (!stands) return []
+      const made = gives(unit, to, stands)
       return how === 'loop'
         ? made.map(({ jack, while: stands }) => ({
             jack,
@@ -1017,6 +1047,19 @@ function pictureGives({ unit, jacks, from, how }: Passing): Give[] {
           }))
         : made
     })
+}
+
+/** Outlets with a switched load have it while nothing hangs on them, and not while something does. */
+function outletsEnded(unit: CaseUnit, to: CaseJack): (When | undefined)[] {
+  const loops = unit.ports.map((p) => loopOf(unit, p).loopsTo)
+  const outlets = unit.ports.filter((p) => p.dir === 'out' && !loops.includes(p.id))
+  return outlets.map((port) => {
+    const when = stated(port.load).find((s) => is75(s.value))?.when
+    const [control, ending] = Object.entries(when ?? {})[0] ?? []
+    if (control === undefined || !to.ports.includes(port)) return when
+    const choices = unit.settings?.find((s) => s.name === control)?.choices ?? []
+    return { [control]: choices.filter((c) => ending?.includes(c) !== true) }
+  })
 }
 
 /** Sound that leaves along with a picture: out of the picture input itself, else from a sound input. */
@@ -1124,14 +1167,25 @@ const HOME_VOLTS: readonly (readonly [prefix: string, volts: number])[] = [
   ['fr-', 230],
 ]
 
+/** South American sets count in the same channels as others: their colour tells, and in Brazil not even that. */
+function homeVolts(unit: CaseUnit): number | undefined {
+  const tuner = unit.ports.find((p) => p.tuner)?.tuner
+  const colours = [...(tuner?.colours ?? []), ...unit.ports.flatMap(coloursTaken)]
+  if (colours.includes('pal-n')) return 220
+  if (colours.includes('pal-m')) return undefined
+  return HOME_VOLTS.find(([prefix]) => tuner?.plans[0]?.startsWith(prefix))?.[1]
+}
+
+const coloursTaken = ({ modes }: CasePort): string[] => (modes ?? []).map((m) => m.colour)
+
 /** Stated with a unit, or those of the country of a display; anything else takes what there is. */
 function mainsOf(unit: CaseUnit, role: Role): DeviceModel['mains'] {
   const stated = /(\d+)\s*V/.exec(unit.mains ?? '')
-  const plan = unit.ports.find((p) => p.tuner)?.tuner?.plans[0] ?? ''
-  const home =
-    role === 'display' ? HOME_VOLTS.find(([prefix]) => plan.startsWith(prefix)) : undefined
-  const volts = stated ? Number(stated[1]) : home?.[1]
-  return { volts: volts === undefined ? [100, 240] : [volts, volts], hz: [50, 60] }
+  const volts = stated ? Number(stated[1]) : role === 'display' ? homeVolts(unit) : undefined
+  if (volts === undefined) return { volts: [100, 240], hz: [50, 60] }
+  // What is called 220, 230 and 240 V is one mains (common practice, no source).
+  const isHigh = role !== 'display' && volts >= 220 && volts <= 240
+  return { volts: isHigh ? [220, 240] : [volts, volts], hz: [50, 60] }
 }
 
 type Role = 'source' | 'display' | 'box'
@@ -1193,11 +1247,46 @@ const receiving = (jacks: readonly CaseJack[]): ModelFunction[] =>
       power: 'on',
     }))
 
-/** Something else hangs on a port that is taken: for this question it is not there. */
+/** Something else hangs on a port that is taken, or no position chooses it: for this question it is not there. */
 const withoutTaken = (unit: CaseUnit): CaseUnit => ({
   ...unit,
-  ports: unit.ports.filter((p) => !p.taken),
+  ports: unit.ports.filter((p) => !p.taken && canStand(unit, p.when)),
 })
+
+/** Each control has one of the positions that are named; one without a list has any. */
+const canStand = ({ settings }: CaseUnit, when: When | undefined): boolean =>
+  Object.entries(when ?? {}).every(([control, positions]) => {
+    const choices = settings?.find((s) => s.name === control)?.choices
+    return choices === undefined || positions.some((p) => choices.includes(p))
+  })
+
+/** Ends the name of the place at an input where a terminator goes in between plug and socket. */
+export const THROUGH = '~end'
+
+/** A terminator that is plugged in between, so that its line needs no loop. */
+const isThrough = ({ terminates, ends }: CasePiece): boolean =>
+  Boolean(terminates) &&
+  ends.some((e) => e.endsWith('-plug')) &&
+  ends.some((e) => e.endsWith('-socket'))
+
+/** At an input that never ends its line such a terminator sits as others do on a loop socket. */
+function withPlaces(unit: CaseUnit, pieces: readonly CasePiece[]): CaseUnit {
+  const open = unit.ports.filter((port) => {
+    const said = stated(port.load)
+    return port.dir === 'in' && said.length > 0 && !said.some((s) => is75(s.value))
+  })
+  if (open.length === 0 || !pieces.some(isThrough)) return unit
+  const placed = unit.ports.map((p) => (open.includes(p) ? { ...p, loops: p.id + THROUGH } : p))
+  const places = open.map(({ id, connector, signals, ...p }): CasePort => ({
+    id: id + THROUGH,
+    label: p.label,
+    dir: 'out',
+    connector,
+    mount: p.mount,
+    signals,
+  }))
+  return { ...unit, ports: [...placed, ...places] }
+}
 
 const decodes = (tuner: CaseTuner | undefined): boolean =>
   tuner?.control !== undefined && tuner.digital.length > 0
@@ -1248,7 +1337,11 @@ const signalCircuits = (signals: readonly string[]): Circuit[] => [
 function pieceOf(piece: CasePiece): PieceModel {
   const limited = piece.wired ?? piece.carries
   const meant = limited ? signalCircuits(limited) : undefined
-  const [a, b, wires] = piece.joins ? mixing(piece) : ordinary(piece, meant)
+  const [a, b, wires] = piece.terminates
+    ? ending(piece)
+    : piece.joins
+      ? mixing(piece)
+      : ordinary(piece, meant)
   const ohm = piece.ends.map((e) => (LOOSE_300.includes(e) ? 300 : 75))
   return {
     format: 1,
@@ -1271,6 +1364,12 @@ function pieceOf(piece: CasePiece): PieceModel {
     ),
     blocksDc: false,
   }
+}
+
+/** A terminator, by the end that goes into a socket. */
+function ending({ ends }: CasePiece): [Plug[], Plug[], Wire[]] {
+  const connector = ends.find((e) => e.endsWith('-plug')) ?? ends[0]
+  return [[{ connector: connector as Connector }], [], []]
 }
 
 function mixing(piece: CasePiece): [Plug[], Plug[], Wire[]] {
@@ -1390,7 +1489,8 @@ export function translate(question: CaseQuestion): Translated {
   const pieces = question.shelf.filter(isPiece)
   const plays = scansPlayed(question.source)
   const device = (id: string, whole: CaseUnit, role: Role): [string, CaseUnit, DeviceModel] => {
-    const unit = withoutTaken(withImplied(whole))
+    const present = withoutTaken(withImplied(whole))
+    const unit = role === 'display' ? withPlaces(present, pieces) : present
     return [id, unit, deviceOf(unit, role, plays)]
   }
   const devices = [

@@ -20,7 +20,7 @@ import {
   type Working,
 } from './chains'
 import { judge, type Draft, type Judged } from './draft'
-import { Layout, type Cores, type Laid, type Wire } from './layout'
+import { Layout, type Laid, type Wire } from './layout'
 import { freeBoxes, likenessOf, oneOfEach } from './likeness'
 import { SoundPlans, type Plan } from './sounds'
 import { settingsOf, standsOf, tuningsOf, type Doing } from './stands'
@@ -39,6 +39,7 @@ const MAY_BE_RIGHTED = new Set<string>([
   'demand-missed',
   'aerial-not-kept',
   'legs-and-links-differ',
+  'line-not-ended',
 ])
 
 /** A unit that has let the picture in; what is seen where it is the display. */
@@ -69,10 +70,7 @@ export class Enumerator {
   private readonly mostHeard: number
   private readonly through = new Map<Box, Doing[]>()
 
-  constructor(
-    private readonly bench: Bench,
-    private readonly cores: Cores = 'together',
-  ) {
+  constructor(private readonly bench: Bench) {
     this.wiring = new Wiring(bench)
     this.plans = new SoundPlans(bench, this.wiring)
     this.mostPieces = bench.drawer.reduce((sum, s) => sum + s.count, 0)
@@ -141,7 +139,7 @@ export class Enumerator {
   }
 
   private lay(wires: readonly Wire[]): Laid | null {
-    return new Layout(this.bench.drawer, wires, this.cores).solve(this.mostPieces)
+    return new Layout(this.bench.drawer, wires).solve(this.mostPieces)
   }
 
   /** The unit under each setting of its controls in which the check lets the picture in. */

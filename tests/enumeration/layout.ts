@@ -1,5 +1,6 @@
 import type { PieceModel } from '@coaxwain/models'
 import type { CarriedCircuit, Link, PieceUse, PortRef, Uid } from '@coaxwain/shelf'
+import { isSoundCircuit } from '@coaxwain/signal'
 import type { Stock } from './bench'
 import { sameBothWays, type Path, type Step } from './paths'
 
@@ -17,20 +18,19 @@ export interface Laid {
   readonly pieces: number
 }
 
-/** A piece taken out of the drawer: its model, which one of them, and the units that it lies between. */
+/** A piece taken out of the drawer: its model, and which one of them. */
 interface Taken {
   readonly stock: Stock
   readonly copy: number
-  readonly between: string
 }
 
-/**
- * Whether the cores of one lead may serve different pairs of units: "anywhere" by the letter of the rule that
- * legs may share leads, "together" where all that is plugged to one piece belongs to one pair of units.
- */
-export type Cores = 'anywhere' | 'together'
-
 const betweenOf = ({ from, to }: Wire): string => [from.unit, to.unit].sort().join(' ')
+
+const isSound = ({ carried }: Wire): boolean => isSoundCircuit(carried.from)
+
+/** A picture and a sound that leave one unit, or go into one. */
+const mayShare = (a: Wire, b: Wire): boolean =>
+  isSound(a) !== isSound(b) && (a.from.unit === b.from.unit || a.to.unit === b.to.unit)
 
 const nameOfPort = ({ unit, port }: PortRef): string => `${unit} ${port}`
 
@@ -62,7 +62,6 @@ export class Layout {
   constructor(
     private readonly drawer: readonly Stock[],
     private readonly wires: readonly Wire[],
-    private readonly cores: Cores = 'together',
   ) {}
 
   /** The least, or null when it cannot be done with so many pieces. */
@@ -87,6 +86,7 @@ export class Layout {
     const wire = this.wires[index]
     if (!wire) return true
     return wire.paths.some((path) => {
+      if (path.steps.length > this.most) return false
       this.uses[index] = []
       return this.step(index, path, 0, nameOfPort(wire.from))
     })
@@ -117,12 +117,31 @@ export class Layout {
 
   /** Pieces of a model that lie there already, and one more where that is allowed. */
   private choices(index: number, model: Uid): Taken[] {
-    const between = betweenOf(this.wires[index]!)
     const laid = this.taken.filter((t) => t.stock.model === model)
-    const open = laid.filter((t) => this.cores === 'anywhere' || t.between === between)
+    const open = laid.filter((t) => this.mayServe(t, index))
     const stock = this.drawer.find((s) => s.model === model)
     const more = stock && laid.length < stock.count && this.taken.length < this.most
-    return more ? [...open, { stock, copy: laid.length + 1, between }] : open
+    return more ? [...open, { stock, copy: laid.length + 1 }] : open
+  }
+
+  /**
+   * A piece serves one pair of units; or two, of which one has a picture of it, the other a sound, and both
+   * have the unit in common that this comes from or goes to.
+   */
+  private mayServe({ stock, copy }: Taken, index: number): boolean {
+    const own = this.wires[index]!
+    const served = this.wires
+      .slice(0, index)
+      .filter((_, i) => this.uses[i]!.some((u) => u.model === stock.model && u.copy === copy))
+    const [here, elsewhere] = [true, false].map((is) =>
+      served.filter((w) => (betweenOf(w) === betweenOf(own)) === is),
+    )
+    return (
+      elsewhere!.length === 0 ||
+      (new Set(elsewhere!.map(betweenOf)).size === 1 &&
+        elsewhere!.every((w) => mayShare(w, own)) &&
+        here!.every((w) => isSound(w) === isSound(own)))
+    )
   }
 
   /** Of like cores that nothing is plugged to, only the first is tried. */

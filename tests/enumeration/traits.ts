@@ -3,6 +3,7 @@ import type { Hookup, Snapshot } from '@coaxwain/shelf'
 import { enumerate } from './enumerate'
 import type { Shelf } from './shelves/draft-shelf'
 import { CONFLICT } from './shelves/mutate'
+import { sharedPieces } from './shelves/pieces'
 import type { Asked } from './shrink'
 import { noWorse, vectorOf, withoutSilent } from './vectors'
 
@@ -15,6 +16,7 @@ export const QUOTAS = {
   'two units of a model': 0.1,
   'last lead': 0.1,
   'control conflict': 0.1,
+  'shared lead': 0.04,
 } as const
 
 export type Trait = keyof typeof QUOTAS
@@ -28,6 +30,7 @@ export function traitsOf(shelf: Shelf, hookups: readonly Hookup[]): Trait[] {
     'split sound': hookups.some((h) => h.legs.some((leg) => leg.purpose === 'sound')),
     'two units of a model': hasTwins(shelf.snapshot),
     'last lead': shelf.recipe === 'last lead' && gainsBy(shelf, hookups, withOneMore),
+    'shared lead': hookups.some((h) => sharedPieces(h.links).length > 0),
     'control conflict': shelf.recipe === 'conflict' && gainsBy(shelf, hookups, withoutConflict),
   }
   return (Object.keys(traits) as Trait[]).filter((trait) => traits[trait])

@@ -41,7 +41,8 @@ const distinct = <T extends object>(things: readonly T[]): T[] => [
 const stopsOf = ({ hookup }: Bench): { leg: Leg; stop: Stop }[] =>
   hookup.legs.flatMap((leg) => leg.stops.map((stop) => ({ leg, stop })))
 
-const socketsIn = (bench: Bench): Socket[] =>
+/** Every form on a port that a hookup leans on, once. */
+export const socketsIn = (bench: Bench): Socket[] =>
   distinct(
     stopsOf(bench).flatMap(({ leg, stop }) => [
       ...socketsAt(bench, leg, stop, 'to'),
@@ -73,15 +74,17 @@ const socketsLeantOn = (bench: Bench): Leant[] =>
     return [{ doubt, ifDead: finding('socket-dead', { unit: uid, jack, port }) }]
   })
 
+/** Every function that a hookup leans on, once. */
+export const functionsIn = (bench: Bench): { readonly unit: Uid; readonly fn: Key }[] =>
+  distinct(stopsOf(bench).map(({ stop }) => ({ unit: stop.unit, fn: stop.function })))
+
 const functionsLeantOn = (bench: Bench): Leant[] =>
-  distinct(stopsOf(bench).map(({ stop }) => ({ unit: stop.unit, fn: stop.function }))).flatMap(
-    ({ unit: uid, fn }) => {
-      const unit = bench.view.unit(uid)
-      if (!unit) return []
-      const doubt = doubtOf(unit, functionState(unit, fn))
-      return [{ doubt, ifDead: finding('function-dead', { unit: uid, function: fn }) }]
-    },
-  )
+  functionsIn(bench).flatMap(({ unit: uid, fn }) => {
+    const unit = bench.view.unit(uid)
+    if (!unit) return []
+    const doubt = doubtOf(unit, functionState(unit, fn))
+    return [{ doubt, ifDead: finding('function-dead', { unit: uid, function: fn }) }]
+  })
 
 /** Units with a socket in use of which nobody knows whether it is joined to the chassis. */
 const chassisUnknown = (bench: Bench): number =>

@@ -156,7 +156,7 @@ const FAULTS: Readonly<Record<FindingCode, Fault>> = {
   'not-tuned': byAir((r) => void (settingOf(r, 'tuned-to').position = '4')),
   'channel-not-offered': byAir((r) => void (settingOf(r, 'channel').position = '5')),
   'system-does-not-carry': byAir(
-    (r) => void (functionIn(r, 'modulator', 'modulate').gives[0]!.rf![0]!.system = 'B'),
+    (r) => void (functionIn(r, 'modulator', 'modulate').gives[0]!.rf![0]!.system = 'A'),
   ),
   protection: direct((r) => {
     r.question.material.protection = 'agc-pulses'

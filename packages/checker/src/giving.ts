@@ -156,10 +156,15 @@ function colourLeft(row: PictureGive, { wave, taken, lumaOnly }: Inner): Colour 
 
 // ---------------------------------------------------------------- carriers
 
-/** Scans that a system of so many lines carries, with the non-interlaced pictures of its raster. */
+const TELEVISION: readonly ScanId[] = ['525i60', '262p60', '625i50', '312p50']
+
+/**
+ * Scans that a modulator for a system of so many lines sends: one for 525 or 625 knows nothing of lines and sends
+ * both, with the non-interlaced pictures of either raster (common practice, no source).
+ */
 const CARRIED: Readonly<Record<405 | 525 | 625 | 819, readonly ScanId[]>> = {
-  525: ['525i60', '262p60'],
-  625: ['625i50', '312p50'],
+  525: TELEVISION,
+  625: TELEVISION,
   405: ['405i50'],
   819: ['819i50'],
 }

@@ -7,5 +7,6 @@ export {
   type CheckedArrangement,
 } from './check-arrangement'
 export { checkHookup, type Checked } from './check-hookup'
+export { checkProofs, type CheckedProofs, type ProofFinding } from './check-proofs'
 export { FINDINGS, type Finding, type FindingCode } from './finding'
 export { HEARINGS, SIGHTS, whenWrong, type Hearing, type Sight, type WhenWrong } from './when-wrong'

@@ -363,14 +363,14 @@ const FUNCTIONS: readonly Mutation[] = [
     secondLine((_, rig) => void (rig.question.display.input = 'line')),
   ),
   row(
-    'modulates 525 lines by a 625-line system',
+    'modulates 525 lines by a 405-line system',
     'system-does-not-carry',
-    (h) => (h.legs[0]!.stops[1]!.function = 'modulate-b'),
+    (h) => (h.legs[0]!.stops[1]!.function = 'modulate-a'),
     prepared(modulated, (rig) => {
-      const fn = { ...loose(functionIn(rig, 'modulator', 'modulate')), key: 'modulate-b' }
-      fn.gives[0]!.rf![0]!.system = 'B'
+      const fn = { ...loose(functionIn(rig, 'modulator', 'modulate')), key: 'modulate-a' }
+      fn.gives[0]!.rf![0]!.system = 'A'
       deviceIn(rig, 'modulator').functions.push(fn)
-      unitIn(rig, 'modulator').functions.push({ function: 'modulate-b', state: 'works' })
+      unitIn(rig, 'modulator').functions.push({ function: 'modulate-a', state: 'works' })
     }),
   ),
 ]

@@ -1,4 +1,4 @@
-import { LIMITS, mayLend } from '@coaxwain/shelf'
+import { LIMITS, mayLend, type Question, type Stop } from '@coaxwain/shelf'
 import { unitsIn, type Bench } from './bench'
 import { finding, type Finding } from './finding'
 
@@ -21,7 +21,7 @@ function checkLending({ question, hookup, view }: Bench): Finding[] {
 }
 
 /** A leg passes no unit twice and not too many; every link belongs to a leg and joins units of legs. */
-function checkLegs({ hookup }: Bench): Finding[] {
+function checkLegs({ hookup, question }: Bench): Finding[] {
   const used = new Set(hookup.legs.flatMap((l) => l.links))
   const strange = [...used].some((i) => hookup.links[i] === undefined)
   const units = new Set(unitsIn(hookup))
@@ -29,7 +29,7 @@ function checkLegs({ hookup }: Bench): Finding[] {
   const loose = hookup.links.some((_, i) => !used.has(i))
   return [
     ...hookup.legs.flatMap(({ purpose, stops }) => [
-      ...(new Set(stops.map((s) => s.unit)).size < stops.length
+      ...(new Set(stops.map((s) => s.unit)).size < stops.length - timesMore(stops, question)
         ? [finding('unit-twice', { leg: purpose })]
         : []),
       ...(stops.length - 2 > LIMITS.boxesInLeg
@@ -52,3 +52,11 @@ function checkHarm({ hookup, view }: Bench): Finding[] {
       : []
   })
 }
+
+/** A set that plays and shows at once stands at both ends of a leg. */
+const timesMore = (stops: readonly Stop[], { source, display }: Question): number =>
+  source.unit === display.unit &&
+  stops.length > 1 &&
+  [stops[0], stops.at(-1)].every((s) => s?.unit === source.unit)
+    ? 1
+    : 0

@@ -24,6 +24,9 @@ const ALDER_LANE: readonly Row[] = [
   [127, 107, {}, 'moves-itself pack-centre-negative'],
   [128, 102, {}, 'chassis-may-be-live check-chassis pack-ac'],
   [130, 102, {}, '!line-rate !no-common-form'],
+  [135, 101, {}, 'repeats-aerial'],
+  [135, 115, { demands: { keepAerial: true } }, 'hum-loop'],
+  [142, 101, {}, 'double-dead level-high'],
   [
     142,
     103,
@@ -38,6 +41,7 @@ const MARRAM_ROW: readonly Row[] = [
   [8, 3, { material: { scan: '525i60' } }, 'sixty-fields'],
   [12, 5, {}, '!whip-only'],
   [14, 3, {}, 'channel-socket box-waits silent'],
+  [9, 3, { avoid: [55] }, '!wires-missing'],
   [15, 6, {}, 'no-loudspeaker'],
   [17, 1, {}, 'less-detail wide-picture'],
 ]
@@ -56,6 +60,7 @@ const SALLOW_YARD: readonly Row[] = [
   [22, 11, {}, '!out-of-reach'],
   [22, 14, {}, '!line-not-ended'],
   [26, 3, {}, 'own-wiring'],
+  [26, 5, {}, '!switching-voltage'],
   [27, 5, {}, 'cross-colour direction-switch choose-by-hand'],
   [29, 3, {}, 'interlaced-only'],
   [30, 3, { material: { protection: 'hdcp' } }, '!no-handshake handshake-needed'],
@@ -76,7 +81,8 @@ const SALLOW_YARD: readonly Row[] = [
     'radiation-limit check-isolation channel-stays-free channel-below splitter-radiates level-lost',
   ],
   // from other countries
-  [20, 41, { material: { scan: '525i60' } }, '!switching-voltage reduced-height'],
+  [20, 41, { material: { scan: '525i60' } }, 'volts-by-lead reduced-height'],
+  [20, 84, {}, 'standard-negative'],
   [37, 3, {}, 'mains-differs colour-not-decoded sound-carrier-socket'],
   [38, 3, {}, 'digital-socket scan-too-fast'],
   [42, 1, {}, '!vision-polarity !sound-spacing'],
@@ -97,6 +103,10 @@ const ROWS: Readonly<Record<string, readonly Row[]>> = {
 const NEVER: Readonly<Record<string, string>> = {
   '!not-a-channel':
     'A tuner takes the form RF alone, and an RF output without a carrier starts no picture: what goes into a tuner by a plug that fits and is no channel is told before, as other circuits.',
+  'other-socket':
+    'It needs a socket on a player without picture and sound that takes a plug of the set, such as one for tape data, and no invented model has one.',
+  'sync-kind':
+    'It needs one socket that takes RGB with this sync or with that, as a switch stands, and no invented monitor has one.',
   '!not-taken':
     'It needs a plain colour in the form of another, such as colour differences on a socket for RGB; every invented model gives each form the colour that belongs to it, and no unit was changed so.',
 }

@@ -17,11 +17,13 @@ export interface HookupSearch {
 }
 
 export interface SearchOptions {
-  /** Label expansions, for the shelf and for purchases apart. */
+  /** Label expansions, for the shelf and, unless that is more than they may have, for purchases apart. */
   readonly budget?: number | undefined
   /** Ordinary parts that may be bought where the shelf does not do it. */
   readonly parts?: Parts | undefined
 }
+
+const shownOf = (hookups: readonly Hookup[]) => choose(withSound(hookups), LIMITS.hookupsShown)
 
 /** Makes a shelf ready for any number of questions; what is worked out for one serves the next. */
 export const compileShelf = (snapshot: Snapshot): CompiledShelf => new CompiledShelf(snapshot)
@@ -51,7 +53,11 @@ export function createSearch(
     if (!solver.done || hookups) return
     hookups = built()
     if (parts && !hookups.some((h) => h.worksFully)) {
-      shopping = new Shopping(shelf, question, parts, budget)
+      const now = shownOf(hookups).shown[0] ?? null
+      shopping = new Shopping(shelf, question, now, {
+        parts,
+        budget: Math.min(budget, LIMITS.budgetOfPurchases),
+      })
     }
   }
 
@@ -72,7 +78,7 @@ export function createSearch(
       return work()
     },
     best() {
-      const { shown, more } = choose(withSound(built()), LIMITS.hookupsShown)
+      const { shown, more } = shownOf(built())
       return {
         format: 1,
         verdict: shown.length > 0 ? 'yes' : 'none',
@@ -81,7 +87,7 @@ export function createSearch(
         hookups: shown,
         moreCount: more,
         obstacles: solver.obstacles(),
-        purchases: shopping?.done ? shopping.purchases(shown[0] ?? null) : [],
+        purchases: shopping?.done ? shopping.purchases() : [],
       }
     },
   }

@@ -8,7 +8,7 @@ import {
 } from '@coaxwain/models'
 import { isSoundCircuit, type Circuit } from '@coaxwain/signal'
 import { fitted } from './fitted'
-import type { Hookup, Link, Setting } from './hookup'
+import type { Hookup, Link, PieceUse, Setting } from './hookup'
 import type { Snapshot, Uid, Unit } from './unit'
 
 /** A code with the details that its sentence needs. */
@@ -140,17 +140,111 @@ function groupLinks(hookup: Hookup): number[][] {
 const multiway = (link: Link): boolean => link.circuits.length > 1
 
 function joins(hookup: Hookup, look: Lookup): Draft[] {
-  return groupLinks(hookup).flatMap((group) => {
+  const groups = groupLinks(hookup)
+  return groups.flatMap((group, nth) => {
     const first = hookup.links[group[0]!]!
     const segments = Math.max(1, first.pieces.length)
-    return Array.from({ length: segments }, (_, index): Draft => ({
-      kind: 'join',
-      say: joinSentence(hookup, group, index, look),
-      lines: joinLines(first, index, segments, look),
-      segments: group.map((link) => ({ link, index })),
-      settings: [],
-    }))
+    const earlier = groups.slice(0, nth).flatMap((g) => g.map((i) => hookup.links[i]!))
+    return Array.from({ length: segments }, (_, index): Draft => {
+      const plugged = pluggedBefore(first, index, earlier)
+      const again = plugged && againSentence(first, index, plugged, look)
+      const isSame = plugged && !again
+      return {
+        kind: 'join',
+        say: again ?? joinSentence(hookup, group, index, look),
+        lines: [
+          ...joinLines(first, index, segments, look),
+          ...(isSame ? [plain('step.same-lead', { name: pieceName(first, index, look) })] : []),
+          ...(isShared(first, index, hookup)
+            ? group.flatMap((i) => tails(hookup.links[i]!, index, look))
+            : []),
+        ],
+        segments: group.map((link) => ({ link, index })),
+        settings: [],
+      }
+    })
   })
+}
+
+const pieceName = (link: Link, index: number, look: Lookup): string =>
+  look.piece(link.pieces[index]!.model).name
+
+const isOnWayOf = (a: Link, b: Link): boolean =>
+  a.from.unit === b.from.unit && a.to.unit === b.to.unit
+
+/** Uses of the piece of a segment by links between other units. */
+const usedBy = (link: Link, index: number, others: readonly Link[]): PieceUse[] => {
+  const own = link.pieces[index]
+  return others
+    .filter((other) => !isOnWayOf(other, link))
+    .flatMap((other) => other.pieces)
+    .filter((use) => own && use.model === own.model && use.copy === own.copy)
+}
+
+const isShared = (link: Link, index: number, { links }: Hookup): boolean =>
+  usedBy(link, index, links).length > 0
+
+/** Which plugs of a piece sit somewhere before a step; null when the piece is not in use before. */
+interface Plugged {
+  readonly near: boolean
+  readonly far: boolean
+}
+
+function pluggedBefore(link: Link, index: number, earlier: readonly Link[]): Plugged | null {
+  const own = link.pieces[index]
+  const uses = usedBy(link, index, earlier)
+  if (!own || uses.length === 0) return null
+  const isSame = (side: 'inPlug' | 'outPlug'): boolean =>
+    uses.some((use) => use.wayRound === own.wayRound && use[side] === own[side])
+  return { near: isSame('inPlug'), far: isSame('outPlug') }
+}
+
+/** What is still to be plugged of a lead of which one end sits already; null where neither does. */
+function againSentence(link: Link, index: number, plugged: Plugged, look: Lookup): Say | null {
+  const name = pieceName(link, index, look)
+  const next = link.pieces[index + 1]
+  const last = link.pieces[index - 1]
+  if (plugged.near)
+    return next
+      ? plain('step.join.same-to-piece', { name, next: look.piece(next.model).name })
+      : plain('step.join.same-to', {
+          name,
+          to: look.name(link.to.unit),
+          toPort: look.portLabel(link.to),
+        })
+  if (!plugged.far) return null
+  return last
+    ? plain('step.join.same-from-piece', { name, last: look.piece(last.model).name })
+    : plain('step.join.same-from', {
+        name,
+        from: look.name(link.from.unit),
+        fromPort: look.portLabel(link.from),
+      })
+}
+
+/** Which tail of a lead goes where, by its colour. */
+function tails(link: Link, index: number, look: Lookup): Say[] {
+  const use = link.pieces[index]!
+  const piece = look.piece(use.model)
+  const [entry, exit] = use.wayRound === 'forward' ? [piece.a, piece.b] : [piece.b, piece.a]
+  // With several plugs at both ends the sentence itself goes by their colours.
+  if (entry.length > 1 && exit.length > 1) return []
+  const ends = [
+    ...(entry.length > 1 && index === 0 ? [{ plug: entry[use.inPlug], at: link.from }] : []),
+    ...(exit.length > 1 && index === link.pieces.length - 1
+      ? [{ plug: exit[use.outPlug], at: link.to }]
+      : []),
+  ]
+  return ends.flatMap(({ plug, at }) =>
+    plug?.colour
+      ? [
+          plain(`step.tail.${plug.colour}`, {
+            unit: look.name(at.unit),
+            port: look.portLabel(at),
+          }),
+        ]
+      : [],
+  )
 }
 
 /** Terminators, one by one. */

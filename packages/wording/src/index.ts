@@ -9,6 +9,7 @@ import { GENERAL } from './messages/general'
 import { HOOKUP, OBSTACLES, PURCHASES } from './messages/hookup'
 import { MODELS } from './messages/models'
 import { PROBLEMS } from './messages/problems'
+import { PROVE } from './messages/prove'
 import { SCREENS } from './messages/screens'
 import { SHELF } from './messages/shelf'
 
@@ -21,6 +22,7 @@ export const MESSAGES = {
   ...APP,
   ...ASK,
   ...ARRANGEMENT,
+  ...PROVE,
   ...HOOKUP,
   ...CAUTIONS,
   ...CHECK,

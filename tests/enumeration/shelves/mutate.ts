@@ -6,9 +6,10 @@ import {
   type Model,
   type ModelFunction,
   type PieceModel,
+  type PlugColour,
 } from '@coaxwain/models'
-import { choice } from '@coaxwain/models/build'
-import type { Connector } from '@coaxwain/signal'
+import { choice, wire } from '@coaxwain/models/build'
+import type { Circuit, Connector } from '@coaxwain/signal'
 import type { Chance } from '../../support/chance'
 import { loose, type Loose } from '../../support/loose'
 import { prefixed, renamedDevice } from '../../support/rename'
@@ -143,6 +144,25 @@ export function cut(piece: PieceModel, chance: Chance): PieceModel {
   if (piece.wires.length < 2) return piece
   const left = piece.wires.filter((_, i) => i !== 0 || !chance.isHit(0.5))
   return { ...piece, wires: left.length === piece.wires.length ? piece.wires.slice(0, -1) : left }
+}
+
+const TAILS: readonly (readonly [Circuit, PlugColour])[] = [
+  ['cvbs', 'yellow'],
+  ['audio-l', 'white'],
+  ['audio-r', 'red'],
+]
+
+/** A lead with one multi-way plug at each end, with phono tails in place of the second; null where it has no sound. */
+export function withTails(piece: PieceModel): PieceModel | null {
+  const [a, b] = [piece.a, piece.b]
+  const kept = TAILS.filter(([c]) => piece.wires.some((w) => w.a.circuit === c))
+  if (a.length + b.length !== 2 || kept.length < TAILS.length) return null
+  return {
+    ...piece,
+    kind: 'lead',
+    b: kept.map(([, colour]) => ({ connector: 'phono-plug', colour })),
+    wires: kept.map(([circuit], i) => wire([0, circuit], [i, 'any'])),
+  }
 }
 
 /** A function has both a picture and a sound that come in or go out apart. */

@@ -2,6 +2,7 @@ import { DEMO } from '@coaxwain/demo'
 import { jackOf, type DeviceModel, type PieceModel } from '@coaxwain/models'
 import type { Uid } from '@coaxwain/shelf'
 import { isPictureForm } from '@coaxwain/signal'
+import { withTails } from './mutate'
 
 /** A model of the demo catalogue with its uid. */
 export interface Named<M> {
@@ -18,6 +19,12 @@ export const DEVICES: readonly Named<DeviceModel>[] = models.flatMap(([uid, mode
 export const PIECES: readonly Named<PieceModel>[] = models.flatMap(([uid, model]) =>
   model.type === 'piece' ? [{ uid, model }] : [],
 )
+
+/** Leads that end in tails instead of their second plug. */
+export const TAILED: readonly Named<PieceModel>[] = PIECES.flatMap(({ uid, model }) => {
+  const tailed = withTails(model)
+  return tailed ? [{ uid: `${uid}-tailed`, model: tailed }] : []
+})
 
 const hasPicture = (model: DeviceModel, keys: readonly string[]): boolean =>
   keys.some((key) => isPictureForm(jackOf(model, key).form))
@@ -39,6 +46,10 @@ export const SOURCES = DEVICES.filter(({ model }) =>
 )
 
 export const DISPLAYS = DEVICES.filter(({ model }) => model.display !== undefined)
+
+export const SILENT_DISPLAYS = DISPLAYS.filter(
+  ({ model }) => model.display?.loudspeakers === 'none',
+)
 
 export const RF_DISPLAYS = DISPLAYS.filter(({ model }) =>
   model.functions

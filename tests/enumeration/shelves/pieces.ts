@@ -1,37 +1,44 @@
-import { jackOf } from '@coaxwain/models'
-import type { Unit, Uid } from '@coaxwain/shelf'
+import { jackOf, type PieceModel } from '@coaxwain/models'
+import type { Link, Unit, Uid } from '@coaxwain/shelf'
 import type { Chance } from '../../support/chance'
 import { portIn, refOf, type Box, type Stock } from '../bench'
 import { Layout, type Wire } from '../layout'
 import { pathsBetween } from '../paths'
 import { pictureWires, soundWires, type End } from '../wires'
-import { PIECES } from './parts'
+import type { Named } from './parts'
 import type { Drawn } from './walk'
 
 /** Longer runs are left to what else lies in the drawer. */
 const MOST_IN_LINK = 2
 const MOST_OF_A_SORT = 6
 
+/** Pieces that were drawn for a way, and whether one of them serves two pairs of units. */
+export interface DrawnPieces {
+  readonly pieces: readonly Uid[]
+  readonly shares: boolean
+}
+
 /** Leads that would join the drawn devices, and those for the sound where it is wanted; null where none do. */
 export function piecesFor(
   drawn: readonly Drawn[],
-  sounds: readonly (readonly [from: number, to: number])[],
+  sounds: readonly (readonly [from: Drawn, to: Drawn])[],
+  all: readonly Named<PieceModel>[],
   chance: Chance,
-): Uid[] | null {
-  const boxes = drawn.map(boxOf)
+): DrawnPieces | null {
+  const boxes = new Map([...drawn, ...sounds.flat()].map((d, i) => [d, boxOf(d, i)]))
   const drawer: Stock[] = chance
-    .shuffled(PIECES)
+    .shuffled(all)
     .filter(({ model }) => model.kind !== 'terminator' && !chance.isHit(0.15))
     .map(({ uid, model }) => ({ model: uid, piece: model, count: MOST_OF_A_SORT }))
   const wires = [
     ...drawn.slice(1).flatMap((to, i) => {
       const from = drawn[i]!
-      const out = { box: boxes[i]!, jack: jackOf(from.device.model, from.give!.jack) }
-      const into = { box: boxes[i + 1]!, jack: jackOf(to.device.model, to.in!) }
+      const out = { box: boxes.get(from)!, jack: jackOf(from.device.model, from.give!.jack) }
+      const into = { box: boxes.get(to)!, jack: jackOf(to.device.model, to.in!) }
       return wiresBetween(out, into, chance.pickIfAny(pictureWires(out.jack, into.jack)), drawer)
     }),
     ...sounds.flatMap(([from, to]) =>
-      soundBetween([drawn[from]!, boxes[from]!], [drawn[to]!, boxes[to]!], drawer),
+      soundBetween([from, boxes.get(from)!], [to, boxes.get(to)!], drawer),
     ),
   ]
   if (wires.some((w) => w.paths.length === 0)) return null
@@ -39,7 +46,20 @@ export function piecesFor(
   const laid = new Layout(drawer, shuffled).solve(MOST_OF_A_SORT)
   if (!laid) return null
   const uses = laid.links.flatMap((l) => l.pieces.map((p) => `${p.copy} ${p.model}`))
-  return [...new Set(uses)].map((use) => use.slice(use.indexOf(' ') + 1))
+  const pieces = [...new Set(uses)].map((use) => use.slice(use.indexOf(' ') + 1))
+  return { pieces, shares: sharedPieces(laid.links).length > 0 }
+}
+
+/** Pieces that serve more than one pair of units. */
+export function sharedPieces(links: readonly Link[]): string[] {
+  const served = new Map<string, Set<string>>()
+  for (const { from, to, pieces } of links) {
+    for (const { model, copy } of pieces) {
+      const pairs = served.get(`${model} ${copy}`) ?? new Set()
+      served.set(`${model} ${copy}`, pairs.add([from.unit, to.unit].sort().join(' ')))
+    }
+  }
+  return [...served].flatMap(([piece, pairs]) => (pairs.size > 1 ? [piece] : []))
 }
 
 const boxOf = ({ device }: Drawn, index: number): Box => ({

@@ -1,4 +1,4 @@
-import { jackOf, type DeviceModel, type Key } from '@coaxwain/models'
+import { jackOf, type DeviceModel, type Key, type PieceModel } from '@coaxwain/models'
 import type { Uid } from '@coaxwain/shelf'
 import type { Chance } from '../../support/chance'
 import { enumerate } from '../enumerate'
@@ -12,10 +12,12 @@ import {
   MIXERS,
   PIECES,
   RF_DISPLAYS,
+  SILENT_DISPLAYS,
   SOURCES,
+  TAILED,
   type Named,
 } from './parts'
-import { piecesFor } from './pieces'
+import { piecesFor, type DrawnPieces } from './pieces'
 import { drawBoxes, drawSource, takersIn, type Drawn } from './walk'
 
 export const MOST_BOXES = 5
@@ -27,14 +29,17 @@ interface Wish {
   readonly displays: readonly Named<DeviceModel>[]
   /** Sound on leads from the source to the display, past the boxes. */
   readonly past?: boolean
+  /** Loudspeakers beside the way, for the sound of the source. */
+  readonly speakers?: Named<DeviceModel>
+  /** Leads and adapters to draw from, where not from all of the catalogue. */
+  readonly from?: readonly Named<PieceModel>[]
   /** Which ends are wanted, before anybody looks for what may lie between. */
   readonly areWanted?: (source: Drawn, display: Named<DeviceModel>) => boolean
 }
 
 /** A way that would roughly work, and the pieces for it. */
-interface Way {
+interface Way extends DrawnPieces {
   readonly drawn: readonly Drawn[]
-  readonly pieces: readonly Uid[]
 }
 
 const MOST_TRIES = 2000
@@ -43,8 +48,8 @@ const MOST_TRIES = 2000
 function drawWay(chance: Chance, wish: Wish): Way {
   for (let n = 0; n < MOST_TRIES; n++) {
     const drawn = drawChain(chance, wish)
-    const pieces = drawn && piecesFor(drawn, soundsFor(drawn, wish), chance)
-    if (drawn && pieces && pieces.length <= MOST_PIECES) return { drawn, pieces }
+    const laid = drawn && piecesFor(drawn, soundsFor(drawn, wish), wish.from ?? PIECES, chance)
+    if (drawn && laid && laid.pieces.length <= MOST_PIECES) return { drawn, ...laid }
   }
   throw new Error(`no way with ${wish.boxes} boxes was drawn`)
 }
@@ -64,11 +69,17 @@ function drawChain(chance: Chance, wish: Wish): Drawn[] | null {
   return end ? [start.drawn, ...boxes.drawn, { ...end, give: null }] : null
 }
 
-/** Sound from unit to unit, or from the source to the display. */
-function soundsFor(drawn: readonly Drawn[], wish: Wish): [number, number][] {
-  const last = drawn.length - 1
-  return wish.past ? [[0, last]] : drawn.slice(1).map((_, i) => [i, i + 1])
+/** Sound from unit to unit, or from the source to the display or to loudspeakers. */
+function soundsFor(drawn: readonly Drawn[], wish: Wish): [Drawn, Drawn][] {
+  const [first, last] = [drawn[0]!, drawn.at(-1)!]
+  if (wish.speakers) return speakingBy(wish.speakers).map((to) => [first, to])
+  return wish.past ? [[first, last]] : drawn.slice(1).map((to, i) => [drawn[i]!, to])
 }
+
+const speakingBy = (device: Named<DeviceModel>): Drawn[] =>
+  device.model.functions
+    .filter((fn) => fn.kind === 'makes-sound')
+    .map((fn) => ({ device, fn, in: null, give: null }))
 
 // ---------------------------------------------------------------- what stands beside the way
 
@@ -128,7 +139,7 @@ function shelfOf(recipe: string, way: Way, extras: Extras, chance: Chance): Shel
 }
 
 function leadOf(uid: Uid, chance: Chance, change: number) {
-  const { model } = PIECES.find((p) => p.uid === uid)!
+  const { model } = [...PIECES, ...TAILED].find((p) => p.uid === uid)!
   return chance.isHit(change / 3)
     ? { model: `${uid}-cut`, piece: cut(model, chance) }
     : { model: uid, piece: model }
@@ -167,6 +178,26 @@ const speakers: Recipe = (chance) => {
   const pieces = [chance.pick(PHONO_PAIR).uid, ...way.pieces]
   const extras = { others: 0.3, morePieces: 0.6, change: 0.1, tried: tried(chance) }
   return shelfOf('speakers', way, { ...extras, boxes, pieces }, chance)
+}
+
+/** A lead of which a picture takes some cores to one unit, and a sound the others to another. */
+const sharedLead: Recipe = (chance) => {
+  const beside = chance.pick(LOUDSPEAKERS)
+  const { way } = drawWayWith(
+    chance,
+    () => ({
+      from: [...PIECES, ...TAILED],
+      ...(chance.isHit(0.3)
+        ? { boxes: 1 + chance.below(2), displays: DISPLAYS, past: true }
+        : { boxes: chance.below(2), displays: SILENT_DISPLAYS, speakers: beside }),
+    }),
+    ({ shares }) => shares || undefined,
+  )
+  const own = way.drawn.slice(1, -1).map((d) => draftOf(d.device))
+  const mixers = chance.isHit(0.2) ? [draftOf(chance.pick(MIXERS))] : []
+  const boxes = [...own, draftOf(beside), ...mixers]
+  const extras = { others: 0.2, morePieces: 0.3, change: 0.04, tried: chance.pick([1, 1, 0.9]) }
+  return shelfOf('shared lead', way, { ...extras, boxes, pieces: way.pieces }, chance)
 }
 
 /** Two units of one model, which has in one case what the way needs twice. */
@@ -277,9 +308,10 @@ const SHARES: readonly (readonly [times: number, recipe: Recipe])[] = [
   [1, plain('rf', (chance) => ({ boxes: chance.below(3), displays: RF_DISPLAYS }))],
   [1, plain('rf', (chance) => ({ boxes: 1 + chance.below(2), displays: RF_DISPLAYS }))],
   [1, plain('past', (chance) => ({ boxes: 1 + chance.below(2), displays: DISPLAYS, past: true }))],
-  [6, plain('broken', (chance) => ({ boxes: chance.below(3), displays: DISPLAYS }), 0.4)],
+  [7, plain('broken', (chance) => ({ boxes: chance.below(3), displays: DISPLAYS }), 0.4)],
   [2, speakers],
-  [2, twice],
+  [3, sharedLead],
+  [3, twice],
   [6, conflict],
   [4, lastLead],
 ]

@@ -290,15 +290,13 @@ describe('a chain that goes nowhere', () => {
     expect(second).toContain('piece-unknown')
   })
 
-  it('in knots that cannot be followed ends in little time', () => {
+  it('in knots that cannot be followed ends, and says so', () => {
     const rig = modulated()
     const there = bare(rig).links[3]!
     const chain = bare(rig)
     chain.links = Array.from({ length: 24 }, (_, i) =>
       i % 2 === 0 ? there : { from: there.to, pieces: there.pieces, to: there.from },
     )
-    const start = performance.now()
     expect(judge(rig, chain).whole).toMatchObject([{ code: 'tangled', weight: 'wrong' }])
-    expect(performance.now() - start).toBeLessThan(1000)
   })
 })

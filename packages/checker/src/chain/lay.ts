@@ -10,9 +10,12 @@ export interface Laid {
   readonly rivals: readonly Way[]
 }
 
-/** Settles plugs and copies link by link: cores of one lead serve neighbouring sockets of the same two units. */
+/**
+ * Settles plugs and copies link by link: cores of one lead serve sockets of the same two units, and of others
+ * where its other end sits there already or no second lead of the kind is left.
+ */
 export function layChain(chain: Chain, view: ShelfView): Laid[] {
-  const drawer = new Plugs()
+  const drawer = new Plugs(view)
   return chain.links.map((link) => {
     const ways = waysOf(link, view)
     const [first] = ways
@@ -84,6 +87,8 @@ class Plugs {
   private readonly joined = new Set<string>()
   private readonly copies = new Map<string, { between: string; copy: number }[]>()
 
+  constructor(private readonly view: ShelfView) {}
+
   /** Pieces for a link with free plugs and how many are new, or null where they cannot be plugged. */
   plan(link: ChainLink, way: Way): { pieces: PieceUse[]; fresh: number } | null {
     const before = new Map(this.mates)
@@ -142,14 +147,24 @@ class Plugs {
   private next = (model: string): number =>
     Math.max(0, ...(this.copies.get(model) ?? []).map((c) => c.copy)) + 1
 
-  /** The copy that was named; else those that lie between the same units, and a fresh one. */
+  /**
+   * The copy that was named; else those that lie between the same units, and a fresh one; where there is none
+   * left, one that lies elsewhere, of which another core may be free.
+   */
   private copiesFor(link: ChainLink, index: number, model: string): number[] {
     const named = link.pieces[index]?.copy
     if (named !== undefined) return [named]
     const between = betweenOf(link)
     const near = (this.copies.get(model) ?? []).filter((c) => c.between === between)
-    return [...new Set(near.map((c) => c.copy)), this.next(model) + index]
+    const fresh = this.next(model) + index
+    const elsewhere = fresh > this.stockOf(model) ? (this.copies.get(model) ?? []) : []
+    return [...new Set([...near, ...elsewhere].map((c) => c.copy)), fresh]
   }
+
+  private stockOf = (model: string): number =>
+    this.view.snapshot.units
+      .filter((u) => u.model === model)
+      .reduce((sum, u) => sum + u.quantity, 0)
 
   private note(link: ChainLink, pieces: readonly PieceUse[]): void {
     this.joined.add(joinOf(link, { pieces }))

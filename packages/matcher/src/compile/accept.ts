@@ -138,13 +138,15 @@ function colourOf(row: AcceptRow, { core, lumaOnly }: Arriving): 'colour' | 'gre
   return row.colours.includes(core.colour) ? 'colour' : 'nothing'
 }
 
-/** Lines of a system against the scan of what is to be sent by it. */
+/**
+ * Whether a modulator for a system sends a scan on. One for 525 or 625 lines knows nothing of lines and sends either:
+ * the set decides (common practice, no source); the old narrow and wide systems carry their own alone.
+ */
 export function systemCarries(system: RfSystemId, scan: Core['scan']): boolean {
   switch (RF_SYSTEMS[system].lines) {
     case 525:
-      return scan === '525i60' || scan === '262p60'
     case 625:
-      return scan === '625i50' || scan === '312p50'
+      return ['525i60', '262p60', '625i50', '312p50'].includes(scan)
     case 405:
       return scan === '405i50'
     case 819:

@@ -19,6 +19,9 @@ export interface Offering {
   /** Ways of sound alone, through the unit or into loudspeakers. */
   readonly sounds: readonly Way[]
   readonly aerials: readonly Way[]
+  /** Ways of a picture that begins in the unit, and of one that ends there. */
+  readonly plays: readonly Way[]
+  readonly shows: readonly Way[]
   /** Channels of a carrier that is on whenever the unit is. */
   readonly idle: readonly Channel[]
 }
@@ -75,10 +78,20 @@ export class CompiledShelf {
     if (known) return known
     const unit = this.units.get(uid)
     if (!unit) throw new Error(`no unit ${uid}`)
-    const variant = variantOf(this.snapshot, unit)
-    const made = { variant, ways: this.maker.waysOf(variant) }
+    const made = this.apart(unit)
     this.ends.set(uid, made)
     return made
+  }
+
+  /** A unit by itself, as it is said to be here and not on the shelf. Throws when it is a lead. */
+  apart(unit: Unit): {
+    readonly variant: Variant
+    readonly ways: readonly Way[]
+    readonly sounds: readonly Way[]
+  } {
+    const variant = variantOf(this.snapshot, unit)
+    const { maker } = this
+    return { variant, ways: maker.waysOf(variant), sounds: maker.soundWaysOf(variant) }
   }
 
   /** All offerings but for some units. */
@@ -90,7 +103,7 @@ export class CompiledShelf {
   }
 
   /** The leads and adapters for one question, what can be joined with them, and every move that this allows. */
-  supply(question: Question): Supply {
+  supply(question: Pick<Question, 'avoid' | 'assumedLeads'>): Supply {
     const avoided = question.avoid.filter((uid) => this.isPiece(uid)).sort()
     const assumed = [...question.assumedLeads].sort()
     const key = JSON.stringify([avoided, assumed])
@@ -135,6 +148,8 @@ export class CompiledShelf {
       boxes: ways.filter((w) => w.in !== null && w.out !== null),
       sounds: this.maker.soundWaysOf(variant).filter(isUsable),
       aerials: ways.filter((w) => w.fn.kind === 'receives' && w.from !== null),
+      plays: ways.filter((w) => w.fn.kind === 'plays' && w.from !== null),
+      shows: ways.filter((w) => w.fn.kind === 'shows' && w.in !== null),
       idle: idleCarriers(variant),
     }
   }

@@ -147,13 +147,12 @@ const isRight = (place: SoundPlace): boolean => {
   return end?.circuits.length === 1 && end.circuits[0] === 'audio-r'
 }
 
+/** The right channel, and a whole mono sound, by the left one of their jack. */
 const asLeft = (place: SoundPlace): string => {
   const end = soundEnd(place)
   if (!end) return String(place)
-  return `${end.jack} ${end.circuits.join()}`.replace(
-    /audio-r$/,
-    end.circuits.length === 1 ? 'audio-l' : 'audio-r',
-  )
+  const alone = end.circuits.length === 1
+  return `${end.jack} ${alone ? 'audio-l' : end.circuits.join()}`
 }
 
 const sameButChannel = (left: SoundPlace, right: SoundPlace): boolean =>

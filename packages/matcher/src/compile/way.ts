@@ -65,3 +65,7 @@ export const isUsable = (way: Way): boolean => way.harm === null && way.dead ===
 
 /** The least doubt that a unit brings by this way. */
 export const leastDoubt = (way: Way): number => way.offers[0]?.doubt ?? 0
+
+/** Sound shares a socket with the picture, so that one plug takes both or none. */
+export const sharesSocket = (placed: Placed | null): boolean =>
+  placed?.face.sound.some((s) => placed.face.picture.some((p) => p.port === s.port)) === true

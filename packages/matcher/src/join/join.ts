@@ -15,6 +15,8 @@ import {
 
 /** Everything that is plugged between two faces, and what comes across. */
 export interface Join {
+  /** Tells the joins of one table apart. */
+  readonly id: number
   readonly out: Face
   readonly into: Face
   readonly wires: readonly WantedWire[]
@@ -29,6 +31,18 @@ export interface Join {
   readonly volts: readonly SwitchVolt[]
   /** Direct current comes up the cable, and nobody knows whether the input stands it. */
   readonly dcUnknown: boolean
+  /**
+   * For a sound that is led over the pieces of a picture: that picture as it is then laid, and the unit that
+   * the two have in common. Its pieces are counted there, and here only what it takes beyond the picture.
+   */
+  readonly along: Along | null
+}
+
+/** A picture whose pieces a sound is led over. */
+export interface Along {
+  readonly join: Join
+  /** Both leave this unit, or both go into it. */
+  readonly shared: 'from' | 'to'
 }
 
 export interface Wanted {
@@ -38,6 +52,7 @@ export interface Wanted {
 
 export const PICTURE: Wanted = { picture: true, sound: false }
 export const BOTH: Wanted = { picture: true, sound: true }
+export const SOUND: Wanted = { picture: false, sound: true }
 
 /** Twice the pieces of one link, for pictures and sounds that need several leads. */
 const MOST_PIECES = 2 * LIMITS.piecesInLink
@@ -45,9 +60,12 @@ const MOST_PIECES = 2 * LIMITS.piecesInLink
 /** Ways that need so many pieces more than the shortest are not sought in a well-filled drawer. */
 const SPARE_PIECES = 2
 
-interface Wish extends Job {
+/** Wires that are wanted, and what they amount to. */
+export interface Wish extends Job {
   readonly picture: PictureMeeting | null
   readonly sound: SoundMeeting | null
+  /** With more pieces it is not worth knowing. */
+  readonly most?: number
 }
 
 const supplyOf = (drawer: Drawer): Supply => ({
@@ -61,6 +79,7 @@ export class JoinTable {
   private readonly known = new Map<string, readonly Join[]>()
   private readonly all: Supply
   private readonly owned: Supply
+  private judged = 0
   /** True once a longer way round a scarce piece was not sought. */
   capped = false
 
@@ -112,8 +131,18 @@ export class JoinTable {
     )
   }
 
+  /** The same could be laid with as many pieces so that one of some sorts is among them. */
+  mayTake({ out, into, wires, pieces }: Join, sorts: readonly number[]): boolean {
+    let taken = false
+    new Router(this.all, { out, into, wires }, pieces, ({ instances }) => {
+      taken = instances.some((i) => sorts.includes(i.piece))
+      return taken
+    }).run()
+    return taken
+  }
+
   /** With what is there if that does it; else with something bought. */
-  private lay(wish: Wish): Join[] {
+  lay(wish: Wish): Join[] {
     const own = this.layFrom(this.owned, wish)
     const enough = this.owned === this.all || own.some((j) => j.scarce.size === 0)
     return enough ? own : [...own, ...this.layFrom(this.all, wish).filter((j) => j.bought > 0)]
@@ -122,14 +151,16 @@ export class JoinTable {
   private layFrom(supply: Supply, wish: Wish): Join[] {
     const folds = wish.sound === 'fold'
     if (folds && !supply.drawer.mixers) return []
-    const each = wish.wires.map((w) => this.leastFor(supply, wish, w))
-    const least = Math.max(...each)
+    const each = wish.wires.map((w) => this.leastFor(supply, wish, [w]))
+    const alone = Math.max(...each)
+    const least = alone === Infinity ? alone : Math.max(alone, this.leastInPairs(supply, wish))
     if (least === Infinity) return []
     // Every wire by pieces of its own is the most that can be needed; a mixing piece is one more.
     const sum = each.reduce((all, n) => all + n, folds ? 1 : 0)
     const most = Math.max(least, Math.min(MOST_PIECES, sum))
     let kept: Join[] = []
-    for (let pieces = least; pieces <= most + this.slack(kept); pieces++) {
+    const last = (): number => Math.min(most + this.slack(kept), wish.most ?? Infinity)
+    for (let pieces = least; pieces <= last(); pieces++) {
       if (this.isEnough(kept, pieces, supply)) break
       new Router(supply, wish, pieces, (routing) => {
         const join = this.judge(wish, routing)
@@ -158,16 +189,37 @@ export class JoinTable {
     return kept.length > 0 || this.scarce.size > 0 ? SPARE_PIECES : 0
   }
 
-  /** The fewest pieces by which one wire alone can come about. */
-  private leastFor(supply: Supply, { out, into }: Wish, wire: WantedWire): number {
-    const from = out.ports[wire.fromPort] as FacePort
-    const to = into.ports[wire.toPort] as FacePort
-    const key = JSON.stringify([from, to, wire.circuit, wire.fromContact, wire.toContact])
+  /**
+   * The fewest pieces by which any two of many wires can come about together. Wires that are in each other's way
+   * show it in pairs, and far sooner than in all the ways to lay the rest.
+   */
+  private leastInPairs(supply: Supply, wish: Wish): number {
+    const { wires } = wish
+    if (wires.length < 3) return 0
+    const pairs = wires.flatMap((a, i) => wires.slice(i + 1).map((b) => [a, b]))
+    let least = 0
+    for (const pair of pairs) {
+      least = Math.max(least, this.leastFor(supply, wish, pair))
+      if (least === Infinity) break
+    }
+    return least
+  }
+
+  /** The fewest pieces by which one wire, or a few, can come about with nothing beside them. */
+  private leastFor(supply: Supply, { out, into }: Wish, wires: readonly WantedWire[]): number {
+    const key = JSON.stringify(
+      wires.map((w) => [
+        ...[out.ports[w.fromPort], into.ports[w.toPort]],
+        ...[w.circuit, w.fromContact, w.toContact],
+        ...[w.fromPort === wires[0]?.fromPort, w.toPort === wires[0]?.toPort],
+      ]),
+    )
     const known = supply.single.get(key)
     if (known !== undefined) return known
     let least = Infinity
-    for (let pieces = 0; pieces <= LIMITS.piecesInLink && least === Infinity; pieces++) {
-      new Router(supply, { out, into, wires: [wire] }, pieces, () => {
+    const most = LIMITS.piecesInLink * wires.length
+    for (let pieces = 0; pieces <= most && least === Infinity; pieces++) {
+      new Router(supply, { out, into, wires }, pieces, () => {
         least = pieces
         return true
       }).run()
@@ -176,11 +228,13 @@ export class JoinTable {
     return least
   }
 
-  private judge({ out, into, wires, picture, sound }: Wish, routing: Routing): Join | null {
+  /** What comes of wires that are laid so; null where it would harm. */
+  judge({ out, into, wires, picture, sound }: Wish, routing: Routing): Join | null {
     const dc = this.directCurrent(out, into, wires, routing)
     if (dc === 'harm') return null
     const usage = usageOf(routing)
     return {
+      id: this.judged++,
       out,
       into,
       wires,
@@ -192,6 +246,7 @@ export class JoinTable {
       sound,
       volts: this.volts(out, routing),
       dcUnknown: dc === 'unknown',
+      along: null,
     }
   }
 

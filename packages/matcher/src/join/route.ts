@@ -343,5 +343,6 @@ export class Router {
   }
 }
 
-const enters = (passage: Passage, contact: string | null): boolean =>
+/** A wire on a contact may go in by a passage. */
+export const enters = (passage: Passage, contact: string | null): boolean =>
   passage.contact === null || contact === null || passage.contact === contact

@@ -10,6 +10,7 @@ import {
   sameSoundSpacing,
   type Deflection,
   type ScanId,
+  type SwitchVolt,
 } from '@coaxwain/signal'
 import { reachedBy } from '../compile/carriers'
 import type { Core } from '../compile/signal'
@@ -29,7 +30,12 @@ export const obstacle = (
 ): Obstacle => ({ code, details, harmful: false, lookalike: false, ...flags })
 
 /** Every rule that a signal breaks at an input, nearest cause first; empty when it is taken. */
-export function breaksAt(way: Way, core: Core, ends: Ends): Obstacle[] {
+export function breaksAt(
+  way: Way,
+  core: Core,
+  ends: Ends,
+  volts: readonly SwitchVolt[] = [],
+): Obstacle[] {
   const { device } = way.variant
   const found: Obstacle[] = []
   if (stopsAt(way, core.protection)) {
@@ -44,7 +50,7 @@ export function breaksAt(way: Way, core: Core, ends: Ends): Obstacle[] {
       : [...found, ...tunerBreaks(way, core, ends).filter(isOutOfBand)]
   if (way.fn.tunedBy !== undefined) return onceEach([...found, ...tunerBreaks(way, core, ends)])
   if (core.form !== way.into?.face.form) return found
-  return onceEach([...found, ...rowBreaks(way, core, ends)])
+  return onceEach([...found, ...rowBreaks(way, core, { ...ends, volts })])
 }
 
 const onceEach = (found: readonly Obstacle[]): Obstacle[] =>
@@ -114,13 +120,18 @@ function tunerBreaks(way: Way, core: Core, ends: Ends): Obstacle[] {
   return [...found, ...scanBreaks(rows, core, ends), ...colourBreaks(rows, core, ends)]
 }
 
-function rowBreaks(way: Way, core: Core, ends: Ends): Obstacle[] {
+/** The ends of a join, and the voltages that arrive by it. */
+interface Joined extends Ends {
+  readonly volts: readonly SwitchVolt[]
+}
+
+function rowBreaks(way: Way, core: Core, { volts, ...ends }: Joined): Obstacle[] {
   const rows = way.fn.accepts.filter((r) => !r.jacks || r.jacks.includes(way.in ?? ''))
   if (rows.length === 0) return []
-  const voltless = rows.filter((r) => !r.volts)
+  const open = rows.filter((r) => (r.volts ?? []).every((v) => volts.includes(v)))
   const scan = scanBreaks(rows, core, ends)
   if (scan.length > 0) return [...scan, ...colourBreaks(rows, core, ends)]
-  if (voltless.length === 0) return [obstacle('switching-voltage', { ...ends })]
+  if (open.length === 0) return [obstacle('switching-voltage', { ...ends })]
   return colourBreaks(rows, core, ends)
 }
 

@@ -1,4 +1,4 @@
-import { portOf } from '@coaxwain/models'
+import { portOf, type PieceModel, type Plug } from '@coaxwain/models'
 import type { Obstacle } from '@coaxwain/shelf'
 import { familyOf, fits, isSingle, mates, type Connector } from '@coaxwain/signal'
 import type { Face } from '../compile/face'
@@ -137,10 +137,12 @@ const RATES = ['line-rate', 'field-rate']
 const ratesAt = (end: Way, label: Label, ends: Ends): Obstacle[] =>
   breaksAt(end, label.sig.core, ends).filter((o) => RATES.includes(o.code))
 
-/** One rule stands in the way; a lead that is not at hand is no rule. */
+/** One rule stands in the way; a lead that is not at hand is no rule, nor the rate of a plug that is wrong anyhow. */
 const looksRight = (a: Attempt): boolean => {
   const rules = rulesOf(a)
-  return rules.length === 1 && (rules.length === a.broken.length || a.boxes === 0)
+  const wrong = rules.some((o) => o.code === 'wrong-circuits')
+  const left = rules.filter((o) => !wrong || !RATES.includes(o.code))
+  return left.length === 1 && (rules.length === a.broken.length || a.boxes === 0)
 }
 
 const rulesOf = ({ broken }: Attempt): Obstacle[] => broken.filter((o) => o.code !== 'no-lead')
@@ -169,19 +171,40 @@ function attempt(label: Label, way: Way, tools: ReasonTools): Attempt | null {
   if (wrong) return { boxes: label.boxes, pieces: label.pieces, broken: wrong }
   const broken = [
     ...socketBreaks(way, endsOf(label.way, way)),
-    ...leadBreaks(label, way, join),
+    ...leadBreaks(label, way, join, tools),
     ...endBreaks(way, endsOf(label.way, way), tools),
     ...signalBreaks(label, way, join, tools),
   ]
   return { boxes: label.boxes, pieces: label.pieces + (join?.pieces ?? 1), broken }
 }
 
-const leadBreaks = (label: Label, way: Way, join: Join | undefined): Obstacle[] =>
-  join
-    ? []
-    : way.into?.face.ports.some((p) => p.connector === 'whip')
-      ? [obstacle('whip-only', { ...endsOf(label.way, way) })]
-      : [obstacle('no-lead', { ...endsOf(label.way, way), form: label.way.from?.face.form ?? '' })]
+function leadBreaks(
+  label: Label,
+  way: Way,
+  join: Join | undefined,
+  tools: ReasonTools,
+): Obstacle[] {
+  if (join) return []
+  const ends = endsOf(label.way, way)
+  const { form } = label.way.from!.face
+  if (way.into?.face.ports.some((p) => p.connector === 'whip'))
+    return [obstacle('whip-only', { ...ends })]
+  return tools.joins.drawer.owned.pieces.some(({ piece }) => isThin(piece, label.way, way))
+    ? [obstacle('wires-missing', { ...ends, form: form ?? '' }, { lookalike: true })]
+    : [obstacle('no-lead', { ...ends, form: form ?? '' })]
+}
+
+/** A lead of several wires that plugs into both, and has not those that are wanted. */
+const isThin = ({ a, b }: PieceModel, { from }: Way, { into }: Way): boolean => {
+  const meets = (plugs: readonly Plug[], face: Face | undefined): boolean =>
+    plugs.some(
+      ({ connector }) =>
+        !isSingle(connector) && face?.ports.some((p) => mates(connector, p.connector)),
+    )
+  return (
+    (meets(a, from?.face) && meets(b, into?.face)) || (meets(b, from?.face) && meets(a, into?.face))
+  )
+}
 
 /** The same socket takes this form as well, so that nothing is wrong with the plug. */
 const takesBesides = ({ variant, into }: Way, out: Face): boolean =>
@@ -256,10 +279,21 @@ function signalBreaks(
   const ends = endsOf(label.way, way)
   const gun = tools.lightGun && way.fn.kind === 'shows' ? gunBreaks(way.variant.device, ends) : []
   if (join?.picture === 'luma-only')
-    return [obstacle('luma-only', { ...ends }, { lookalike: true }), ...gun]
+    return [
+      obstacle('luma-only', { ...ends }, { lookalike: true }),
+      ...ratesAt(way, label, ends),
+      ...gun,
+    ]
   const joined = tools.joined(label.way.from!.face, way.into!.face)
-  const breaks = breaksAt(way, label.sig.core, ends)
+  const breaks = breaksAt(way, label.sig.core, ends, voltsBetween(label, way, tools))
   return [...breaks.filter((o) => !joined || !RATES.includes(o.code)), ...gun]
+}
+
+/** Switching voltages that arrive whichever lead is taken; without a lead at hand those that are given. */
+function voltsBetween({ way: { from } }: Label, { into }: Way, { joins }: ReasonTools) {
+  const [first, ...others] = joins.between(from!.face, into!.face, PICTURE)
+  if (!first) return from!.face.volts
+  return first.volts.filter((v) => others.every((o) => o.volts.includes(v)))
 }
 
 /** A plug that goes in and is wired differently inside. */

@@ -3,7 +3,8 @@ import type { Caution, Hookup, Purchase, Question, Snapshot, Uid, Unit } from '@
 import { SOUND_RANK, TIER } from '@coaxwain/signal'
 import { CompiledShelf } from '../compile/shelf'
 import { buildHookup } from '../result/build'
-import { compareHookups } from '../result/rank'
+import { Bargains, byPicture, bySize } from '../search/bargains'
+import type { Frame } from '../search/layout'
 import { Solver, type Solved } from '../search/solve'
 import { isSoldFor, receivedOffAir } from './sold-for'
 
@@ -78,12 +79,15 @@ export class Shopping {
   constructor(
     shelf: CompiledShelf,
     private readonly question: Question,
-    parts: Parts,
-    budget: number,
+    /** The best way that the shelf has already. */
+    private readonly now: Hookup | null,
+    { parts, budget }: { readonly parts: Parts; readonly budget: number },
   ) {
     const set = shelf.end(question.display.unit).variant.device
     const avoid = [...question.avoid, ...notSoldFor(set, parts)]
-    this.solver = new Solver(stock(shelf, parts), { ...question, avoid }, budget)
+    const asked = { ...question, avoid }
+    const findsFor = ({ best }: Frame): Bargains => new Bargains(best, now !== null)
+    this.solver = new Solver(stock(shelf, parts), asked, budget, findsFor)
   }
 
   step(expansions: number): void {
@@ -106,27 +110,17 @@ export class Shopping {
    * What opens a way where there is none: the smallest purchase, and the one with the best picture.
    * Where there is one already, at most two that do more than it does.
    */
-  purchases(now: Hookup | null): Purchase[] {
+  purchases(): Purchase[] {
+    const { now } = this
     const options = this.solver
       .soFar()
       .filter(({ wiring }) => wiring.found.bought > 0)
-      .map((solved) => ({ solved, hookup: this.build(solved) }))
-      .filter(({ hookup }) => now === null || isMore(hookup, now))
-    const whole = options.filter(({ hookup }) => hookup.worksFully)
+      .map((solved) => ({ ...this.build(solved), bought: solved.wiring.found.bought }))
+      .filter((hookup) => now === null || isMore(hookup, now))
+    const whole = options.filter((hookup) => hookup.worksFully)
     const pool = whole.length > 0 ? whole : now === null ? options : []
-    const bySize = [...pool].sort(
-      (a, b) =>
-        a.solved.wiring.found.bought - b.solved.wiring.found.bought ||
-        compareHookups(a.hookup, b.hookup),
-    )
-    const byPicture = [...pool].sort(
-      (a, b) =>
-        b.hookup.axes.picture - a.hookup.axes.picture ||
-        a.solved.wiring.found.bought - b.solved.wiring.found.bought ||
-        compareHookups(a.hookup, b.hookup),
-    )
-    const chosen = new Set([bySize[0], byPicture[0]].filter((o) => o !== undefined))
-    return [...chosen].map(({ hookup }) => ({
+    const chosen = [bySize, byPicture].flatMap((order) => [...pool].sort(order)[0] ?? [])
+    return [...new Set(chosen)].map(({ bought: _, ...hookup }) => ({
       parts: partsOf(hookup),
       hookup,
       brings: brings(hookup, now),

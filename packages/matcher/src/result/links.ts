@@ -57,6 +57,9 @@ export class LinkMaker {
   readonly links: Link[] = []
   readonly ends: LineEnd[] = []
 
+  /** Pieces of the joins that were added, for sounds that are led along them. */
+  private readonly laid = new Map<Join, readonly Taken[]>()
+
   constructor(private readonly pieces: PieceStock) {}
 
   /** A terminator on a socket. */
@@ -66,7 +69,9 @@ export class LinkMaker {
 
   /** Adds the links of one join, and says which they are. */
   add(join: Join, from: End, to: End): number[] {
-    const taken = this.pieces.between(join, from, to)
+    const shared = join.along && this.laid.get(join.along.join)
+    const taken = shared ?? this.pieces.between(join, from, to)
+    this.laid.set(join, taken)
     const made: number[] = []
     join.wires.forEach((wire, i) => {
       const pieces = (join.routing.hops[i] ?? []).map((hop): PieceUse => ({

@@ -1,14 +1,17 @@
 import type { Hookup } from '@coaxwain/shelf'
 import { TIER } from '@coaxwain/signal'
 
+type Ranked = Pick<Hookup, 'worksFully' | 'axes'>
+
 /**
- * The default order: works fully; no doubt; picture; sound; nothing to replug; fewer powered boxes; fewer
- * pieces. Ties break by content, never by id or name.
+ * The default order: works fully; no doubt; some sound, as nobody asks to see alone; picture; sound; nothing
+ * to replug; fewer powered boxes; fewer pieces. Ties break by content, never by id or name.
  */
-export function compareHookups(a: Hookup, b: Hookup): number {
+export function compareHookups(a: Ranked, b: Ranked): number {
   return (
     Number(b.worksFully) - Number(a.worksFully) ||
     Number(a.axes.doubt > 0) - Number(b.axes.doubt > 0) ||
+    Number(b.axes.sound > 0) - Number(a.axes.sound > 0) ||
     b.axes.picture - a.axes.picture ||
     b.axes.sound - a.axes.sound ||
     a.axes.disturbance - b.axes.disturbance ||

@@ -14,8 +14,9 @@ import { priceOf } from '../compile/variant'
 import { bothLeans, offersOf } from '../compile/leans'
 import { leastDoubt, type Way } from '../compile/way'
 import type { JoinTable } from '../join/join'
-import { pathOf, type AerialRoute, type AerialUse, type Label } from './label'
+import { noWorseCost, type AerialRoute, type AerialUse, type Label } from './label'
 import { PICTURE } from '../join/join'
+import { scarceIn } from './sound-route'
 
 /**
  * What may reach an aerial terminal at most: 0.346 sqrt(75) microvolts, 47 CFR 15.115(c)(1)(ii),
@@ -26,12 +27,7 @@ export const AERIAL_LIMIT_DBMV = -50.47
 const MOST_BOXES = 2
 
 const noWorse = (a: AerialRoute, b: AerialRoute): boolean =>
-  a.boxes <= b.boxes &&
-  a.pieces <= b.pieces &&
-  a.doubt <= b.doubt &&
-  a.bought <= b.bought &&
-  a.reverseDb >= b.reverseDb &&
-  (!a.reverseUnknown || b.reverseUnknown)
+  noWorseCost(a, b) && a.reverseDb >= b.reverseDb && (!a.reverseUnknown || b.reverseUnknown)
 
 /** Isolation from one port to another on a way that is not meant; null where it is not recorded. */
 export function isolationDb(device: DeviceModel, from: Key, to: Key): number | null {
@@ -66,8 +62,8 @@ interface Joint {
   readonly fn: ModelFunction
   readonly jack: Key
   readonly stand: Condition
-  /** The chain before the unit. */
-  readonly before: Label | null
+  /** Level of the carrier that comes into the unit; null where none does. */
+  readonly arrives: number | null
   /** The aerial goes out by the same lead as the carrier, and is not received here. */
   readonly meets: boolean
 }
@@ -81,19 +77,65 @@ const freeRfInputs = (device: DeviceModel, fn: ModelFunction, taken: readonly Ke
 
 /** The way with everything that the aerial leans on in the same unit. */
 function alsoFed({ way, fn, jack }: Joint): Way {
-  const contacts = portsOf(way.variant.device, jack).map((port) => ({ jack, port }))
+  const contacts = portsOf(way.variant.device, jack).map((port) => ({
+    jack,
+    port,
+  }))
   const leans = bothLeans(way.leans, { contacts, functions: [fn.key] })
   return { ...way, leans, offers: offersOf(way.variant, leans) }
 }
 
 /** A carrier in the unit: the jack where it goes in or comes out, and its level there. */
-function carrierAt({ way, before }: Joint): { jack: Key; levelDbmv: number } | null {
+function carrierAt({ way, arrives }: Joint): { jack: Key; levelDbmv: number } | null {
   const own = way.out?.rf?.[0]
   if (way.out && own) return { jack: way.out.jack, levelDbmv: own.levelDbmv }
-  if (way.in === null || way.into?.face.form !== 'rf' || !before) return null
-  const levelDbmv = levelOf(before)
-  return levelDbmv === null ? null : { jack: way.in, levelDbmv }
+  return way.in === null || arrives === null ? null : { jack: way.in, levelDbmv: arrives }
 }
+
+const straightFrom = (way: Way): AerialRoute => ({
+  ways: [way],
+  joins: [],
+  boxes: 0,
+  pieces: 0,
+  doubt: leastDoubt(way),
+  bought: 0,
+  reverseDb: 0,
+  reverseUnknown: false,
+})
+
+const sumOf = (r: AerialRoute): number => r.boxes + r.pieces + r.doubt + r.bought
+
+/** None is beaten by one that comes after it. */
+const cheapFirst = (a: AerialRoute, b: AerialRoute): number =>
+  sumOf(a) - sumOf(b) ||
+  b.reverseDb - a.reverseDb ||
+  Number(a.reverseUnknown) - Number(b.reverseUnknown)
+
+/** Of routes that leave by equal faces the best, so that one of them does without whichever box comes next. */
+function bestOut(routes: readonly AerialRoute[]): AerialRoute[] {
+  const byFace = new Map<number, AerialRoute[]>()
+  for (const route of [...routes].sort(cheapFirst)) {
+    const face = route.ways.at(-1)?.from?.face.id ?? -1
+    const kept = byFace.get(face) ?? []
+    byFace.set(face, kept)
+    const better = kept.filter((k) => noWorse(k, route))
+    const inAll = better[0]?.ways
+      .slice(1)
+      .filter((w) => better.every((k) => k.ways.some((x) => x.variant === w.variant)))
+    if (inAll?.length !== 0) kept.push(route)
+  }
+  return [...byFace.values()].flat()
+}
+
+/** No worse, and nobody can tell in which of two ways the aerial goes on from there. */
+function isBetter(a: AerialUse, b: AerialUse, isFirst: boolean): boolean {
+  if (a === b || !noWorseCost(a, b) || (!isFirst && noWorseCost(b, a))) return false
+  const tuned = (use: AerialUse): boolean => use.fn.tunedBy !== undefined
+  return tuned(a) === tuned(b) && a.together === b.together && sameOffers(a.at, b.at)
+}
+
+const sameOffers = ({ offers: a }: Way, { offers: b }: Way): boolean =>
+  a.length === b.length && a.every((o, i) => o.unit === b[i]?.unit && o.doubt === b[i]?.doubt)
 
 /** What of that gets up to the aerial terminal; null where it might be too much and nobody knows. */
 function radiated(joint: Joint, route: AerialRoute): number | null {
@@ -107,51 +149,59 @@ function radiated(joint: Joint, route: AerialRoute): number | null {
 
 /** Finds where an aerial can join a chain, what that costs, and whether anything gets up to the aerial. */
 export class Aerials {
-  private readonly outs: AerialRoute[]
+  private outs: readonly AerialRoute[] | null = null
   private readonly known = new Map<number, readonly AerialRoute[]>()
+  private readonly joints = new Map<string, readonly AerialUse[]>()
+  private readonly stations: readonly Occupant[]
 
   constructor(
-    aerials: readonly Way[],
-    boxes: readonly Way[],
     private readonly place: {
+      readonly aerials: readonly Way[]
+      readonly boxes: readonly Way[]
       readonly joins: JoinTable
       readonly faces: FaceTable
       readonly offAir: readonly OffAir[]
+      /** Sorts of units of which a chain may want more than there are. */
+      readonly scarceUnits: ReadonlySet<string>
     },
   ) {
-    this.outs = this.reach(aerials, boxes.filter(passesRf))
+    this.stations = place.offAir.flatMap((s) => stationOf(s) ?? [])
   }
 
-  get any(): boolean {
-    return this.outs.length > 0
-  }
-
-  /** Every aerial, straight or through a few boxes, as it can be had. */
-  private reach(aerials: readonly Way[], boxes: readonly Way[]): AerialRoute[] {
-    let layer = aerials.map((way): AerialRoute => ({
-      ways: [way],
-      joins: [],
-      boxes: 0,
-      pieces: 0,
-      doubt: leastDoubt(way),
-      bought: 0,
-      reverseDb: 0,
-      reverseUnknown: false,
-    }))
-    const all = [...layer]
+  /**
+   * Finds in slices how each aerial can be had, straight or through a few boxes. Of routes that end alike only
+   * the best are kept, so that the work grows with the boxes and not with their combinations.
+   */
+  *prepare(): Generator<void> {
+    if (this.outs) return
+    const boxes = this.place.boxes.filter(passesRf)
+    let layer = bestOut(this.place.aerials.map(straightFrom))
+    const outs = [...layer]
     for (let n = 0; n < MOST_BOXES; n++) {
-      layer = layer.flatMap((route) => boxes.flatMap((way) => this.through(route, way)))
-      all.push(...layer)
+      const next: AerialRoute[] = []
+      for (const way of boxes) {
+        next.push(...layer.flatMap((route) => this.through(route, way)))
+        yield
+      }
+      layer = bestOut(next)
+      outs.push(...layer)
     }
-    return all
+    this.outs = outs
+  }
+
+  private allOuts(): readonly AerialRoute[] {
+    if (!this.outs) for (const _ of this.prepare());
+    return this.outs ?? []
   }
 
   private through(route: AerialRoute, way: Way): AerialRoute[] {
     const last = route.ways.at(-1)!
     if (!last.from || !way.into || route.ways.some((w) => w.variant === way.variant)) return []
     const { device } = way.variant
+    const joins = this.place.joins.between(last.from.face, way.into.face, PICTURE)
+    if (joins.length === 0) return []
     const back = worstIsolation(device, way.out!.jack, way.in!)
-    return this.place.joins.between(last.from.face, way.into.face, PICTURE).map((join) => ({
+    return joins.map((join) => ({
       ways: [...route.ways, way],
       joins: [...route.joins, join],
       boxes: route.boxes + (way.variant.powered ? 1 : 0),
@@ -168,7 +218,7 @@ export class Aerials {
     const known = this.known.get(into.face.id)
     if (known) return known
     const kept: AerialRoute[] = []
-    for (const route of this.outs) {
+    for (const route of this.allOuts()) {
       const from = route.ways.at(-1)!.from
       if (!from) continue
       for (const join of this.place.joins.between(from.face, into.face, PICTURE)) {
@@ -179,11 +229,22 @@ export class Aerials {
           doubt: route.doubt + (join.dcUnknown ? 1 : 0),
           bought: route.bought + join.bought,
         }
-        if (!kept.some((k) => noWorse(k, whole))) kept.push(whole)
+        if (!kept.some((k) => noWorse(k, whole) && this.takesNoMore(k, whole))) kept.push(whole)
       }
     }
     this.known.set(into.face.id, kept)
     return kept
+  }
+
+  /** Takes no scarce unit or piece that the other does without. */
+  private takesNoMore(a: AerialRoute, b: AerialRoute): boolean {
+    const { scarceUnits } = this.place
+    const boxes = a.ways.map((w) => w.variant).filter((v) => scarceUnits.has(v.id))
+    const used = scarceIn(b)
+    return (
+      boxes.every((v) => b.ways.some((w) => w.variant === v)) &&
+      [...scarceIn(a)].every(([piece, n]) => n <= (used.get(piece) ?? 0))
+    )
   }
 
   /** The kinds of station that are received here; both when nobody has said. */
@@ -200,20 +261,43 @@ export class Aerials {
     return fn.tunedBy !== undefined && this.received(fn)
   }
 
+  /** Every way in which an aerial can join at a unit, of those that lead to the same the best. */
+  joining(before: Label | null, way: Way): readonly AerialUse[] {
+    const arrives = before !== null && way.into?.face.form === 'rf' ? levelOf(before) : null
+    const key = `${way.id} ${arrives}`
+    const known = this.joints.get(key)
+    if (known) return known
+    const all = [...this.atBox(way, arrives), ...this.atTuner(way, arrives)]
+    const kept = all.filter(
+      (use, i) =>
+        !all.some((u, j) => isBetter(u, use, j < i) && this.takesNoMore(u.route, use.route)),
+    )
+    this.joints.set(key, kept)
+    return kept
+  }
+
   /** Joins at a tuner of the unit itself: a converter box, or another input of the display. */
-  atTuner(before: Label | null, way: Way, taken: readonly Key[]): AerialUse[] {
+  private atTuner(way: Way, arrives: number | null): AerialUse[] {
     const { device } = way.variant
+    const taken = [...(way.into?.ports ?? []), ...(way.from?.ports ?? [])]
     return device.functions
       .filter((fn) => this.canWatch(fn))
       .flatMap((fn) =>
         freeRfInputs(device, fn, taken).flatMap((jack) =>
-          this.uses({ way, fn, jack, stand: fn.while ?? [], before, meets: false }),
+          this.uses({
+            way,
+            fn,
+            jack,
+            stand: fn.while ?? [],
+            arrives,
+            meets: false,
+          }),
         ),
       )
   }
 
   /** Joins on the way out of a unit: by another RF input that leads to the same output. */
-  atBox(before: Label | null, way: Way): AerialUse[] {
+  private atBox(way: Way, arrives: number | null): AerialUse[] {
     if (way.out === null || way.from?.face.form !== 'rf') return []
     const { device } = way.variant
     const taken = way.in === null ? [] : portsOf(device, way.in)
@@ -224,7 +308,7 @@ export class Aerials {
         const stand = give ? together(fn.while, give.while) : null
         if (!stand) return []
         return freeRfInputs(device, fn, taken).flatMap((jack) =>
-          this.uses({ way, fn, jack, stand, before, meets: true }),
+          this.uses({ way, fn, jack, stand, arrives, meets: true }),
         )
       })
   }
@@ -233,7 +317,11 @@ export class Aerials {
     const { way, fn, jack, stand } = joint
     const { device } = way.variant
     const picture = jackOf(device, jack)
-    const into = this.place.faces.place(device, { picture, sound: null, volts: [] })
+    const into = this.place.faces.place(device, {
+      picture,
+      sound: null,
+      volts: [],
+    })
     const at = alsoFed(joint)
     if (at.offers.length === 0) return []
     return this.to(into).flatMap((route): AerialUse[] => {
@@ -261,15 +349,18 @@ export class Aerials {
 
   /** The carriers that can lie on one lead with the stations without harm to either. */
   besideStations(carrier: CarrierSet, levelDbmv: number): CarrierSet | null {
-    const stations = this.place.offAir.flatMap((s) => stationOf(s) ?? [])
     const kept = carrier.names
       .map((name, i) => ({ name, mhz: carrier.visionMhz[i] as number }))
       .filter(({ name }) => {
         const own = occupantOf(carrier, name, levelDbmv)
-        return own !== null && stations.every((s) => leastMargin(s, own) >= 0)
+        return own !== null && this.stations.every((s) => leastMargin(s, own) >= 0)
       })
     if (kept.length === 0) return null
-    return { ...carrier, names: kept.map((k) => k.name), visionMhz: kept.map((k) => k.mhz) }
+    return {
+      ...carrier,
+      names: kept.map((k) => k.name),
+      visionMhz: kept.map((k) => k.mhz),
+    }
   }
 }
 
@@ -304,11 +395,11 @@ export function occupantOf(carrier: CarrierSet, name: string, levelDbmv: number)
 
 /** Level of the carrier as it leaves the last unit of a chain: as made, with gains and losses since. */
 export function levelOf(label: Label): number | null {
-  let level: number | null = null
-  for (const at of pathOf(label)) {
+  let gain = 0
+  for (let at: Label | null = label; at; at = at.prev) {
     const own = at.way.out?.rf?.[0]
-    if (own) level = own.levelDbmv
-    else if (level !== null) level += at.way.fn.gainDb ?? 0
+    if (own) return own.levelDbmv + gain
+    gain += at.way.fn.gainDb ?? 0
   }
-  return level
+  return null
 }

@@ -14,16 +14,17 @@ export interface Shortage {
   readonly pieces: ReadonlySet<number>
 }
 
-/** One unit for each node of a chain, none twice; or the sorts of which there are too few. */
+/** One unit for each node of a chain that wants one, none twice; or the sorts of which there are too few. */
 export function assign(
   wiring: Wiring,
   stockOf: (piece: number) => number,
   exact: ReadonlySet<string>,
+  wanted: readonly Node[] = boxesOf(wiring),
 ): { unitOf: Map<Node, Unit> } | { short: Shortage } {
   const variants = new Set<string>()
   const unitOf = new Map<Node, Unit>()
   const groups = new Map<string, Node[]>()
-  for (const node of boxesOf(wiring)) {
+  for (const node of wanted) {
     const { id } = node.way.variant
     groups.set(id, [...(groups.get(id) ?? []), node])
   }
@@ -62,7 +63,8 @@ export function leastApart(
 function piecesShort(wiring: Wiring, stockOf: (piece: number) => number): Set<number> {
   const used = new Map<number, number>()
   const note = (piece: number): void => void used.set(piece, (used.get(piece) ?? 0) + 1)
-  for (const { join } of wiring.edges) join.routing.instances.forEach((i) => note(i.piece))
+  for (const { join } of wiring.edges)
+    if (!join.along) join.routing.instances.forEach((i) => note(i.piece))
   for (const step of stepsOf(wiring.found)) step.terminators.forEach(note)
   return new Set([...used].filter(([piece, n]) => n > stockOf(piece)).map(([piece]) => piece))
 }

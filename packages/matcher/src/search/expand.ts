@@ -1,9 +1,12 @@
+import type { Sound } from '@coaxwain/signal'
 import { pass, type Core, type CoreTable } from '../compile/signal'
-import { leastDoubt, soundEnd, type Way } from '../compile/way'
+import { leastDoubt, sharesSocket, soundEnd, type SoundEnd, type Way } from '../compile/way'
 import { levelOf, type Aerials } from './aerial'
 import { leastApart } from './assign'
 import {
-  pathOf,
+  leftBy,
+  waysUsed,
+  type AerialRoute,
   type AerialUse,
   type Cost,
   type Label,
@@ -32,14 +35,11 @@ export interface ExpanderTools {
 
 const NONE: SoundState = { kind: 'none' }
 
-/** Sound shares its socket with the picture, so that one plug takes both or none. */
-function shareSocket(way: Way, side: 'into' | 'from'): boolean {
-  const face = way[side]?.face
-  return face !== undefined && face.sound.some((s) => face.picture.some((p) => p.port === s.port))
-}
-
 /** Makes moves from labels, with everything that may become of the sound. */
 export class Expander {
+  /** Pictures as they are beside the stations of the air, by what they are and their level. */
+  private readonly beside = new Map<string, Core | null>()
+
   constructor(private readonly tools: ExpanderTools) {}
 
   /** Every way of making a move. */
@@ -50,7 +50,7 @@ export class Expander {
       const rides = way.soundFrom === 'picture'
       if (rides && label.sig.sound === 'none') return []
       const heard = rides && !taken.heard ? 'none' : label.sig.sound
-      return [entryOf(move, { soundRoute: null, soundIn: heard }, mayStay(label) ? sound : NONE)]
+      return [entryOf(move, { soundRoute: null, soundIn: heard }, this.staying(label))]
     }
     if (sound.kind === 'none') return []
     if (move.withSound) {
@@ -58,18 +58,28 @@ export class Expander {
       const soundIn = met(sound.sound, move.join.sound ?? 'mono')
       return [entryOf(move, { soundRoute: null, soundIn }, NONE)]
     }
-    return this.routes(label, way, sound).map((route) =>
+    return this.routes(label, move, sound).map((route) =>
       entryOf(move, { soundRoute: route, soundIn: route.sound }, NONE),
     )
   }
 
   /** Ways for the sound where it does not come by the picture's own leads. */
-  private routes(label: Label, way: Way, waits: Waiting): readonly SoundRoute[] {
-    const here = waits.at === label
-    if (shareSocket(way, 'into') || (here && shareSocket(label.way, 'from'))) return []
-    const routes = this.tools.sounds.between(waits.at.way.from!.face, waits.sound, way.into!.face)
-    // Between the same two units a straight route is a link of both, found already.
-    return here ? routes.filter((r) => r.via !== null) : routes
+  private routes(label: Label, move: Move, { at, sound }: Waiting): readonly SoundRoute[] {
+    const { from } = at.way
+    const { into } = move.way
+    return this.tools.sounds.between(from!.face, sound, into!.face, {
+      leaving: leftBy(at, label) ?? move,
+      arriving: move,
+      leavesWith: sharesSocket(from),
+      arrivesWith: sharesSocket(into),
+    })
+  }
+
+  /** Sound may be left behind only where the picture's plug leaves its socket free, or has a tail for it. */
+  private staying({ sound, way, ...label }: Label): SoundState {
+    if (sound.kind === 'none' || sound.at.depth < label.depth || !sharesSocket(way.from))
+      return sound
+    return this.tools.sounds.part(way.from!.face) ? sound : NONE
   }
 
   /** What leaves a unit after a move into it. */
@@ -96,7 +106,8 @@ export class Expander {
       doubt: label.doubt + entry.doubt + apart,
       bought: label.bought + entry.bought,
     }
-    if (soundEnd(way.soundTo)) made.sound = { kind: 'waits', sound: inside, at: made }
+    const end = soundEnd(way.soundTo)
+    if (end) made.sound = { kind: 'waits', sound: waitingAt(end, inside), at: made }
     return this.withAerial(label, made)
   }
 
@@ -104,12 +115,11 @@ export class Expander {
   withAerial(before: Label | null, made: Label): Label[] {
     const { aerials } = this.tools
     if (!aerials || made.aerial) return [made]
-    const taken = [...(made.way.into?.ports ?? []), ...(made.way.from?.ports ?? [])]
-    const uses = [...aerials.atBox(before, made.way), ...aerials.atTuner(before, made.way, taken)]
-    return [made, ...uses.flatMap((use) => this.joined(made, use))]
+    return [made, ...aerials.joining(before, made.way).flatMap((use) => this.joined(made, use))]
   }
 
   private joined(made: Label, use: AerialUse): Label[] {
+    if (!this.hasEnough(made, use.route)) return []
     const core = use.together ? this.besideStations(made) : made.sig.core
     if (!core) return []
     const apart = (way: Way): number => (made.prev ? (this.doubtApart(made.prev, way) ?? 0) : 0)
@@ -128,11 +138,26 @@ export class Expander {
     return [copy]
   }
 
+  /** No unit of a scarce sort is taken by the chain and on the way of the aerial as well. */
+  private hasEnough(made: Label, route: AerialRoute): boolean {
+    const ways = [...waysUsed(made), ...route.ways]
+    return route.ways.every(
+      ({ variant }) =>
+        !this.tools.scarceUnits.has(variant.id) ||
+        leastApart(ways.filter((w) => w.variant === variant)) !== null,
+    )
+  }
+
   private besideStations(made: Label): Core | null {
     const { core } = made.sig
-    const carrier =
-      core.carrier && this.tools.aerials?.besideStations(core.carrier, levelOf(made) ?? 0)
-    return carrier ? this.tools.cores.intern({ ...core, carrier }) : null
+    const level = levelOf(made) ?? 0
+    const key = `${core.id} ${level}`
+    const known = this.beside.get(key)
+    if (known !== undefined) return known
+    const carrier = core.carrier && this.tools.aerials?.besideStations(core.carrier, level)
+    const beside = carrier ? this.tools.cores.intern({ ...core, carrier }) : null
+    this.beside.set(key, beside)
+    return beside
   }
 
   /** An aerial goes on beside the picture up to the tuner that receives it. */
@@ -159,18 +184,15 @@ export class Expander {
    */
   private doubtApart(label: Label, way: Way): number | null {
     if (!this.tools.scarceUnits.has(way.variant.id)) return 0
-    const before = pathOf(label)
-      .slice(1)
-      .map((l) => l.way)
-      .filter((w) => w.variant.id === way.variant.id)
+    const before = waysUsed(label).filter((w) => w.variant.id === way.variant.id)
     const after = leastApart([...before, way])
     return after && after.doubt - (leastApart(before)?.doubt ?? 0) - leastDoubt(way)
   }
 }
 
-/** Sound may be left behind only where the picture's plug does not take its socket. */
-const mayStay = (label: Label): boolean =>
-  label.sound.kind === 'waits' && (label.sound.at !== label || !shareSocket(label.way, 'from'))
+/** Of both channels one alone leaves where there is a wire for no more; it is worth less than a mono sound. */
+const waitingAt = ({ circuits }: SoundEnd, sound: Sound): Sound =>
+  sound === 'stereo' && circuits.length === 1 && circuits[0] !== 'audio-mono' ? 'half' : sound
 
 const entryOf = (
   move: Move,

@@ -10,10 +10,11 @@ import {
   type Sound,
 } from '@coaxwain/signal'
 import { priceOf } from '../compile/variant'
-import { leastDoubt, type Way } from '../compile/way'
+import { leastDoubt, sharesSocket, type Way } from '../compile/way'
 import type { Aerials } from './aerial'
 import type { Entry, Expander } from './expand'
 import {
+  leftBy,
   pathOf,
   plus,
   type AerialUse,
@@ -61,7 +62,7 @@ export class Finisher {
     return expander
       .entries(label, move)
       .flatMap((entry) =>
-        this.hear(move.way, entry).flatMap((heard) =>
+        this.hear(label, { move, entry, score }, isWanted).flatMap((heard) =>
           this.aerialWays(label, move.way).flatMap((aerial) =>
             this.weigh(label, { move, entry, picture: seen, score, ...heard, aerial }, isWanted),
           ),
@@ -70,30 +71,39 @@ export class Finisher {
   }
 
   /** From the display's own loudspeakers, from others, or not at all. */
-  private hear(end: Way, entry: Entry): Heard[] {
-    const display = end.variant.device.display!
-    if (end.soundFrom !== null)
+  private hear(label: Label, last: Last, isWanted: IsWanted): Heard[] {
+    const { move, entry } = last
+    const display = move.way.variant.device.display!
+    if (move.way.soundFrom !== null)
       return [{ sound: fromLoudspeakers(entry.step.soundIn, display), speakers: null }]
-    const outside = entry.left.kind === 'waits' ? this.outside(entry.left.at, entry.left.sound) : []
-    return [{ sound: 'none', speakers: null }, ...outside]
+    return [{ sound: 'none', speakers: null }, ...this.outside(label, last, isWanted)]
   }
 
-  private outside(at: Label, sound: Sound): Heard[] {
-    return this.tools.speakers.flatMap((way) =>
-      way.into && at.way.from
-        ? this.tools.sounds.between(at.way.from.face, sound, way.into.face).map((route) => ({
-            sound: route.sound,
-            speakers: { route, way },
-          }))
-        : [],
-    )
+  private outside(label: Label, { move, entry, score }: Last, isWanted: IsWanted): Heard[] {
+    if (entry.left.kind !== 'waits') return []
+    const { at, sound } = entry.left
+    const { from } = at.way
+    if (!from) return []
+    const leaving = leftBy(at, label) ?? move
+    const beside = { leaving, arriving: null, arrivesWith: false, leavesWith: sharesSocket(from) }
+    const before = plus(label, entry)
+    return this.tools.speakers
+      .filter((way) => isWanted(score, SOUND_RANK[sound], plus(before, costOfSpeakers(way))))
+      .flatMap((way) =>
+        way.into
+          ? this.tools.sounds.between(from.face, sound, way.into.face, beside).map((route) => ({
+              sound: route.sound,
+              speakers: { route, way },
+            }))
+          : [],
+      )
   }
 
   /** The aerial as it has joined, or by another input of the display; none where it is not asked for. */
   private aerialWays(label: Label, end: Way): (AerialUse | null)[] {
     const { aerials } = this.tools
     if (!aerials) return [null]
-    if (!label.aerial) return aerials.atTuner(label, end, end.into?.ports ?? [])
+    if (!label.aerial) return [...aerials.joining(label, end)]
     const received =
       pathOf(label).some((l) => l.step !== null && l.way.fn.tunedBy !== undefined) ||
       label.aerial.fn.tunedBy !== undefined
@@ -118,26 +128,33 @@ export class Finisher {
 /** Whether no chain that has been found is at least as good on every axis. */
 export type IsWanted = (picture: number, sound: number, cost: Cost) => boolean
 
+/** The move into the display, one way of making it, and how good the picture is. */
+interface Last {
+  readonly move: Move
+  readonly entry: Entry
+  readonly score: number
+}
+
 interface Heard {
   readonly sound: Sound
   readonly speakers: SpeakersUse | null
 }
 
 /** A chain at the display, with one way of seeing and hearing it. */
-interface Ended extends Heard {
+interface Ended extends Last, Heard {
   readonly picture: SeenPicture
-  readonly score: number
   readonly aerial: AerialUse | null
-  readonly move: Move
-  readonly entry: Entry
 }
 
-const costOf = ({ route, way }: SpeakersUse): Cost => ({
-  boxes: route.boxes + 1,
-  pieces: route.pieces,
-  doubt: route.doubt + leastDoubt(way),
-  bought: route.bought + priceOf(way.variant),
+/** Without what leads there. */
+const costOfSpeakers = (way: Way): Cost => ({
+  boxes: 1,
+  pieces: 0,
+  doubt: leastDoubt(way),
+  bought: priceOf(way.variant),
 })
+
+const costOf = ({ route, way }: SpeakersUse): Cost => plus(route, costOfSpeakers(way))
 
 function see(label: Label, { way, join, taken }: Move): SeenPicture {
   const { sig } = label
@@ -172,14 +189,21 @@ const fitsGun = (direct: boolean, { variant }: Way): boolean => {
   )
 }
 
+/** The best that a source and a display have, each by itself. */
+export interface BestThereIs {
+  readonly source: Quality
+  readonly display: Quality
+  readonly sound: boolean
+}
+
+/** The tier that a chain must have to work in full. */
+export const tierWanted = ({ source, display }: BestThereIs): number =>
+  Math.min(TIER[source], TIER[display])
+
 /** Reaches the tier of the set or of the source, whichever is less, in colour where both have it, with sound. */
-export function worksFully(
-  found: Finished,
-  best: { readonly source: Quality; readonly display: Quality; readonly sound: boolean },
-): boolean {
-  const wanted = Math.min(TIER[best.source], TIER[best.display])
+export function worksFully(found: Finished, best: BestThereIs): boolean {
   return (
-    TIER[found.picture.quality] >= wanted &&
+    TIER[found.picture.quality] >= tierWanted(best) &&
     found.picture.degradations.length === 0 &&
     (!best.sound || found.sound === 'mono' || found.sound === 'stereo')
   )

@@ -4,8 +4,18 @@ interface Held extends Cost {
   readonly found: Finished
 }
 
+/** What a search has found so far, and what is still worth finding. */
+export interface Finds {
+  add(found: Finished): void
+  /** Nothing that is at best so good at so much cost would be worth knowing. */
+  matches(picture: number, sound: number, cost: Cost): boolean
+  /** What comes at such a cost is looked at in the order of these two. */
+  order(cost: Cost): readonly [first: number, second: number]
+  all(): readonly Finished[]
+}
+
 /** Finished chains of which none beats another; one for each set of axes. */
-export class Front {
+export class Front implements Finds {
   private held: Held[] = []
 
   add(found: Finished): void {
@@ -21,6 +31,10 @@ export class Front {
     return this.held.some(
       (h) => h.found.axes.picture >= picture && h.found.axes.sound >= sound && noWorseCost(h, cost),
     )
+  }
+
+  order({ boxes, pieces }: Cost): readonly [number, number] {
+    return [boxes, pieces]
   }
 
   all(): readonly Finished[] {

@@ -114,6 +114,20 @@ export const pathOf = (label: Label): Label[] => {
   return path
 }
 
+/** The step by which the picture has left a unit of a chain, and the way it goes into; null while it is there. */
+export function leftBy(at: Label, chain: Label): { readonly join: Join; readonly way: Way } | null {
+  for (let l = chain; l.prev && l.step; l = l.prev)
+    if (l.prev === at) return { join: l.step.join, way: l.way }
+  return null
+}
+
+/** The ways of every unit that a chain has taken from the shelf, but for those of sound alone. */
+export function waysUsed(label: Label): Way[] {
+  const ways: Way[] = []
+  for (let at = label; at.prev; at = at.prev) ways.push(at.way)
+  return [...ways, ...(label.aerial?.route.ways ?? [])]
+}
+
 export const plus = (a: Cost, b: Cost): Cost => ({
   boxes: a.boxes + b.boxes,
   pieces: a.pieces + b.pieces,

@@ -4,6 +4,7 @@ import type { CompiledShelf, Offering, Present, Supply } from '../compile/shelf'
 import type { Variant } from '../compile/variant'
 import { isUsable, type Way } from '../compile/way'
 import type { Drawer } from '../join/drawer'
+import type { BestThereIs } from './finish'
 import type { Label } from './label'
 import { bestOf, startLabels } from './start'
 
@@ -17,7 +18,7 @@ export interface Frame {
   readonly shelf: readonly Variant[]
   /** Boxes on the shelf whose own carrier is on whenever they are. */
   readonly idle: readonly { readonly variant: Variant; readonly channels: readonly Channel[] }[]
-  readonly best: { readonly source: Quality; readonly display: Quality; readonly sound: boolean }
+  readonly best: BestThereIs
 }
 
 /** One question laid out: where chains begin and end, and what may lie between. */
@@ -38,9 +39,13 @@ export const waysIn = (present: Present, pick: (offering: Offering) => readonly 
   [...present.rest, ...present.own].flatMap(pick)
 
 /** Where the chains of a question begin and end, and what may lie between. */
-export function layOut(shelf: CompiledShelf, question: Question): Layout {
-  const source = shelf.end(question.source.unit)
-  const display = shelf.end(question.display.unit)
+export function layOut(
+  shelf: CompiledShelf,
+  question: Question,
+  endOf: CompiledShelf['end'] = (uid) => shelf.end(uid),
+): Layout {
+  const source = endOf(question.source.unit)
+  const display = endOf(question.display.unit)
   const leftOut = new Set<Uid>([...question.avoid, question.source.unit, question.display.unit])
   const present = shelf.present(leftOut)
   const starts = source.ways.filter((w) => w.fn.key === question.source.playing && isUsable(w))

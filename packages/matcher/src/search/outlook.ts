@@ -59,6 +59,8 @@ export class Outlooks {
       readonly states: StateGraph
       /** Moves into the display. */
       readonly allEnds: MovesFrom
+      /** Works the moves out of one state out in slices, where there are many. */
+      readonly prepareEnds?: (face: Face, core: Core) => Generator<void>
       readonly outsideSpeakers: boolean
     },
   ) {}
@@ -70,12 +72,15 @@ export class Outlooks {
 
   /** Explores in slices; ends with the outlooks known. */
   *explore(): Generator<void> {
-    const { states } = this.space
+    const { states, prepareEnds } = this.space
+    for (const { way, sig } of prepareEnds ? this.starts : [])
+      yield* prepareEnds!(way.from!.face, sig.core)
     const waiting = this.starts.map(({ way, sig }) => this.see(states.at(way.from!.face, sig.core)))
     const met = new Set(waiting)
     for (const from of waiting) {
       yield* states.prepare(from.state)
       for (const stride of states.stridesFrom(from.state)) {
+        if (prepareEnds) yield* prepareEnds(stride.to.face, stride.to.core)
         const to = this.see(stride.to)
         to.before.push({ seen: from, stride })
         if (met.has(to)) continue

@@ -3,6 +3,7 @@ import type { Face } from '../compile/face'
 import type { CompiledShelf, Present } from '../compile/shelf'
 import type { Core, CoreTable } from '../compile/signal'
 import type { Way } from '../compile/way'
+import { forksOf } from '../join/fork'
 import { JoinTable } from '../join/join'
 import { Aerials } from './aerial'
 import { Expander } from './expand'
@@ -20,6 +21,8 @@ const MOST_BOUGHT = 12
 export interface Scarce {
   readonly units: ReadonlySet<string>
   readonly pieces: ReadonlySet<number>
+  /** No lead serves more than one pair of units: for wiring that several uses have in common. */
+  readonly leadsApart?: boolean
 }
 
 /** The parts of one round of searching. */
@@ -28,13 +31,15 @@ export interface Round {
   readonly moves: MovesFrom
   readonly expander: Expander
   readonly space: Omit<SearchSpace, 'budget'>
+  /** Null when nobody asks for the aerial to be kept. */
+  readonly aerials: Aerials | null
 }
 
 /** Makes ready for a search in which what is scarce is counted exactly. */
 export function beginRound(
   shelf: CompiledShelf,
-  question: Question,
-  layout: Layout,
+  question: Pick<Question, 'demands' | 'offAir'>,
+  layout: Pick<Layout, 'present' | 'speakers' | 'supply' | 'labels' | 'ends'>,
   scarce: Scarce,
 ): Round {
   const { present, speakers } = layout
@@ -44,41 +49,53 @@ export function beginRound(
   const joins =
     scarce.pieces.size === 0
       ? layout.supply.joins
-      : new JoinTable(layout.frame.drawer, new Set(scarce.pieces))
+      : new JoinTable(layout.supply.drawer, new Set(scarce.pieces))
   const boxes = waysIn(present, (o) => o.boxes)
   const aerials =
     demands.keepAerial === true
-      ? new Aerials(
-          waysIn(present, (o) => o.aerials),
+      ? new Aerials({
+          aerials: waysIn(present, (o) => o.aerials),
           boxes,
-          { joins, faces, offAir },
-        )
+          joins,
+          faces,
+          offAir,
+          scarceUnits,
+        })
       : null
   const soundBoxes = waysIn(present, (o) => o.sounds).filter((w) => w.soundTo !== null)
-  const sounds = new SoundRoutes(joins, soundBoxes)
+  // Nobody goes to a shop to save a lead.
+  const leadsApart = scarce.leadsApart === true || shelf.bought.size > 0
+  const forks = leadsApart ? null : forksOf(joins)
+  const sounds = new SoundRoutes(joins, soundBoxes, forks)
   const expander = new Expander({ sounds, cores, scarceUnits, aerials })
   const finisher = new Finisher({ demands, speakers, aerials, sounds, expander })
-  const apart = (way: Way): boolean => aerials !== null || scarceUnits.has(way.variant.id)
+  const apart = (way: Way): boolean =>
+    scarceUnits.has(way.variant.id) || (aerials !== null && hasRfInput(way))
   const special = aerials !== null || scarceUnits.size > 0 || joins.hasScarce
-  const moves = special
-    ? bestOfTable(new MoveTable(joins, boxes, cores, apart))
-    : withoutSome(layout.supply.moves, layout.present, joins, cores)
+  const table = special ? new MoveTable(joins, boxes, cores, apart) : layout.supply.moves
+  const moves = special ? bestOfTable(table) : withoutSome(table, layout.present, joins, cores)
   const last = new MoveTable(joins, layout.ends, cores, () => false)
   const space = {
     starts: layout.labels,
     states: layout.supply.states,
     moves,
+    prepareMoves: (face: Face, core: Core) => table.prepare(face, core),
     ends: (face: Face, core: Core) => last.of(face, core).best.filter((m) => finisher.canEnd(m)),
     allEnds: (face: Face, core: Core) => last.all(face, core).filter((m) => finisher.canEnd(m)),
     joins,
+    forks,
     expander,
     finisher,
     outsideSpeakers: speakers.length > 0,
     scarceUnits,
     mostBought: shelf.bought.size > 0 ? MOST_BOUGHT : 0,
   }
-  return { joins, moves, expander, space }
+  return { joins, moves, expander, space, aerials }
 }
+
+/** An aerial may join there, or has to be passed on. */
+const hasRfInput = ({ variant }: Way): boolean =>
+  variant.device.jacks.some((j) => j.dir === 'in' && j.form === 'rf')
 
 const bestOfTable =
   (table: MoveTable): MovesFrom =>

@@ -1,15 +1,19 @@
 import { LIMITS } from '@coaxwain/shelf'
 import { SOUND_RANK, TIER, type Sound } from '@coaxwain/signal'
+import type { Forks } from '../join/fork'
 import type { JoinTable } from '../join/join'
+import type { Face } from '../compile/face'
+import type { Core } from '../compile/signal'
 import { assign } from './assign'
 import type { Expander } from './expand'
 import type { Finisher, IsWanted } from './finish'
-import { Front } from './front'
-import { noWorseCost, plus, type Finished, type Label } from './label'
+import { Front, type Finds } from './front'
+import { leftBy, noWorseCost, plus, type Finished, type Label } from './label'
 import { bestScore } from './measure'
 import type { Move } from './moves'
 import { Outlooks, type Outlook } from './outlook'
 import { Queue } from './queue'
+import { scarcePieces, takesNoMore, usedOf, type Scarcity, type Used } from './scarce'
 import type { MovesFrom, StateGraph } from './states'
 import { wiringOf } from './wiring'
 
@@ -18,11 +22,15 @@ export interface SearchSpace {
   readonly states: StateGraph
   /** Moves into boxes. */
   readonly moves: MovesFrom
+  /** Works the moves out of one state out in slices. */
+  readonly prepareMoves: (face: Face, core: Core) => Generator<void>
   /** Moves into the display. */
   readonly ends: MovesFrom
   /** With those that others beat. */
   readonly allEnds: MovesFrom
   readonly joins: JoinTable
+  /** Null where no sound shares a lead with a picture that goes elsewhere. */
+  readonly forks: Forks | null
   readonly expander: Expander
   readonly finisher: Finisher
   readonly outsideSpeakers: boolean
@@ -34,6 +42,14 @@ export interface SearchSpace {
   readonly budget: number
 }
 
+/** Moves that are made from one label in one slice. */
+const MOVES_AT_ONCE = 8
+
+interface Rival {
+  readonly label: Label
+  readonly used: Used
+}
+
 /**
  * Label-setting, the chains with the fewest boxes and pieces first. A label is dropped when another of the
  * same signal at the same face, with its sound in the same place, is no worse on any axis; and when the best
@@ -41,9 +57,8 @@ export interface SearchSpace {
  */
 export class Search {
   private readonly queue = new Queue<Label>()
-  private readonly kept = new Map<string, Label[]>()
+  private readonly kept = new Map<string, readonly Rival[]>()
   private readonly beaten = new WeakSet<Label>()
-  private readonly front = new Front()
   private readonly outlooks: Outlooks
   private readonly course: Generator<void>
   done = false
@@ -52,7 +67,10 @@ export class Search {
   /** Sorts of which chains that were dropped wanted more than there are. */
   readonly short = { variants: new Set<string>(), pieces: new Set<number>() }
 
-  constructor(private readonly space: SearchSpace) {
+  constructor(
+    private readonly space: SearchSpace,
+    private readonly finds: Finds = new Front(),
+  ) {
     this.outlooks = new Outlooks(space.starts, space)
     this.course = this.run()
   }
@@ -63,7 +81,7 @@ export class Search {
   }
 
   best(): readonly Finished[] {
-    return this.front.all()
+    return this.finds.all()
   }
 
   private *run(): Generator<void> {
@@ -79,7 +97,7 @@ export class Search {
         return
       }
       this.work++
-      this.expand(label)
+      yield* this.expand(label)
       yield
     }
   }
@@ -88,21 +106,25 @@ export class Search {
     return this.outlooks.at(label.way.from!.face, label.sig.core)
   }
 
-  private expand(label: Label): void {
-    const { ends, moves, finisher, expander } = this.space
+  /** Goes on in slices from one label. */
+  private *expand(label: Label): Generator<void> {
+    const { ends, moves, prepareMoves, finisher, expander } = this.space
     const { face } = label.way.from!
     const { core } = label.sig
-    const isWanted: IsWanted = (...axes) => !this.front.matches(...axes)
+    const isWanted: IsWanted = (...axes) => !this.finds.matches(...axes)
     for (const move of ends(face, core)) {
       for (const found of finisher.finish(label, move, isWanted)) {
-        if (this.goesRound(found)) this.front.add(found)
+        if (this.goesRound(found)) this.finds.add(found)
       }
     }
     if (label.depth >= LIMITS.boxesInLeg) return
+    yield* prepareMoves(face, core)
+    let made = 0
     for (const move of moves(face, core)) {
       if (!this.isWorthwhile(label, move)) continue
+      if (++made % MOVES_AT_ONCE === 0) yield
       for (const entry of expander.entries(label, move)) {
-        for (const made of expander.leave(label, move, entry)) this.add(made)
+        for (const next of expander.leave(label, move, entry)) this.add(next)
       }
     }
   }
@@ -116,13 +138,13 @@ export class Search {
     const tier = Math.min(TIER[sig.poorest], TIER[leaving.poorest], ahead.tier)
     const mhz = Math.min(sig.lumaMhz, leaving.lumaMhz, ahead.lumaMhz)
     const sound = Math.min(SOUND_RANK[soundStillThere(label)], ahead.sound)
-    return !this.front.matches(bestScore(tier, mhz), sound, plus(plus(label, move), ahead))
+    return !this.finds.matches(bestScore(tier, mhz), sound, plus(plus(label, move), ahead))
   }
 
   /** A finished chain is already as good as the best that this one could become. */
   private isHopeless(label: Label, ahead: Outlook): boolean {
     const { sig } = label
-    return this.front.matches(
+    return this.finds.matches(
       bestScore(Math.min(TIER[sig.poorest], ahead.tier), Math.min(sig.lumaMhz, ahead.lumaMhz)),
       Math.min(SOUND_RANK[soundStillThere(label)], ahead.sound),
       plus(label, ahead),
@@ -146,25 +168,19 @@ export class Search {
     if (!ahead || label.depth + ahead.units > LIMITS.boxesInLeg) return
     if (label.bought + ahead.bought > this.space.mostBought) return
     if (this.isHopeless(label, ahead) || this.overdrawn(label)) return
-    const key = this.keyOf(label)
+    const own: Rival = { label, used: usedOf(label, this.space) }
+    const { forks } = this.space
+    const key = placeOf(label)
     const rivals = this.kept.get(key)
     if (!rivals) {
-      this.kept.set(key, [label])
+      this.kept.set(key, [own])
     } else {
-      if (rivals.some((r) => noWorse(r, label))) return
-      for (let i = rivals.length - 1; i >= 0; i--) {
-        if (noWorse(label, rivals[i] as Label)) this.beaten.add(...(rivals.splice(i, 1) as [Label]))
-      }
-      rivals.push(label)
+      if (rivals.some((r) => noWorse(r, own, forks))) return
+      for (const { label: worse } of rivals.filter((r) => noWorse(own, r, forks)))
+        this.beaten.add(worse)
+      this.kept.set(key, [...rivals.filter((r) => !this.beaten.has(r.label)), own])
     }
-    this.queue.put(label, label.boxes + ahead.boxes, label.pieces + ahead.pieces)
-  }
-
-  private keyOf(label: Label): string {
-    const { sound, sig } = label
-    const where =
-      sound.kind === 'none' ? '' : sound.at === label ? 'here' : `${sound.at.way.from!.face.id}`
-    return `${label.way.from!.face.id} ${sig.core.id} ${sig.shape} ${where} ${label.aerial ? 'aerial' : ''} ${this.scarce(label)}`
+    this.queue.put(label, ...this.finds.order(plus(label, ahead)))
   }
 
   /** Takes more of a scarce sort of piece than the drawer holds. */
@@ -174,39 +190,49 @@ export class Search {
     const { pieces } = joins.drawer
     return [...scarcePieces(label)].some(([piece, n]) => n > (pieces[piece]?.stock ?? 0))
   }
-
-  /** Units and pieces of scarce sorts that the chain has taken so far. */
-  private scarce(label: Label): string {
-    const { scarceUnits, joins } = this.space
-    if (scarceUnits.size === 0 && !joins.hasScarce) return ''
-    const units: string[] = []
-    for (let at: Label | null = label; at; at = at.prev) {
-      if (scarceUnits.has(at.way.variant.id)) units.push(`${at.way.variant.id}:${at.way.id}`)
-    }
-    const pieces = [...scarcePieces(label)].map(([piece, n]) => `#${piece}x${n}`)
-    return [...units, ...pieces].sort().join()
-  }
 }
 
-function scarcePieces(label: Label): Map<number, number> {
-  const used = new Map<number, number>()
-  const note = (piece: number, n: number): void => void used.set(piece, (used.get(piece) ?? 0) + n)
-  for (let at: Label = label; at.prev && at.step; at = at.prev) {
-    const { join, soundRoute, terminators } = at.step
-    for (const { scarce } of [join, ...(soundRoute?.joins ?? [])])
-      for (const [piece, n] of scarce) note(piece, n)
-    for (const piece of terminators) note(piece, 1)
-  }
-  return used
+/** What decides where a chain can still lead: what leaves it, where its sound is, what is left of scarce sorts. */
+export function stateOf(label: Label, space: Scarcity): string {
+  const used = [...usedOf(label, space).uses].map(([key, { count }]) => `${key} x${count}`)
+  return `${placeOf(label)} ${used.sort().join()}`
 }
+
+/** What decides where a chain can still lead, but for what is scarce: what leaves it, and where its sound is. */
+function placeOf(label: Label): string {
+  const { sound, sig } = label
+  const where =
+    sound.kind === 'none' ? '' : sound.at === label ? 'here' : `${sound.at.way.from!.face.id}`
+  return `${label.way.from!.face.id} ${sig.core.id} ${sig.shape} ${where} ${aerialOf(label)}`
+}
+
+/** An aerial that is received has done its duty; one that goes on beside the picture has not. */
+const aerialOf = ({ aerial }: Label): string =>
+  aerial === null ? '' : aerial.fn.tunedBy === undefined ? 'aerial' : 'received'
 
 export const soundStillThere = (label: Label): Sound =>
   label.sound.kind === 'waits' ? label.sound.sound : label.sig.sound
 
 /** Costs no more, and the picture and the sound have been through nothing worse. */
-const noWorse = (a: Label, b: Label): boolean =>
+const noWorse = (
+  { label: a, used }: Rival,
+  { label: b, used: other }: Rival,
+  forks: Forks | null,
+): boolean =>
   noWorseCost(a, b) &&
+  takesNoMore(used, other) &&
   TIER[a.sig.poorest] >= TIER[b.sig.poorest] &&
   a.sig.lumaMhz >= b.sig.lumaMhz &&
   Number(a.sig.direct) >= Number(b.sig.direct) &&
-  SOUND_RANK[soundStillThere(a)] >= SOUND_RANK[soundStillThere(b)]
+  SOUND_RANK[soundStillThere(a)] >= SOUND_RANK[soundStillThere(b)] &&
+  (a.pieces < b.pieces || mayShare(a, forks) || !mayShare(b, forks))
+
+/**
+ * The sound may still be led over the leads on which the picture has left the unit where it waits; leads of
+ * its own are a piece more.
+ */
+function mayShare(label: Label, forks: Forks | null): boolean {
+  const { sound } = label
+  const left = sound.kind === 'waits' ? leftBy(sound.at, label) : null
+  return left !== null && forks?.mayShare(left.join) === true
+}

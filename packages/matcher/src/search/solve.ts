@@ -5,6 +5,7 @@ import { obstacle } from '../reasons/breaks'
 import { obstaclesBetween } from '../reasons/obstacles'
 import { assign, type Shortage } from './assign'
 import { worksFully } from './finish'
+import { Front, type Finds } from './front'
 import { pathOf, type Finished } from './label'
 import { layOut, waysIn, type Frame, type Layout } from './layout'
 import { beginRound, type Round } from './round'
@@ -22,7 +23,10 @@ export interface Solved {
 /** A search that can be run in slices, and again with exact counts where the shelf ran short. */
 export class Solver {
   private readonly course: Generator<void>
-  private readonly scarce = { units: new Set<string>(), pieces: new Set<number>() }
+  private readonly scarce = {
+    units: new Set<string>(),
+    pieces: new Set<number>(),
+  }
   private layout: Layout | null = null
   private round: Round | null = null
   private search: Search | null = null
@@ -36,6 +40,7 @@ export class Solver {
     private readonly shelf: CompiledShelf,
     private readonly question: Question,
     private readonly budget: number,
+    private readonly findsFor: (frame: Frame) => Finds = () => new Front(),
   ) {
     for (const end of [question.source, question.display]) shelf.end(end.unit)
     this.course = this.run()
@@ -67,7 +72,9 @@ export class Solver {
     this.layout = layout
     for (let round = 1; this.solved === null; round++) {
       this.round = beginRound(shelf, question, layout, this.scarce)
-      const search = new Search({ ...this.round.space, budget: this.budget - this.spent })
+      if (this.round.aerials) yield* this.round.aerials.prepare()
+      const space = { ...this.round.space, budget: this.budget - this.spent }
+      const search = new Search(space, this.findsFor(layout.frame))
       this.search = search
       while (!search.done) {
         search.step(1)

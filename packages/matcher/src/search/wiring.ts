@@ -88,8 +88,26 @@ export function wiringOf(found: Finished): Wiring {
     alone.push(speakers)
   }
   const aerial = (found.aerial?.route.ways ?? []).map(plainNode)
-  return { found, chain, alone, aerial, edges: [...edges, ...aerialEdges(found, chain, aerial)] }
+  const all = [...withSharedLeads(edges), ...aerialEdges(found, chain, aerial)]
+  return { found, chain, alone, aerial, edges: all }
 }
+
+/** Where a sound goes over the pieces of a picture, the picture is laid with them too. */
+function withSharedLeads(edges: readonly Edge[]): Edge[] {
+  const laid = new Map(edges.map((edge) => [edge, edge]))
+  for (const edge of edges) {
+    const { along } = edge.join
+    const picture = along && edges.find((e) => e.of === 'chain' && meet(e, edge, along.shared))
+    if (!picture) continue
+    // Made anew for every wiring, so that it can be told apart where the same is plugged twice.
+    const join = { ...along.join }
+    laid.set(edge, { ...edge, join: { ...edge.join, along: { ...along, join } } })
+    laid.set(picture, { ...picture, join })
+  }
+  return edges.map((edge) => laid.get(edge)!)
+}
+
+const meet = (a: Edge, b: Edge, shared: 'from' | 'to'): boolean => a[shared].node === b[shared].node
 
 /** The node where an aerial joins the chain. */
 export const jointOf = ({ aerial }: Finished, chain: readonly Node[]): Node | null =>

@@ -130,7 +130,7 @@ class Arranging {
 
   private lay(question: Question): Course {
     const layout = layOut(this.shelf, question)
-    const none = { units: new Set<string>(), pieces: new Set<number>() }
+    const none = { units: new Set<string>(), pieces: new Set<number>(), leadsApart: true }
     const { space } = beginRound(this.shelf, question, layout, none)
     return { question, layout, space, chains: [], best: { picture: 0, sound: 0 }, least: DEAREST }
   }

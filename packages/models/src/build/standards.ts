@@ -62,9 +62,11 @@ export function heardOn(
   silent: readonly RfSystemId[] = [],
 ): readonly AcceptRow[] {
   const within = rows.map((row): AcceptRow => ({ ...row, systems: heard }))
-  if (silent.length === 0) return within
-  const scans = [...new Set(rows.flatMap((row) => (row.scans === 'any' ? [] : row.scans)))]
-  return [...within, { scans, colours: 'any', systems: silent, outcome: 'silent' }]
+  const seen = silent.length > 0 ? rows.filter((row) => row.outcome === undefined) : []
+  return [
+    ...within,
+    ...seen.map((row): AcceptRow => ({ ...row, systems: silent, outcome: 'silent' })),
+  ]
 }
 
 /** A tuner that decodes digital carriers and no others. */

@@ -171,6 +171,8 @@ export const ASK = {
   'answer.purchase-several': '{count} of {name}',
   'answer.purchase-shows': 'Then: {summary}',
   'answer.nothing-helps': 'No ordinary part would help.',
+  'answer.nothing-helps-yet':
+    'No part that was tried helps. The search stopped at its limit before it had tried them all.',
   'answer.incomplete': 'The search stopped at its limit: there may be more.',
   'answer.bad-question': 'This address does not hold a whole question. Ask again.',
   'answer.asking': 'Looking through the shelf ...',

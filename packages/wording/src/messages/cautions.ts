@@ -2,6 +2,9 @@
 export const CAUTIONS = {
   'caution.socket-dead': '{port} of the {name} is marked as dead: leave it alone.',
   'caution.socket-dead.more': 'What it would have done goes another way.',
+  'caution.double-dead':
+    'Take the {name} named in the steps: of another one {port} is marked as dead.',
+  'caution.double-dead.more': 'The two look alike.',
   'caution.matching-needed': 'The {name} wants a matching transformer between 75 and 300 ohm.',
   'caution.matching-needed.more':
     'A bare [lead] under its screws gives ghosts and loses most of the signal.',
@@ -13,6 +16,10 @@ export const CAUTIONS = {
     'It fits {other} of the {set} and shows nothing there: it belongs in the [aerial] input.',
   'caution.digital-socket': '{port} of the {name} gives digital sound.',
   'caution.digital-socket.more': 'In an ordinary sound input it makes a roar: it wants a decoder.',
+  'caution.repeats-aerial': '{port} of the {name} only repeats the [aerial].',
+  'caution.repeats-aerial.more': 'What the {name} plays never leaves by it: nothing is broken.',
+  'caution.other-socket': '{port} of the {name} carries neither picture nor sound.',
+  'caution.other-socket.more': 'Its plug fits {other} of the {set} all the same. Leave it alone.',
   'caution.tell-shape': '{control} of the {name} decides how wide pictures arrive.',
   'caution.tell-shape.more': 'Told of a wide screen it makes everybody thin on this one.',
   'caution.dc-on-lead': 'There is a voltage on the [lead] from {port} of the {name}.',
@@ -37,6 +44,17 @@ export const CAUTIONS = {
   'caution.box-waits.more': 'It would never switch over by itself.',
   'caution.standard-grey': '{control} of the {name} must stay as said: elsewhere it shows [grey].',
   'caution.standard-grey.more': 'Nothing is broken: the [colour] is not decoded there.',
+  'caution.standard-negative':
+    '{control} of the {name} must stay as said: elsewhere the picture is torn and like a negative.',
+  'caution.standard-negative.more': 'The picture is modulated the other way up there.',
+  'caution.volts-by-lead':
+    'The {name} takes RGB only while a voltage on the plug tells it to: use the [lead] as said.',
+  'caution.volts-by-lead.more': 'Other [leads] that fit need not bring it.',
+  'caution.hum-loop': 'The [aerial] cable and the [mains] of the {name} may make a loop that hums.',
+  'caution.hum-loop.more':
+    'If it hums, put an isolator for [aerial] cables between the [aerial] and its [socket]. Never lift the [earth] of a plug.',
+  'caution.sync-kind': '{control} of the {name} says where the sync comes from.',
+  'caution.sync-kind.more': 'Elsewhere the picture does not stand still.',
   'caution.standard-hiss': '{control} of the {name} must stay as said: elsewhere there is a hiss.',
   'caution.standard-hiss.more': 'The sound lies at another distance from the picture there.',
   'caution.other-lines': '{control} of the {name} must stay as said.',

@@ -25,6 +25,19 @@ export const HOOKUP = {
   'step.join.orange': 'Orange: {from} {fromPort} to {to} {toPort}.',
   'step.join.grey': '[Grey]: {from} {fromPort} to {to} {toPort}.',
   'step.join.colours': '[Colour] to [colour] at both ends: {from} {fromPort} to {to} {toPort}.',
+  'step.join.same-to': 'Next end of the same {name}: to {to} {toPort}.',
+  'step.join.same-from': 'Next end of the same {name}: from {from} {fromPort}.',
+  'step.join.same-to-piece': 'The same {name} to the {next} as well.',
+  'step.join.same-from-piece': 'The {last} to the same {name} as well.',
+  'step.same-lead': 'It is the {name} from before, not a second one.',
+  'step.tail.yellow': 'Yellow: {unit} {port}.',
+  'step.tail.white': 'White: {unit} {port}.',
+  'step.tail.red': 'Red: {unit} {port}.',
+  'step.tail.green': 'Green: {unit} {port}.',
+  'step.tail.blue': 'Blue: {unit} {port}.',
+  'step.tail.black': 'Black: {unit} {port}.',
+  'step.tail.orange': 'Orange: {unit} {port}.',
+  'step.tail.grey': '[Grey]: {unit} {port}.',
   'step.end-line': '{name} on {to} {toPort}: the line ends there.',
   'step.not-the-green': 'Not the green {port}: that gives a [grey] picture.',
   'step.screw-home': 'Screw it home with your fingers.',
@@ -173,6 +186,9 @@ export const HOOKUP = {
   'caution.shared-socket.more': 'On the component input the same plug shows [grey].',
   'caution.level-lost': 'About {db} dB is lost on the way.',
   'caution.level-lost.more': 'If the picture snows, look here first.',
+  'caution.level-high': 'About {dbmv} dBmV would reach the {set}, more than it need stand.',
+  'caution.level-high.more':
+    'Turn the level down where it is made, or put a pad of {pad} dB before the set: else lines, buzz and false channels.',
   'caution.channel-below':
     'Keep the {name} on channel {channel}: on others it would spoil a station.',
   'caution.channel-below.more':
@@ -212,6 +228,8 @@ export const OBSTACLES = {
   'obstacle.one-way': 'The {to} is made for the other direction. Turned round it converts nothing.',
   'obstacle.wrong-circuits':
     'A [lead] goes into both, but the {from} gives {form:fromForm} there and the {to} takes {form:toForm}. A fitting plug promises nothing: look in the book of the set. Wires cannot convert.',
+  'obstacle.wires-missing':
+    'A [lead] at hand fits the {from} and the {to} and has no wires for {form:form}. A fitting plug promises nothing.',
   'obstacle.level-control':
     'What is played is protected against copying, and the input level control of the {to} is thrown off by its pulses: the picture goes dark and bright.',
   'obstacle.no-handshake':
@@ -219,7 +237,7 @@ export const OBSTACLES = {
   'obstacle.light-gun':
     'A light gun looks for a bright spot on a picture tube drawn at the speed of the {from}; the {to} stores or redraws the picture. No [lead] changes that.',
   'obstacle.switching-voltage':
-    'The {to} takes RGB only when a voltage on the plug tells it to, and nothing from the {from} gives it.',
+    'The {to} takes RGB only when a voltage on the plug tells it to, and none comes there from the {from}.',
   'obstacle.scan': 'The {from} gives {scan:scan}; the {to} does not take it.',
   'obstacle.colour':
     'The {from} gives {colour:colour} [colour]; the {to} decodes {colour:listed}. The picture would be [grey].',

@@ -1,6 +1,6 @@
 import { jackOf, type DeviceModel, type Key } from '@coaxwain/models'
-import { channelsIn, touches, type Channel } from '@coaxwain/signal'
-import { AERIAL_LIMIT_DBMV, isolationDb } from '../../search/aerial'
+import { channelsIn, LEVEL_WINDOWS, touches, type Channel } from '@coaxwain/signal'
+import { AERIAL_LIMIT_DBMV, isolationDb, levelOf } from '../../search/aerial'
 import { nodesOf } from '../../search/wiring'
 import type { PathStop } from '../stops'
 import { boxes, caution, display, named, source, type CautionInput, type Rule } from './rule'
@@ -85,6 +85,24 @@ const idleCarriers: Rule = (c) => {
 const lossOnTheWay: Rule = (c) => {
   const loss = boxes(c).reduce((sum, s) => sum + Math.min(0, s.way.fn.gainDb ?? 0), 0)
   return loss <= -3 ? [caution('level-lost', { db: -loss })] : []
+}
+
+/** More than a set need stand, and the upper end of what is aimed at (see `LEVEL_WINDOWS`). */
+const MOST_DBMV = LEVEL_WINDOWS['working-target'].high
+const AIM_DBMV = 10
+
+/** The carrier as it reaches the display's tuner: as made, with gains and losses since. */
+const tooStrong: Rule = (c) => {
+  const level = display(c).receives ? levelOf(c.input.wiring.found.last) : null
+  return level !== null && level > MOST_DBMV
+    ? [
+        caution('level-high', {
+          set: named(display(c)),
+          dbmv: Math.round(level),
+          pad: Math.ceil(level - AIM_DBMV),
+        }),
+      ]
+    : []
 }
 
 /** Switches of the plan that a tuner counts in, and of its bands. */
@@ -179,6 +197,7 @@ export const CARRIERS: readonly Rule[] = [
   sideband,
   idleCarriers,
   lossOnTheWay,
+  tooStrong,
   airOrCable,
   aerialToBox,
   lookalikeRf,

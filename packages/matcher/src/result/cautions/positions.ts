@@ -12,10 +12,12 @@ import {
   followsField,
   followsLine,
   isEncoded,
+  RF_SYSTEMS,
   sameSoundSpacing,
   SCANS,
   type Colour,
   type Deflection,
+  type RfSystemId,
   type ScanId,
 } from '@coaxwain/signal'
 import type { PathStop } from '../stops'
@@ -48,8 +50,9 @@ function turned(stop: PathStop, control: Switch): Condition[] {
 const listsScan = (row: AcceptRow, scan: ScanId): boolean =>
   row.scans === 'any' || row.scans.includes(scan)
 
-/** A row decodes this colour; what is monochrome loses nothing anywhere. */
-function decodes(rows: readonly AcceptRow[], colour: Colour): boolean {
+/** A row decodes this colour, and does not merely show it grey; what is monochrome loses nothing anywhere. */
+function decodes(all: readonly AcceptRow[], colour: Colour): boolean {
+  const rows = all.filter((r) => r.outcome !== 'monochrome')
   if (!isEncoded(colour) || rows.some((r) => r.colours === 'any')) return true
   return (
     decode(
@@ -80,11 +83,39 @@ const ofDisplay: Rule = (c) => {
       const systems = rows.flatMap((r) => r.systems ?? [])
       return carrier !== null && !systems.some((s) => sameSoundSpacing(s, carrier.system))
     })
+    const negative = left.some((rows) => {
+      const systems = rows.flatMap((r) => r.systems ?? [])
+      return carrier !== null && systems.length > 0 && !systems.some((s) => sees(s, carrier.system))
+    })
     return [
+      ...(negative ? [caution('standard-negative', details)] : []),
       ...(grey ? [caution('standard-grey', details)] : []),
       ...(hiss ? [caution('standard-hiss', details)] : []),
     ]
   })
+}
+
+/** A receiver for one system sees what is modulated the same way up, and System A only its own. */
+const sees = (own: RfSystemId, other: RfSystemId): boolean =>
+  RF_SYSTEMS[own].polarity === RF_SYSTEMS[other].polarity && (own === 'A') === (other === 'A')
+
+const isRgb = (form: string | null | undefined): boolean => form?.startsWith('rg') === true
+
+/** One socket takes RGB with this sync or with that, and a switch says which. */
+const syncKind: Rule = (c) => {
+  const end = display(c)
+  const { into } = end.way
+  const others = end.variant.device.jacks.filter(
+    (j) =>
+      j.dir === 'in' &&
+      isRgb(j.form) &&
+      j.form !== into?.face.form &&
+      j.contacts.some((x) => into?.ports.includes(x.port) === true),
+  )
+  if (!isRgb(into?.face.form) || others.length === 0) return []
+  return decisive(end, ['mode', 'other', 'input', 'standard'])
+    .slice(0, 1)
+    .map((control) => caution('sync-kind', { name: named(end), control: control.label }))
 }
 
 /** A switch of the source: on another position it gives what this display does not follow. */
@@ -184,4 +215,4 @@ const loads: Rule = (c) =>
     : []
 
 /** Positions that spoil the picture or the sound while they stand elsewhere. */
-export const POSITIONS: readonly Rule[] = [ofDisplay, ofSource, trimmers, shapes, loads]
+export const POSITIONS: readonly Rule[] = [ofDisplay, syncKind, ofSource, trimmers, shapes, loads]

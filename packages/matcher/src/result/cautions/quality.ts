@@ -108,10 +108,25 @@ const soundApart: Rule = (c) => {
     return playsSound(c) ? [caution('no-loudspeaker-here', details)] : []
   }
   if (!heard) return []
-  const first = c.hookup.links[c.hookup.legs[0]?.links[0] ?? 0]
-  const multi =
-    first && first.circuits.length > 1 && first.circuits.every((x) => !x.from.startsWith('audio'))
-  return multi || isMute(c) ? [caution('sound-apart')] : []
+  return isManyWired(c) || isMute(c) ? [caution('sound-apart')] : []
+}
+
+/** The picture leaves its source by one plug of several wires, and none of them is for sound. */
+function isManyWired({ hookup: { legs, links } }: CautionInput): boolean {
+  const [first] = legs[0]?.links ?? []
+  const from = links[first ?? -1]?.from
+  const wires = links
+    .filter((l) => l.from.unit === from?.unit && l.from.port === from.port)
+    .flatMap((l) => l.circuits)
+  return wires.length > 1 && wires.every((x) => !x.from.startsWith('audio'))
+}
+
+/** The earth of the aerial and that of the mains meet by the sound leads (common practice, no source). */
+const humLoop: Rule = (c) => {
+  const { aerial, speakers } = c.input.wiring.found
+  return aerial && speakers?.way.variant.powered
+    ? [caution('hum-loop', { name: speakers.way.variant.device.name })]
+    : []
 }
 
 const playsSound = (c: CautionInput): boolean =>
@@ -163,6 +178,7 @@ export const QUALITY: readonly Rule[] = [
   programmes,
   sound,
   soundApart,
+  humLoop,
   lessDetail,
   wide,
   fewLines,

@@ -7,25 +7,56 @@ import { boxes, caution, display, named, source, type CautionInput, type Rule } 
 /** More dead sockets than these are not named. */
 const MOST_DEAD = 2
 
-const deadPorts = (unit: Unit, device: DeviceModel): Port[] =>
-  device.ports.filter((p) => unit.forms.some((f) => f.port === p.key && f.state === 'dead'))
+interface DeadPort {
+  readonly port: Port
+  readonly units: readonly Unit[]
+}
 
-const present = ({ input: { frame } }: CautionInput): readonly Variant[] => [
-  frame.source,
-  frame.display,
-  ...frame.shelf,
-]
+const deadPortsOf = new WeakMap<Variant, readonly DeadPort[]>()
 
-/** Sockets recorded as dead on whatever takes part or might: named, so that nobody tries them. */
-function dead(c: CautionInput): Caution[] {
-  const found: Caution[] = []
-  for (const { device, units } of present(c)) {
-    for (const port of units.flatMap((unit) => deadPorts(unit, device))) {
-      found.push(caution('socket-dead', { name: device.name, port: port.label }))
-      if (found.length >= MOST_DEAD) return found
-    }
-  }
+/** Ports of a model with the units on which they are recorded as dead; found once for each shelf. */
+function deadPorts(variant: Variant): readonly DeadPort[] {
+  const known = deadPortsOf.get(variant)
+  if (known) return known
+  const isDead = (unit: Unit, port: Port) =>
+    unit.forms.some((f) => f.port === port.key && f.state === 'dead')
+  const found = variant.device.ports
+    .map((port) => ({ port, units: variant.units.filter((unit) => isDead(unit, port)) }))
+    .filter(({ units }) => units.length > 0)
+  deadPortsOf.set(variant, found)
   return found
+}
+
+/** Takes something in and gives something on, so that a way could have led through it. */
+const isBetween = (device: DeviceModel): boolean =>
+  device.functions.some((f) => f.needs.length > 0 && f.gives.length > 0)
+
+/**
+ * Sockets recorded as dead, so that nobody tries them: first those of the units that take part, then those of
+ * their doubles on the shelf, which are easily taken for them, then those of boxes that a way could lead through.
+ */
+function dead(c: CautionInput): Caution[] {
+  const { source: from, display: to, shelf } = c.input.frame
+  const taken = new Set(c.stops.map((s) => s.unit))
+  const part = new Set(c.stops.map((s) => s.variant.device))
+  const onShelf = [...new Set([from, to, ...shelf])]
+  const say = (code: string, variants: readonly Variant[], counts: (u: Unit) => boolean) =>
+    variants.flatMap((v) =>
+      deadPorts(v)
+        .filter(({ units }) => units.some(counts))
+        .map(({ port }) => caution(code, { name: v.device.name, port: port.label })),
+    )
+  const others = onShelf.filter(({ device }) => !part.has(device) && isBetween(device))
+  const found = [
+    ...say('socket-dead', onShelf, (u) => taken.has(u)),
+    ...say(
+      'double-dead',
+      onShelf.filter(({ device }) => part.has(device)),
+      (u) => !taken.has(u),
+    ),
+    ...say('socket-dead', others, () => true),
+  ]
+  return found.slice(0, MOST_DEAD)
 }
 
 const usedPorts = (
@@ -93,6 +124,45 @@ const digitalSocket: Rule = (c) => {
     .map((p) => caution('digital-socket', { name: device.name, port: p.label }))
 }
 
+/** A socket that only repeats the aerial: what is played never leaves by it, though a set's aerial input is near. */
+const repeatsAerial: Rule = (c) => {
+  const { device } = source(c).variant
+  const tuned = display(c).variant.device.functions.some((f) => f.tunedBy !== undefined)
+  const { fn } = source(c).way
+  const played = new Set(fn.gives.map((g) => g.jack))
+  const loops = device.functions.filter((f) => f.kind === 'loop-through').flatMap((f) => f.gives)
+  return device.jacks
+    .filter((j) => j.form === 'rf' && !played.has(j.key) && loops.some((g) => g.jack === j.key))
+    .slice(0, tuned ? 1 : 0)
+    .map((j) =>
+      caution('repeats-aerial', {
+        name: device.name,
+        port: portOf(device, j.contacts[0]!.port).label,
+      }),
+    )
+}
+
+/** A socket without picture or sound, such as one for tape data or power, that takes a plug of the set's input. */
+const otherSocket: Rule = (c) => {
+  const set = display(c).variant.device
+  const inputs = set.ports.filter((p) => p.circuits.some((x) => x.dir !== 'out'))
+  return source(c)
+    .variant.device.ports.filter((p) => p.circuits.length === 0)
+    .flatMap((port) =>
+      inputs
+        .filter((p) => familyOf(p.connector) === familyOf(port.connector))
+        .map((other) =>
+          caution('other-socket', {
+            name: named(source(c)),
+            port: port.label,
+            other: other.label,
+            set: set.name,
+          }),
+        ),
+    )
+    .slice(0, 1)
+}
+
 /** A voltage on a lead, from an output or up to an aerial's own amplifier. */
 const directCurrent: Rule = (c) => {
   const sent = c.stops.flatMap((s) =>
@@ -144,5 +214,7 @@ export const SOCKETS: readonly Rule[] = [
   ownWiring,
   channelSocket,
   digitalSocket,
+  repeatsAerial,
+  otherSocket,
   syncWire,
 ]

@@ -1,3 +1,6 @@
+import type { Plug } from '@coaxwain/models'
+import { mates } from '@coaxwain/signal'
+import type { Face } from '../../compile/face'
 import { caution, display, named, source, type Rule } from './rule'
 
 const directionSwitch: Rule = (c) =>
@@ -16,8 +19,36 @@ const directionSwitch: Rule = (c) =>
 const chooseByHand: Rule = (c) => {
   const end = display(c)
   const scart = (end.way.into?.face.ports ?? []).some((p) => p.connector === 'scart-socket')
-  const woken = c.input.wiring.found.step.join.volts.includes('av-select')
+  const { edges, chain } = c.input.wiring
+  const last = edges.find((e) => e.of === 'chain' && e.to.node === chain.at(-1))
+  const woken = last?.join.volts.includes('av-select') === true
   return scart && !woken ? [caution('choose-by-hand', { name: named(end) })] : []
+}
+
+const plugsInto = (plugs: readonly Plug[], face: Face | undefined): boolean =>
+  plugs.some((a) => face?.ports.some((b) => mates(a.connector, b.connector)))
+
+/** RGB that wants a voltage which only some of the leads at hand bring, or the lead and not the source. */
+const voltsByLead: Rule = (c) => {
+  const end = display(c)
+  const { scan, colour } = end.sig.core
+  const rows = end.way.fn.accepts.filter(
+    (r) =>
+      (r.scans === 'any' || r.scans.includes(scan)) &&
+      (r.colours === 'any' || r.colours.includes(colour)),
+  )
+  const wanted = rows.flatMap((r) => r.volts ?? [])
+  if (wanted.length === 0 || rows.some((r) => !r.volts)) return []
+  const out = c.stops.at(-2)?.way.from?.face
+  const into = end.way.into?.face
+  const given = out?.volts ?? []
+  const thin = c.input.frame.drawer.owned.pieces.some(
+    ({ piece: { a, b }, passesVolts }) =>
+      !passesVolts &&
+      ((plugsInto(a, out) && plugsInto(b, into)) || (plugsInto(b, out) && plugsInto(a, into))),
+  )
+  const byLead = wanted.some((v) => !given.includes(v))
+  return thin || byLead ? [caution('volts-by-lead', { name: named(end) })] : []
 }
 
 const automatic: Rule = (c) =>
@@ -68,6 +99,7 @@ export const SWITCHES: readonly Rule[] = [
   waits,
   directionSwitch,
   chooseByHand,
+  voltsByLead,
   sharedSocket,
   openLine,
 ]
