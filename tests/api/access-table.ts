@@ -41,6 +41,7 @@ export const ACCESS: Readonly<Record<RouteName, Access>> = {
   readSnapshot: ALL,
   ask: ALL,
   arrange: ALL,
+  prove: ALL,
   checkChain: ALL,
   listHookups: ALL,
   readHookup: ALL,

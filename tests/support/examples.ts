@@ -4,6 +4,7 @@ import {
   chainOf,
   type ArrangementQuestion,
   type Hookup,
+  type ProveQuestion,
   type Question,
   type Snapshot,
   type Unit,
@@ -35,6 +36,14 @@ export const arrangementQuestion = (
   avoid: [],
   offAir: [],
   assumedLeads: [],
+  ...rest,
+})
+
+/** What is asked to try the player. */
+export const proveQuestion = (rest: Partial<ProveQuestion> = {}): ProveQuestion => ({
+  format: 1,
+  unit: UNITS.player,
+  avoid: [],
   ...rest,
 })
 
@@ -150,6 +159,7 @@ export const EXAMPLES: { readonly [N in RouteName]: Example<N> } = {
   readSnapshot: { params: IN },
   ask: { params: IN, body: { question: question() } },
   arrange: { params: IN, body: { question: arrangementQuestion() } },
+  prove: { params: IN, body: { question: proveQuestion() } },
   checkChain: { params: IN, body: { question: question(), chain: chainOf(hookup()) } },
   listHookups: { params: IN },
   readHookup: { params: HOOKUP, before: 'save-hookup' },

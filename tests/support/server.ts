@@ -20,6 +20,7 @@ type Choices = Partial<AppSettings> & {
   readonly matcher?: Parameters<typeof compose>[0]['matcher']
   readonly checker?: Parameters<typeof compose>[0]['checker']
   readonly arrangementChecker?: Parameters<typeof compose>[0]['arrangementChecker']
+  readonly proofChecker?: Parameters<typeof compose>[0]['proofChecker']
 }
 
 interface Layer {
@@ -39,10 +40,19 @@ const mountedIn = (stack: readonly Layer[]): string[] =>
 
 /** The whole application on a port of its own, in this process. */
 export async function startApi(db: Knex, choices: Choices = {}): Promise<RunningApi> {
-  const { matcher = findHookups, checker = checkHookup, arrangementChecker, ...settings } = choices
+  const { matcher = findHookups, checker = checkHookup, ...rest } = choices
+  const { arrangementChecker, proofChecker, ...settings } = rest
   const logger = choices.logger ?? createLogger(process.env['COAXWAIN_TEST_LOG'] ?? 'silent')
   const mode = choices.mode ?? 'demo'
-  const services = await compose({ db, mode, matcher, checker, arrangementChecker, logger })
+  const services = await compose({
+    db,
+    mode,
+    matcher,
+    checker,
+    arrangementChecker,
+    proofChecker,
+    logger,
+  })
   const app = createApp(services, {
     mode,
     secret: 'for tests alone, and long enough for that',

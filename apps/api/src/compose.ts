@@ -1,4 +1,4 @@
-import { checkArrangement, checkChain } from '@coaxwain/checker'
+import { checkArrangement, checkChain, checkProofs } from '@coaxwain/checker'
 import type { Mode } from '@coaxwain/contract'
 import type { Store } from 'express-session'
 import type { Knex } from 'knex'
@@ -21,7 +21,7 @@ import { createHookupsRepository } from './hookups/repository'
 import { hookupRoutes } from './hookups/routes'
 import { createHookupsService } from './hookups/service'
 import type { AllHandlers } from './http/call'
-import { findArrangements, withOrdinaryParts } from './matcher'
+import { findArrangements, findProofs, withOrdinaryParts } from './matcher'
 import { createModelsRepository } from './models/repository'
 import { modelRoutes } from './models/routes'
 import { createModelsService } from './models/service'
@@ -32,6 +32,8 @@ import { createPeopleService, type PeopleService } from './people/service'
 import { createPlacesRepository } from './places/repository'
 import { placeRoutes } from './places/routes'
 import { createPlacesService } from './places/service'
+import { proofRoutes } from './proofs/routes'
+import { createProofsService, type ProofChecker } from './proofs/service'
 import { createSnapshotRepository } from './snapshot/repository'
 import { snapshotRoutes } from './snapshot/routes'
 import { createSnapshotService } from './snapshot/service'
@@ -45,6 +47,7 @@ export interface ComposeNeeds {
   readonly matcher: Matcher
   readonly checker: Checker
   readonly arrangementChecker?: ArrangementChecker | undefined
+  readonly proofChecker?: ProofChecker | undefined
   readonly logger: Logger
 }
 
@@ -65,6 +68,7 @@ export async function compose({
   matcher,
   checker,
   arrangementChecker = checkArrangement,
+  proofChecker = checkProofs,
   logger,
 }: ComposeNeeds): Promise<Services> {
   const people = createPeopleService({
@@ -108,6 +112,12 @@ export async function compose({
     checkArrangement: arrangementChecker,
     onRefusal,
   })
+  const proofs = createProofsService({
+    snapshots,
+    prove: findProofs,
+    checkProofs: proofChecker,
+    onRefusal,
+  })
   const hookups = createHookupsService({
     hookups: createHookupsRepository(db),
     inOne: together(db, createHookupsRepository),
@@ -124,6 +134,7 @@ export async function compose({
       ...snapshotRoutes(snapshots),
       ...answerRoutes(answers),
       ...arrangementRoutes(arrangements),
+      ...proofRoutes(proofs),
       ...hookupCheckRoutes(createHookupChecksService({ snapshots, checkChain })),
       ...hookupRoutes(hookups),
     },

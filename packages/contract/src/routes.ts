@@ -12,6 +12,7 @@ import {
 } from './hookups'
 import { modelChange, modelDetail, modelPage, modelQuery, modelRevision, newModel } from './models'
 import { collection, collections, demoSignIns, members, session, signIn } from './people'
+import { proveReply, proveRequest } from './proofs'
 import { newPlace, place, placeChange, places } from './places'
 import type { Right } from './roles'
 import { uid } from './text'
@@ -427,6 +428,17 @@ export const ROUTES = {
     params: OF_COLLECTION,
     body: arrangementRequest,
     reply: arrangementReply,
+    status: 200,
+  },
+  prove: {
+    ...PLAIN,
+    method: 'POST',
+    path: `${IN}/proofs`,
+    who: 'hookups.read',
+    summary: 'The shortest chains that try what nobody has tried of a unit; nothing is kept',
+    params: OF_COLLECTION,
+    body: proveRequest,
+    reply: proveReply,
     status: 200,
   },
   checkChain: {

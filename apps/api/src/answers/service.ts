@@ -37,7 +37,7 @@ export type OnRefusal = (refused: {
 
 export type AnswersService = ReturnType<typeof createAnswersService>
 
-const fault = (path: string, code: string, name: string): FieldTrouble => ({
+export const fault = (path: string, code: string, name: string): FieldTrouble => ({
   path: `question.${path}`,
   code,
   details: { name },

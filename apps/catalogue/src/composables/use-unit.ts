@@ -1,6 +1,6 @@
 import type { UnitDetail } from '@coaxwain/contract'
 import type { Result } from '@coaxwain/result'
-import { fitted, type Modification } from '@coaxwain/shelf'
+import { fitted, type Modification, type Signal, type TestState } from '@coaxwain/shelf'
 import { computed, ref, shallowRef } from 'vue'
 import { codeOf, type Failure } from '../api/failure'
 import type { EvidenceRow, NotedState } from '../format/evidence-rows'
@@ -86,6 +86,22 @@ export function useUnit(collection: () => string, uid: () => string) {
     }, done)
   }
 
+  /** What came of a test chain, on everything that it tried. */
+  const noteSignals = (
+    signals: readonly Signal[],
+    { state, on, what }: { readonly state: TestState; readonly on: string; readonly what: string },
+  ): Promise<boolean> => {
+    const noted = evidence({ state, on, how: say('prove.how'), port: null })
+    return write(
+      () =>
+        store.changeStates(collection(), held(), {
+          forms: signals.flatMap((s) => ('jack' in s ? [{ ...s, ...noted }] : [])),
+          functions: signals.flatMap((s) => ('function' in s ? [{ ...s, ...noted }] : [])),
+        }),
+      say('unit.state-saved', { what, state: say(`state.${state}`) }),
+    )
+  }
+
   const noteStands = (stands: Record<string, string>): Promise<boolean> =>
     write(() => store.changeStands(collection(), held(), { stands }), say('unit.saved'))
 
@@ -103,5 +119,17 @@ export function useUnit(collection: () => string, uid: () => string) {
     return unit.value
   }
 
-  return { unit, device, piece, failure, busy, load, noteState, noteStands, noteChanges, restore }
+  return {
+    unit,
+    device,
+    piece,
+    failure,
+    busy,
+    load,
+    noteState,
+    noteSignals,
+    noteStands,
+    noteChanges,
+    restore,
+  }
 }
