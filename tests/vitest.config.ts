@@ -14,12 +14,16 @@ const withoutStyles = [
 
 const SLOW_MS = 60_000
 
+/** Files share what they import; no test replaces a module or leaves anything behind. */
+const isolate = false
+
 const onDatabase = (name: string, include: string[]) => ({
   test: {
     name,
     root,
     include,
     environment: 'node' as const,
+    isolate,
     globalSetup: ['tests/support/global-database.ts'],
     testTimeout: SLOW_MS,
     hookTimeout: SLOW_MS,
@@ -37,6 +41,7 @@ const onSite = (name: string, include: string[], exclude: string[] = []) => ({
     include,
     exclude,
     environment: 'node' as const,
+    isolate,
     globalSetup: ['tests/support/global-site.ts'],
     testTimeout: SLOW_MS,
     hookTimeout: SLOW_MS,
@@ -45,7 +50,7 @@ const onSite = (name: string, include: string[], exclude: string[] = []) => ({
 })
 
 const plain = (name: string, include: string[]) => ({
-  test: { name, root, include, environment: 'node' as const, testTimeout: SLOW_MS },
+  test: { name, root, include, environment: 'node' as const, isolate, testTimeout: SLOW_MS },
 })
 
 export default defineConfig({
@@ -75,6 +80,7 @@ export default defineConfig({
           root,
           include: ['apps/catalogue/**/*.test.ts'],
           environment: 'happy-dom',
+          isolate,
         },
       },
       onDatabase('api', ['tests/api/**/*.test.ts']),
