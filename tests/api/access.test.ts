@@ -7,7 +7,7 @@ import { useRig } from '../support/rig'
 import { OTHER, type Who } from '../support/world'
 import { ACCESS } from './access-table'
 
-const rig = useRig()
+const rig = useRig({}, { signedIn: true })
 
 const NAMES = Object.keys(ROUTES) as RouteName[]
 const VISITORS = ['stranger', 'outsider', 'neighbour', ...ROLES] as const

@@ -12,8 +12,16 @@ export interface Rig {
   as(who: Who): Promise<Client>
 }
 
+interface Keeping {
+  /** People stay signed in from test to test, as long as nobody has changed the world or signed in or out. */
+  readonly signedIn?: boolean
+}
+
 /** A database for the file, an application on it, and the same small world before each test. */
-export function useRig(choices: Parameters<typeof startApi>[1] = {}): Rig {
+export function useRig(
+  choices: Parameters<typeof startApi>[1] = {},
+  { signedIn = false }: Keeping = {},
+): Rig {
   let db: Knex
   let api: RunningApi
   const clients = new Map<Who, Promise<Client>>()
@@ -26,14 +34,20 @@ export function useRig(choices: Parameters<typeof startApi>[1] = {}): Rig {
 
   let world = ''
 
+  const isUntouched = async (): Promise<boolean> => {
+    const sessions = await db('sessions').count<[{ n: number }]>('* as n')
+    return (await checksum(db)) === world && (!signedIn || sessions[0]?.n === clients.size)
+  }
+
   beforeEach(async () => {
-    await emptyMoving(db)
-    if ((await checksum(db)) !== world) {
-      await emptyTables(db)
-      await makeWorld(db)
-      world = await checksum(db)
-    }
+    const untouched = await isUntouched()
+    if (untouched && signedIn) return
     clients.clear()
+    await emptyMoving(db)
+    if (untouched) return
+    await emptyTables(db)
+    await makeWorld(db)
+    world = await checksum(db)
   })
 
   afterAll(async () => {

@@ -1,4 +1,4 @@
-import { formState, functionState, nameOf } from '@coaxwain/shelf'
+import { formState, functionState, nameOf, triesBothSides } from '@coaxwain/shelf'
 import type { Hookup, Proof, ProveQuestion, Signal, Snapshot, Uid, Unit } from '@coaxwain/shelf'
 import { benchOf, type Bench } from './bench'
 import { checkBench } from './check-hookup'
@@ -9,7 +9,7 @@ import type { Finding } from './finding'
 export type ProofFinding =
   | Finding
   | {
-      readonly code: 'untried-beside' | 'not-on-trial' | 'lead-untried' | 'nothing-heard'
+      readonly code: 'untried-beside' | 'not-on-trial' | 'lead-untried' | 'nothing-heard' | 'sides-added'
       readonly details: Readonly<Record<string, string>>
     }
 
@@ -73,6 +73,9 @@ function checkTrial(
     ...leadsUntried(bench, hookup),
     ...(heard.length > 0 && hookup.sound.sound === 'none'
       ? [{ code: 'nothing-heard' as const, details: {} }]
+      : []),
+    ...(triesBothSides(heard) && hookup.sound.sound === 'mono'
+      ? [{ code: 'sides-added' as const, details: {} }]
       : []),
   ]
 }

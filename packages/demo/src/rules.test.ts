@@ -26,7 +26,7 @@ const ALDER_LANE: readonly Row[] = [
   [130, 102, {}, '!line-rate !no-common-form'],
   [135, 101, {}, 'repeats-aerial'],
   [135, 115, { demands: { keepAerial: true } }, 'hum-loop'],
-  [142, 101, {}, 'double-dead level-high'],
+  [142, 103, {}, 'double-dead level-high'],
   [
     142,
     103,

@@ -56,6 +56,12 @@ export interface ProveAnswer {
 export const nameOf = (signal: Signal): string =>
   'function' in signal ? `function ${signal.function}` : `form ${signal.jack} ${signal.port}`
 
+/** Both sides of one sound are tried at once: added into one channel, the one would hide that the other is dead. */
+export const triesBothSides = (heard: readonly Signal[]): boolean => {
+  const jacks = heard.flatMap((s) => ('jack' in s ? [s.jack] : []))
+  return new Set(jacks).size < jacks.length
+}
+
 /** Signals that only one plug-up can try, so that they are one thing: a form over all its ports, a function. */
 export const thingOf = (signal: Signal): string =>
   'function' in signal ? `function ${signal.function}` : `form ${signal.jack}`

@@ -26,12 +26,12 @@ export function useAsking<Q, A>({ question, keyOf, fetch, take }: Asking<Q, A>) 
 
   async function ask(): Promise<void> {
     stop()
+    failure.value = null
     const asked = question()
     if (asked === null) return
     const mine = new AbortController()
     running = mine
     busy.value = true
-    failure.value = null
     const answered = await fetch(asked, mine.signal)
     if (running !== mine || mine.signal.aborted) return
     busy.value = false

@@ -135,7 +135,7 @@ export const MODULATORS = {
         gives: [
           gives('rf-out', SAME, {
             sound: 'same',
-            rf: [carrier('M', { levelDbmv: 25, sideband: 'vestigial' })],
+            rf: [carrier('M', { levelDbmv: 15.5, sideband: 'vestigial' })],
           }),
         ],
         label: 'Modulates',

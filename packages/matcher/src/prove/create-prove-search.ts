@@ -1,4 +1,4 @@
-import { LIMITS, nameOf } from '@coaxwain/shelf'
+import { LIMITS, nameOf, triesBothSides } from '@coaxwain/shelf'
 import type {
   Proof,
   ProofObstacle,
@@ -310,9 +310,8 @@ class Proving {
       this.isOwn(display) && display.way.variant.device.display?.screen === 'tube-mono'
     const grey = greySet || pathOf(found.last)[0]!.sig.core.colour === 'mono'
     const isUsed = nodesOf(wiring).some((n) => this.isOwn(n))
-    return (
-      isUsed && (found.picture.colour || grey) && (heard.length === 0 || found.sound !== 'none')
-    )
+    const isHeard = triesBothSides(heard) ? found.sound === 'stereo' : found.sound !== 'none'
+    return isUsed && (found.picture.colour || grey) && (heard.length === 0 || isHeard)
   }
 
   private isBetter(trial: Trial, found: Finished): boolean {

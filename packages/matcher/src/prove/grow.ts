@@ -4,7 +4,7 @@ import type { Move, MoveTable } from '../search/moves'
 import { Outlooks } from '../search/outlook'
 import { Queue } from '../search/queue'
 import type { Round } from '../search/round'
-import { stateOf } from '../search/search'
+import { soundStillThere, stateOf } from '../search/search'
 
 /** A chain so far, and what it is for; chains for different purposes do not beat each other. */
 export interface Lane<T> {
@@ -62,7 +62,8 @@ export function* grow<T>(starts: readonly Lane<T>[], course: Course<T>): Generat
   const isBeaten = ({ label, purpose }: Lane<T>): boolean => {
     const known = met.get(purpose) ?? new Map<string, Cost>()
     met.set(purpose, known)
-    const key = stateOf(label, space)
+    // A chain that brings less sound is no match for one that brings more, though it costs less.
+    const key = `${stateOf(label, space)} ${label.sig.sound} ${soundStillThere(label)}`
     const before = known.get(key)
     if (before && compareCosts(before, label) <= 0) return true
     known.set(key, label)

@@ -39,9 +39,10 @@ export function obstacleTo(signal: Signal, ended: Ended): ProofObstacle {
   const ways = [...ended.ways, ...ended.sounds].filter((w) => leansOn(w, signal))
   const usable = ways.filter(isUsable)
   if (usable.length === 0) return ways.some((w) => w.harm) ? 'would-harm' : 'no-way-inside'
-  if (isStuck(ended)) return 'out-of-reach'
   if (ended.field.supply.drawer.total === 0) return 'no-tried-lead'
-  return missing(ended, usable)
+  const code = missing(ended, usable)
+  const isThere = code === 'nothing-arrives' || code === 'nothing-shows'
+  return isThere && isStuck(ended) ? 'out-of-reach' : code
 }
 
 /** Only a remote control that is not here reaches a control, and nobody has noted where it stands. */

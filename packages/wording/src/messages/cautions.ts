@@ -3,7 +3,7 @@ export const CAUTIONS = {
   'caution.socket-dead': '{port} of the {name} is marked as dead: leave it alone.',
   'caution.socket-dead.more': 'What it would have done goes another way.',
   'caution.double-dead':
-    'Take the {name} named in the steps: of another one {port} is marked as dead.',
+    'Use the {name} named in the steps: on another of its kind {port} is marked as dead.',
   'caution.double-dead.more': 'The two look alike.',
   'caution.matching-needed': 'The {name} wants a matching transformer between 75 and 300 ohm.',
   'caution.matching-needed.more':
@@ -52,7 +52,7 @@ export const CAUTIONS = {
   'caution.volts-by-lead.more': 'Other [leads] that fit need not bring it.',
   'caution.hum-loop': 'The [aerial] cable and the [mains] of the {name} may make a loop that hums.',
   'caution.hum-loop.more':
-    'If it hums, put an isolator for [aerial] cables between the [aerial] and its [socket]. Never lift the [earth] of a plug.',
+    'If it hums, an isolator for [aerial] cables goes between the wall and the set, never before the place where the cable is bonded; the local electrical code decides. Never lift the [earth] of a plug.',
   'caution.sync-kind': '{control} of the {name} says where the sync comes from.',
   'caution.sync-kind.more': 'Elsewhere the picture does not stand still.',
   'caution.standard-hiss': '{control} of the {name} must stay as said: elsewhere there is a hiss.',

@@ -3,6 +3,8 @@ export const PROVE = {
   'prove.title': 'Try what is untested',
   'prove.line':
     'Test chains from your own shelf in which everything else is known to work, so that what you see and hear is the verdict.',
+  'prove.care':
+    'Before a unit is switched on for the first time: look for damage, stay beside it, and unplug it at any smell or smoke. Its inside is for people trained to work there; the local electrical code goes before anything said here.',
   'prove.find': 'Find test chains',
   'prove.asking': 'Looking for test chains ...',
   'prove.found': '{count|# test chain|# test chains} found',
@@ -18,13 +20,14 @@ export const PROVE = {
   'prove.sound-worked': 'Sound is good',
   'prove.sound-failed': 'No good sound',
   'prove.several':
-    'None of these can be tried without the others. If it fails, one of them is to blame and nothing is noted.',
+    'If it fails, this alone does not tell what is to blame: note by hand the [socket] that turns out bad.',
   'prove.thing': '{title} ({sockets})',
   'prove.how': 'test chain',
   'prove.show': 'Steps and drawing',
   'prove.other-ways': 'Every way from the one to the other',
   'prove.left': 'Cannot be tried now',
-  'prove.left.no-way-inside': 'Nothing that works inside the unit takes from it or gives to it.',
+  'prove.left.no-way-inside':
+    'All that uses it inside is noted as not working, or the model names nothing that uses it.',
   'prove.left.would-harm':
     'A [lead] plugged in there could carry [mains]. Leave it to somebody who is qualified for it.',
   'prove.left.out-of-reach':

@@ -91,17 +91,24 @@ const lossOnTheWay: Rule = (c) => {
 const MOST_DBMV = LEVEL_WINDOWS['working-target'].high
 const AIM_DBMV = 10
 
+/** What pads, joints and transformers in the leads take off a carrier, in dB. */
+const lostInLeads = (c: CautionInput): number =>
+  c.hookup.links
+    .filter((link) => link.circuits.some((x) => x.from === 'rf'))
+    .flatMap((link) => link.pieces)
+    .reduce((sum, { model }) => {
+      const sort = c.input.frame.drawer.pieces.find((p) => p.models.some((m) => m.model === model))
+      return sum + (sort?.piece.lossDb ?? 0)
+    }, 0)
+
 /** The carrier as it reaches the display's tuner: as made, with gains and losses since. */
 const tooStrong: Rule = (c) => {
-  const level = display(c).receives ? levelOf(c.input.wiring.found.last) : null
-  return level !== null && level > MOST_DBMV
-    ? [
-        caution('level-high', {
-          set: named(display(c)),
-          dbmv: Math.round(level),
-          pad: Math.ceil(level - AIM_DBMV),
-        }),
-      ]
+  const sent = display(c).receives ? levelOf(c.input.wiring.found.last) : null
+  if (sent === null || sent <= MOST_DBMV) return []
+  const level = sent - lostInLeads(c)
+  const details = { set: named(display(c)), dbmv: Math.round(level) }
+  return level > MOST_DBMV
+    ? [caution('level-high', { ...details, pad: Math.ceil(level - AIM_DBMV) })]
     : []
 }
 
