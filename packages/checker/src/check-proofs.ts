@@ -9,7 +9,8 @@ import type { Finding } from './finding'
 export type ProofFinding =
   | Finding
   | {
-      readonly code: 'untried-beside' | 'not-on-trial' | 'lead-untried' | 'nothing-heard' | 'sides-added'
+      readonly code:
+        'untried-beside' | 'not-on-trial' | 'lead-untried' | 'nothing-heard' | 'sides-added'
       readonly details: Readonly<Record<string, string>>
     }
 
