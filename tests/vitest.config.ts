@@ -41,7 +41,6 @@ const onSite = (name: string, include: string[], exclude: string[] = []) => ({
     include,
     exclude,
     environment: 'node' as const,
-    isolate,
     globalSetup: ['tests/support/global-site.ts'],
     testTimeout: SLOW_MS,
     hookTimeout: SLOW_MS,
