@@ -1253,7 +1253,7 @@ const withoutTaken = (unit: CaseUnit): CaseUnit => ({
   ports: unit.ports.filter((p) => !p.taken && canStand(unit, p.when)),
 })
 
-/** Each control has one of the positions that are named; one without a list has any. */
+/** Each control stands on one of the positions that are named, or anywhere where none is. */
 const canStand = ({ settings }: CaseUnit, when: When | undefined): boolean =>
   Object.entries(when ?? {}).every(([control, positions]) => {
     const choices = settings?.find((s) => s.name === control)?.choices

@@ -88,7 +88,7 @@ describe('chains that try a unit', () => {
   )
 
   it(
-    'are as short as any hookup that leans on the same',
+    'are no longer than a hookup that leans on the same',
     () => {
       let compared = 0
       holds((drawn) => {

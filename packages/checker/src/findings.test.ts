@@ -2,6 +2,7 @@ import { automatic, choice, at, OTHERWISE, pluggedInto } from '@coaxwain/models/
 import { describe, expect, it } from 'vitest'
 import { RULES } from './check-hookup'
 import { FINDINGS, type FindingCode } from './finding'
+import { tried } from '@coaxwain/shelf/rig'
 import {
   codes,
   deviceIn,
@@ -11,7 +12,6 @@ import {
   pieceIn,
   portIn,
   straight,
-  tried,
   unitIn,
   use,
   withAerial,

@@ -11,6 +11,7 @@ import {
 import type { Hookup } from '@coaxwain/shelf'
 import { describe, expect, it } from 'vitest'
 import type { FindingCode } from './finding'
+import { tried } from '@coaxwain/shelf/rig'
 import {
   codes,
   deviceIn,
@@ -20,7 +21,6 @@ import {
   pieceIn,
   portIn,
   straight,
-  tried,
   unitIn,
   use,
   withAerial,

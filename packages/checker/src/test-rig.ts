@@ -9,10 +9,20 @@ import type {
   Snapshot,
   Unit,
 } from '@coaxwain/shelf'
+import {
+  AERIAL,
+  asked,
+  LOOP,
+  MODULATOR,
+  PIECES,
+  PLAYER,
+  SET,
+  SWITCH,
+  tried,
+} from '@coaxwain/shelf/rig'
 import type { Circuit, PictureSignal } from '@coaxwain/signal'
 import { checkHookup, RULES } from './check-hookup'
 import type { FindingCode } from './finding'
-import { AERIAL, LOOP, MODULATOR, PIECES, PLAYER, SET, SWITCH } from './test-models'
 
 /** Whole hookups for the tests beside this file: right as they stand, and built anew by every call. */
 
@@ -69,29 +79,6 @@ export const functionIn = (rig: Rig, uid: string, key: string) =>
   find(deviceIn(rig, uid).functions, (f) => f.key === key)
 
 // ---------------------------------------------------------------- units, links, claims
-
-/** A thing in working order, with every socket and function tried. */
-export function tried(uid: string, model: Model, quantity = 1): Unit {
-  const works = 'works' as const
-  const isDevice = model.type === 'device'
-  return {
-    uid,
-    model: uid,
-    quantity,
-    working: works,
-    holding: 'kept',
-    place: null,
-    forms: isDevice
-      ? model.jacks.flatMap((j) =>
-          j.contacts.map(({ port }) => ({ jack: j.key, port, state: works })),
-        )
-      : [],
-    functions: isDevice ? model.functions.map((f) => ({ function: f.key, state: works })) : [],
-    modifications: [],
-    stands: {},
-    remotePresent: true,
-  }
-}
 
 export const use = (model: string, plug = 0, copy = 1): PieceUse => ({
   model,
@@ -171,16 +158,7 @@ function rigOf(devices: Readonly<Record<string, DeviceModel>>, parts: Parts): Ri
       ...Object.entries(devices).map(([uid, model]) => tried(uid, model)),
       ...Object.entries(PIECES).map(([uid, model]) => tried(uid, model, 5)),
     ],
-    question: {
-      format: 1,
-      source: { unit: 'player', playing: 'play' },
-      material: { protection: 'none' },
-      display: { unit: 'set' },
-      demands: {},
-      avoid: [],
-      offAir: [],
-      assumedLeads: [],
-    },
+    question: asked(),
     hookup: {
       ...parts,
       sound: { sound: parts.sound, from: 'set' },

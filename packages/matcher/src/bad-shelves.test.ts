@@ -19,10 +19,9 @@ import {
 } from '@coaxwain/models/build'
 import { LIMITS } from '@coaxwain/shelf'
 import { describe, expect, it } from 'vitest'
-import { AERIAL, LOOP, MODULATOR, PIECES, PLAYER, SET } from '../../checker/src/test-models'
-import { tried } from '../../checker/src/test-rig'
+import { asked, AERIAL, LOOP, MODULATOR, PIECES, PLAYER, SET, tried } from '@coaxwain/shelf/rig'
 import { checkHookup } from '@coaxwain/checker'
-import { asked, searched, shelfOf, ways } from './test-rig'
+import { searched, shelfOf, ways } from './test-rig'
 
 /** Shelves that nobody should have: each gets a clear answer after bounded work, counted in steps. */
 

@@ -5,16 +5,9 @@ import { Shopping, type Parts } from './reasons/purchases'
 import { buildHookup } from './result/build'
 import { choose, withSound } from './result/rank'
 import { Solver } from './search/solve'
+import type { Stepwise } from './stepwise'
 
-export interface HookupSearch {
-  /** Goes on for so many small steps. */
-  step(steps: number): void
-  readonly done: boolean
-  /** Labels expanded so far. */
-  readonly work: number
-  /** The answer as far as it is known. */
-  best(): Answer
-}
+export type HookupSearch = Stepwise<Answer>
 
 export interface SearchOptions {
   /** Label expansions, for the shelf and, unless that is more than they may have, for purchases apart. */

@@ -17,9 +17,18 @@ import {
 } from '@coaxwain/models/build'
 import type { Snapshot, TestState, Unit } from '@coaxwain/shelf'
 import { describe, expect, it } from 'vitest'
-import { AERIAL, LOOP, MODULATOR, PIECES, PLAYER, SET, SWITCH } from '../../checker/src/test-models'
-import { tried } from '../../checker/src/test-rig'
-import { asked, searched, shelfOf, ways } from './test-rig'
+import {
+  asked,
+  AERIAL,
+  LOOP,
+  MODULATOR,
+  PIECES,
+  PLAYER,
+  SET,
+  SWITCH,
+  tried,
+} from '@coaxwain/shelf/rig'
+import { searched, shelfOf, ways } from './test-rig'
 
 /** Rules of what a hookup is and which are shown, each on the smallest shelf on which it bites. */
 

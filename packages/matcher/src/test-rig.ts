@@ -1,5 +1,6 @@
 import type { Model } from '@coaxwain/models'
 import type { Answer, Question, Snapshot, Unit } from '@coaxwain/shelf'
+import { asked } from '@coaxwain/shelf/rig'
 import { compileShelf, createSearch, type SearchOptions } from './create-search'
 
 /** A shelf on which every model is known by the name of its unit. */
@@ -7,19 +8,6 @@ export const shelfOf = (
   models: Readonly<Record<string, Model>>,
   units: readonly Unit[],
 ): Snapshot => ({ shelfVersion: 1, catalogueVersion: 1, models, units })
-
-/** From the player to the set, and what is different this time. */
-export const asked = (changes: Partial<Question> = {}): Question => ({
-  format: 1,
-  source: { unit: 'player', playing: 'play' },
-  material: { protection: 'none' },
-  display: { unit: 'set' },
-  demands: {},
-  avoid: [],
-  offAir: [],
-  assumedLeads: [],
-  ...changes,
-})
 
 /** More steps than any small shelf may take. */
 const MOST_STEPS = 20_000

@@ -33,15 +33,9 @@ import {
   withoutLeft,
   type Trial,
 } from './trial'
+import type { Stepwise } from '../stepwise'
 
-export interface ProveSearch {
-  /** Goes on for so many small steps. */
-  step(steps: number): void
-  readonly done: boolean
-  readonly work: number
-  /** The answer as far as it is known. */
-  best(): ProveAnswer
-}
+export type ProveSearch = Stepwise<ProveAnswer>
 
 /** How often the search may be run again because units or pieces ran short. */
 const MOST_ROUNDS = 6

@@ -21,15 +21,9 @@ import { allChains, type IsWorthwhile } from './chains'
 import { Endings, type Known } from './endings'
 import { leastTogether } from './footprint'
 import { alone, merges, type Merged, type Timing } from './merge'
+import type { Stepwise } from '../stepwise'
 
-export interface ArrangementSearch {
-  /** Goes on for so many small steps. */
-  step(steps: number): void
-  readonly done: boolean
-  readonly work: number
-  /** The answer as far as it is known. */
-  best(): ArrangementAnswer
-}
+export type ArrangementSearch = Stepwise<ArrangementAnswer>
 
 /** Wirings of the first uses that are tried with the next one. */
 const MOST_KEPT = 200
